@@ -1,0 +1,28 @@
+import type { Neck } from "#app/domain/music/neck.ts";
+
+/** One way to play a song, in order of preference. `guitars: null` means any guitar it is playable on. */
+export type SongNeck = Neck & {
+  id: string;
+  guitars: string[] | null;
+  /** Seconds that choosing this way counts as (0 for the first choice). */
+  penalty: number;
+};
+
+/** A song of an act's repertoire. `key` is as tonal names it ("G", "F#m", "Bb"), or "" where unknown. */
+export type Song = {
+  id: string;
+  title: string;
+  credit: string;
+  /** Length in seconds. */
+  seconds: number;
+  key: string;
+  /** Beats a minute, or null. */
+  tempo: number | null;
+  notes: string;
+  firstLine: string;
+  /** Seconds of talk that introduces the song; null: the gig's. */
+  cover: number | null;
+  necks: SongNeck[];
+  /** True where the song was deleted from the library but still stands in a set. */
+  deleted: boolean;
+};
