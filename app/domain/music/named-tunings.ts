@@ -66,6 +66,7 @@ export const guitarTunings: readonly NamedTuning[] = [
   { name: "open C", also: ["open c major"], open: [36, 43, 48, 55, 60, 64], source: darling },
   {
     name: "C6",
+    plainWord: true,
     also: ["open c6"],
     open: [36, 45, 48, 55, 60, 64],
     source: "musicradar.com, Thoughts on tuning",

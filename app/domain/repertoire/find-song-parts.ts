@@ -1,0 +1,150 @@
+import { readKey } from "#app/domain/music/key.ts";
+import type { Capo } from "#app/domain/music/neck.ts";
+import type { Midi } from "#app/domain/music/pitch.ts";
+import { readCapos } from "#app/domain/music/read-capos.ts";
+import type { AmbiguousString } from "#app/domain/music/tuning.ts";
+import { endsApart, findTuning, type LineReader, trimmedEnd } from "#app/domain/repertoire/find-tuning.ts";
+import { readDuration } from "#app/domain/repertoire/read-duration.ts";
+
+/** What may follow a title on a pasted line; each at most once. */
+export type SongParts = {
+  seconds?: number;
+  tempo?: number;
+  key?: string;
+  capos?: Capo[];
+  tuning?: { open: Midi[]; ambiguous: AmbiguousString[] };
+};
+
+type Found = { rest: string; parts: SongParts } | { rest: string; problem: string };
+
+/** What a line's end was found to say, and the text before it. */
+export type PartsReading = { rest: string; parts: SongParts; problem?: string };
+
+const clockLike = /(?:\d ?[:′'’] ?\d{2}|\d ?['′’]|\d ?(?:h|m|min|s|sec)\b\.?)/;
+
+function findDuration(text: string, apart: boolean): Found | null {
+  const words = [...text.matchAll(/(?:^|(?<=[\s,;|/(–—-]))[~\d]/gu)].map((match) => match.index).slice(-6);
+  for (const start of words) {
+    const tail = text.slice(start);
+    const before = text.slice(0, start);
+    const stands = start === 0 ? apart : endsApart(before);
+    if (/^\d+$/.test(tail) || !(stands || (clockLike.test(tail) && !/\d\.\d/.test(tail)))) continue;
+    const reading = readDuration(tail);
+    if (reading.ok) return { rest: trimmedEnd(before), parts: { seconds: reading.seconds } };
+  }
+  return null;
+}
+
+function findTempo(text: string): Found | null {
+  const match = /(?:^|[\s,;|/(–—-])(?:[♩q] ?= ?)?(\d{2,3})(?: ?bpm)$/iu.exec(text);
+  if (!match) return null;
+  const tempo = Number(match[1]);
+  return tempo >= 20 && tempo <= 400
+    ? { rest: trimmedEnd(text.slice(0, match.index)), parts: { tempo } }
+    : null;
+}
+
+function findCapos(text: string, apart: boolean, reader: LineReader): Found | null {
+  const strings = reader.usual.length;
+  const digits = /(?:^|[\s,;|/–—-])(\d{4,12})$/u.exec(text);
+  if (digits?.[1]?.length === strings && /^0.*[1-9]/.test(digits[1]) && strings >= 5) {
+    const reading = readCapos(digits[1], strings);
+    if (reading.ok) return { rest: trimmedEnd(text.slice(0, digits.index)), parts: { capos: reading.capos } };
+  }
+  const starts = [...text.matchAll(/(?<![\p{L}\d])(?:partial capo|no capo|capos?(?![\p{L}])|cap\.|c\d)/giu)];
+  for (const match of starts) {
+    const before = text.slice(0, match.index);
+    if (/(?:\bda\s|partial\s)$/i.test(before) || /^C\d/.test(match[0])) continue;
+    const stands = match.index === 0 ? apart : endsApart(before);
+    const tail = text.slice(match.index);
+    const reading = readCapos(tail, strings);
+    if (reading.ok && (reading.capos.length > 0 || /^no capo$/i.test(tail))) {
+      return { rest: trimmedEnd(before), parts: { capos: reading.capos } };
+    }
+    if (!reading.ok && (stands || /^(?:partial )?capo ?\d/i.test(tail)) && !/[:]\d|[A-Z]{2}/.test(tail)) {
+      return { rest: trimmedEnd(before), problem: reading.message };
+    }
+  }
+  return null;
+}
+
+/** Whether a text is a key and nothing that a word might be ("Do", "Mi" to those who write letters). */
+export function readWholeKey(text: string, reader: LineReader): string | null {
+  if (text.length > 20 || (reader.naming !== "fixed-do" && /^(?:do|re|mi|fa|so|la|si|ti|ut)/i.test(text)))
+    return null;
+  const reading = readKey(text.replace(/^(?:in )?(?:the )?key(?: of)?:? ?/i, ""), reader.naming);
+  return reading.ok && reading.key !== "" ? reading.key : null;
+}
+
+function findKey(text: string, apart: boolean, reader: LineReader): Found | null {
+  const named =
+    /(?:^|[\s,;|/–—-])((?:in (?:the )?)?key(?: of|:)? ?\S+(?: ?(?:major|minor|maj|min|m|dur|moll))?)$/iu.exec(
+      text,
+    );
+  if (named?.[1]) {
+    const key = readWholeKey(named[1], reader);
+    if (key) return { rest: trimmedEnd(text.slice(0, named.index)), parts: { key } };
+  }
+  const last = /(?:^|[\s,;|/–—-])(\S+(?: (?:major|minor|maj|min|dur|moll))?)$/iu.exec(text);
+  if (!last?.[1]) return null;
+  const key = readWholeKey(last[1], reader);
+  const before = trimmedEnd(text.slice(0, last.index));
+  if (!key || !/^\p{Lu}/u.test(last[1])) return null;
+  const sandwiched = before === "" ? apart : findOne(before, false, reader, ["key"]) !== null;
+  return sandwiched ? { rest: before, parts: { key } } : null;
+}
+
+function findInBrackets(text: string, reader: LineReader): Found | null {
+  const match = /[([]([^()[\]]+)[)\]]$/u.exec(text);
+  if (!match?.[1]) return null;
+  const inner = match[1].trim();
+  const rest = trimmedEnd(text.slice(0, match.index));
+  if (rest === "") return null;
+  const key = readWholeKey(inner, reader);
+  if (key) return { rest, parts: { key } };
+  const reading = findParts(inner, true, reader);
+  if (reading.problem) return { rest, problem: reading.problem };
+  return reading.rest === "" ? { rest, parts: reading.parts } : null;
+}
+
+type Kind = keyof SongParts;
+
+function findOne(text: string, apart: boolean, reader: LineReader, without: readonly Kind[]): Found | null {
+  const bracketed = findInBrackets(text, reader);
+  if (bracketed) return bracketed;
+  const wanted = (kind: Kind) => !without.includes(kind);
+  const tuning = wanted("tuning") ? findTuning(text, apart, reader) : null;
+  const found =
+    (wanted("seconds") ? findDuration(text, apart) : null) ??
+    (wanted("tempo") ? findTempo(text) : null) ??
+    (wanted("capos") ? findCapos(text, apart, reader) : null);
+  if (found) return found;
+  if (tuning) {
+    const { rest } = tuning;
+    return "problem" in tuning
+      ? { rest, problem: tuning.problem }
+      : { rest, parts: { tuning: { open: tuning.open, ambiguous: tuning.ambiguous } } };
+  }
+  return wanted("key") ? findKey(text, apart, reader) : null;
+}
+
+/**
+ * Takes length, tempo, key, capos and tuning off the end of a text, in whatever order they stand, each once. What is
+ * no such part stays in `rest`: the title. `whole` says that the text is a field of its own that may be used up; else
+ * the last words stay as the title.
+ * @example findParts("Low Meadow DADGBE capo 2 3:15", false, reader)
+ * // { rest: "Low Meadow", parts: { seconds: 195, capos: […], tuning: … } }
+ */
+export function findParts(text: string, whole: boolean, reader: LineReader): PartsReading {
+  let rest = text.trim();
+  let parts: SongParts = {};
+  while (rest !== "") {
+    const found = findOne(rest, whole, reader, Object.keys(parts) as Kind[]);
+    if (!found || (found.rest === "" && !whole)) break;
+    if ("problem" in found) return { rest: found.rest, parts, problem: found.problem };
+    if (Object.keys(found.parts).some((kind) => kind in parts)) break;
+    parts = { ...parts, ...found.parts };
+    rest = found.rest;
+  }
+  return { rest, parts };
+}
