@@ -41,6 +41,7 @@ const guitars = [
   route("capos/new", "routes/capos/new.tsx"),
   route("capos/:capoId", "routes/capos/show.tsx"),
   route("capos/:capoId/delete", "routes/capos/delete.tsx"),
+  route("capos/:capoId/restore", "routes/capos/restore.tsx"),
 ];
 
 const gigs = [
