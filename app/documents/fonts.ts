@@ -11,9 +11,20 @@ const require = createRequire(import.meta.url);
  * renderer reads .woff, not .woff2.
  */
 const faces = [
-  { family: "Barlow Condensed", file: (weight: Weight) => `@fontsource/barlow-condensed/files/barlow-condensed-latin-${weight}-normal.woff` },
-  { family: "Barlow Condensed Ext", file: (weight: Weight) => `@fontsource/barlow-condensed/files/barlow-condensed-latin-ext-${weight}-normal.woff` },
-  { family: "Noto Sans Math", file: () => "@fontsource/noto-sans-math/files/noto-sans-math-latin-400-normal.woff" },
+  {
+    family: "Barlow Condensed",
+    file: (weight: Weight) =>
+      `@fontsource/barlow-condensed/files/barlow-condensed-latin-${weight}-normal.woff`,
+  },
+  {
+    family: "Barlow Condensed Ext",
+    file: (weight: Weight) =>
+      `@fontsource/barlow-condensed/files/barlow-condensed-latin-ext-${weight}-normal.woff`,
+  },
+  {
+    family: "Noto Sans Math",
+    file: () => "@fontsource/noto-sans-math/files/noto-sans-math-latin-400-normal.woff",
+  },
 ];
 
 /** The font list that every text of a sheet is set in. */

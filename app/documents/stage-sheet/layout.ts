@@ -2,7 +2,7 @@ import { textWidth } from "#app/documents/fonts.ts";
 import { readingDistance } from "#app/documents/legibility.ts";
 import { margin, type Paper, paperSizes } from "#app/documents/paper.ts";
 import type { Mark, SheetPage } from "./marks.ts";
-import { type Columns, columnsFor, layoutRow, type RowLayout } from "./row-layout.ts";
+import { columnsFor, layoutRow, type RowLayout } from "./row-layout.ts";
 import type { SheetRow, SheetSet, StageSheet } from "./sheet.ts";
 
 export type SheetOptions = {
@@ -28,14 +28,15 @@ function frameFor(set: SheetSet, paper: Paper): Frame {
   for (const part of set.doors.split(" | ")) {
     const last = doors.at(-1);
     const longer = last === undefined ? part : `${last} | ${part}`;
-    if (last !== undefined && textWidth(longer, 500) * doorsSize <= width - 2 * margin) doors[doors.length - 1] = longer;
+    if (last !== undefined && textWidth(longer, 500) * doorsSize <= width - 2 * margin)
+      doors[doors.length - 1] = longer;
     else doors.push(part);
   }
   const top = margin + headSize * 1.1 + doors.length * doorsSize * 1.25 + 5;
   return { width, height, top, bottom: height - margin - footSize * 1.6, doors };
 }
 
-type Cut = { size: number; columns: Columns; pages: { rows: SheetRow[]; layouts: RowLayout[] }[] };
+type Cut = { size: number; smallest: number; pages: { rows: SheetRow[]; layouts: RowLayout[] }[] };
 
 /** Rows on pages at one size: never inside a song, at the encore or before a song that needs no work where one is near. */
 function cut(rows: SheetRow[], size: number, frame: Frame): Cut | null {
@@ -57,7 +58,7 @@ function cut(rows: SheetRow[], size: number, frame: Frame): Cut | null {
     pages.push({ rows: rows.slice(start, end), layouts: layouts.slice(start, end) });
     start = end;
   }
-  return { size, columns, pages };
+  return { size, smallest: Math.min(...layouts.map((layout) => layout.smallest)), pages };
 }
 
 /** The best row to start the next page with, among the last few that fit: an encore, else one without work before it. */
@@ -67,13 +68,14 @@ function quietBreak(rows: SheetRow[], start: number, end: number): number {
   return candidates.find((row) => rows[row]?.encore) ?? candidates.find(quiet) ?? end;
 }
 
-/** The largest type that needs no more than so many pages. */
+/** The cut into no more than so many pages whose smallest type is largest. */
 function largest(rows: SheetRow[], frame: Frame, pages: number): Cut | null {
-  for (let size = largestSize; size >= smallestSize; size -= 0.5) {
+  let best: Cut | null = null;
+  for (let size = largestSize; size >= Math.max(smallestSize, best?.smallest ?? 0); size -= 0.5) {
     const found = cut(rows, size, frame);
-    if (found && found.pages.length <= pages) return found;
+    if (found && found.pages.length <= pages && found.smallest > (best?.smallest ?? 0)) best = found;
   }
-  return null;
+  return best;
 }
 
 function cutSet(rows: SheetRow[], frame: Frame): Cut {
@@ -90,7 +92,15 @@ function distanceWords(smallest: number): string {
 }
 
 /** Text of the head and foot lines. */
-function small(text: string, x: number, y: number, width: number, size: number, align: "left" | "right" | "center", weight: 500 | 600 = 500): Mark {
+function small(
+  text: string,
+  x: number,
+  y: number,
+  width: number,
+  size: number,
+  align: "left" | "right" | "center",
+  weight: 500 | 600 = 500,
+): Mark {
   return { kind: "text", role: "small", text, x, y, width, size, weight, align, inverted: false };
 }
 
@@ -100,16 +110,35 @@ function fitted(text: string, width: number, size: number, weight: 500 | 600): n
 
 function head(sheet: StageSheet, set: SheetSet, frame: Frame, again: boolean): Mark[] {
   const inner = frame.width - 2 * margin;
-  const right = [sheet.date, again ? `${set.heading} continued`.trim() : set.heading].filter(Boolean).join("  ");
+  const right = [sheet.date, again ? `${set.heading} continued`.trim() : set.heading]
+    .filter(Boolean)
+    .join("  ");
   const rightWidth = textWidth(right, 600) * headSize;
   const titleWidth = inner - rightWidth - headSize;
   const baseline = margin + headSize * 0.8;
   const marks: Mark[] = [
-    small(sheet.title, margin, baseline, titleWidth, fitted(sheet.title, titleWidth, headSize, 600), "left", 600),
+    small(
+      sheet.title,
+      margin,
+      baseline,
+      titleWidth,
+      fitted(sheet.title, titleWidth, headSize, 600),
+      "left",
+      600,
+    ),
     small(right, margin + inner - rightWidth - 2, baseline, rightWidth + 2, headSize, "right", 600),
   ];
   frame.doors.forEach((line, index) => {
-    marks.push(small(line, margin, baseline + 4 + (index + 1) * doorsSize * 1.25, inner, fitted(line, inner, doorsSize, 500), "left"));
+    marks.push(
+      small(
+        line,
+        margin,
+        baseline + 4 + (index + 1) * doorsSize * 1.25,
+        inner,
+        fitted(line, inner, doorsSize, 500),
+        "left",
+      ),
+    );
   });
   marks.push({ kind: "rule", x: margin, y: frame.top - 2, width: inner, thickness: 2 });
   return marks;
@@ -121,7 +150,9 @@ function foot(texts: [string, string, string], frame: Frame): Mark[] {
   const third = inner / 3;
   const aligns = ["left", "center", "right"] as const;
   const size = Math.min(...texts.map((text) => fitted(text, third - 4, footSize, 500)));
-  return texts.map((text, index) => small(text, margin + third * index, baseline, third, size, aligns[index] ?? "left"));
+  return texts.map((text, index) =>
+    small(text, margin + third * index, baseline, third, size, aligns[index] ?? "left"),
+  );
 }
 
 /** An empty set's page says so. */
@@ -131,7 +162,18 @@ function emptyPage(sheet: StageSheet, set: SheetSet, frame: Frame, options: Shee
     smallest: 24,
     marks: [
       ...head(sheet, set, frame, false),
-      { kind: "text", role: "title", text: message, x: margin, y: frame.top + 50, width: frame.width - 2 * margin, size: 24, weight: 600, align: "left", inverted: false },
+      {
+        kind: "text",
+        role: "title",
+        text: message,
+        x: margin,
+        y: frame.top + 50,
+        width: frame.width - 2 * margin,
+        size: 24,
+        weight: 600,
+        align: "left",
+        inverted: false,
+      },
       ...foot(["", set.time, `${options.version}, printed ${options.printed}`], frame),
     ],
   };

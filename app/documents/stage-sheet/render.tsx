@@ -41,23 +41,57 @@ function Drawn({ mark }: { mark: Mark }) {
         </Text>
       );
     case "rule":
-      return <View style={[styles.at, { left: mark.x, top: mark.y - mark.thickness / 2, width: mark.width, height: mark.thickness, backgroundColor: ink }]} />;
+      return (
+        <View
+          style={[
+            styles.at,
+            {
+              left: mark.x,
+              top: mark.y - mark.thickness / 2,
+              width: mark.width,
+              height: mark.thickness,
+              backgroundColor: ink,
+            },
+          ]}
+        />
+      );
     case "cell":
-      return <View style={[styles.at, { left: mark.x, top: mark.y, width: mark.width, height: mark.height, backgroundColor: ink }]} />;
+      return (
+        <View
+          style={[
+            styles.at,
+            { left: mark.x, top: mark.y, width: mark.width, height: mark.height, backgroundColor: ink },
+          ]}
+        />
+      );
     case "badge":
       return (
-        <Svg style={[styles.at, { left: mark.x, top: mark.y, width: mark.width, height: mark.height }]} viewBox={`0 0 ${mark.width} ${mark.height}`}>
+        <Svg
+          style={[styles.at, { left: mark.x, top: mark.y, width: mark.width, height: mark.height }]}
+          viewBox={`0 0 ${mark.width} ${mark.height}`}
+        >
           <Path d={badgePath(mark.shape, mark.width, mark.height)} fill={ink} />
           {mark.shape === "double" ? (
-            <Path d={badgePath("double", mark.width, mark.height, mark.height * 0.08)} fill="none" stroke={white} strokeWidth={mark.height * 0.04} />
+            <Path
+              d={badgePath("double", mark.width, mark.height, mark.height * 0.08)}
+              fill="none"
+              stroke={white}
+              strokeWidth={mark.height * 0.04}
+            />
           ) : null}
         </Svg>
       );
     case "triangle": {
       const { size } = mark;
-      const path = mark.direction === "up" ? `M0 ${size}L${size / 2} 0L${size} ${size}Z` : `M0 0L${size / 2} ${size}L${size} 0Z`;
+      const path =
+        mark.direction === "up"
+          ? `M0 ${size}L${size / 2} 0L${size} ${size}Z`
+          : `M0 0L${size / 2} ${size}L${size} 0Z`;
       return (
-        <Svg style={[styles.at, { left: mark.x, top: mark.y - size / 2, width: size, height: size }]} viewBox={`0 0 ${size} ${size}`}>
+        <Svg
+          style={[styles.at, { left: mark.x, top: mark.y - size / 2, width: size, height: size }]}
+          viewBox={`0 0 ${size} ${size}`}
+        >
           <Path d={path} fill={mark.inverted ? white : ink} />
         </Svg>
       );
@@ -69,12 +103,25 @@ function Drawn({ mark }: { mark: Mark }) {
  * The stage sheet as PDF bytes. Same sheet, options and `at` give the same pages; `at` (when it is printed) also goes
  * into the file's metadata.
  */
-export async function renderStageSheet(sheet: StageSheet, options: SheetOptions, author: string, at: Date): Promise<Buffer> {
+export async function renderStageSheet(
+  sheet: StageSheet,
+  options: SheetOptions,
+  author: string,
+  at: Date,
+): Promise<Buffer> {
   registerFonts();
   const pages = layoutStageSheet(sheet, options);
   const { width, height } = paperSizes[options.paper];
   return renderToBuffer(
-    <Document title={`Stage sheet, ${sheet.title}`} author={author} language="en" creator="Stillpeg" producer="Stillpeg" creationDate={at} modificationDate={at}>
+    <Document
+      title={`Stage sheet, ${sheet.title}`}
+      author={author}
+      language="en"
+      creator="Stillpeg"
+      producer="Stillpeg"
+      creationDate={at}
+      modificationDate={at}
+    >
       {pages.map((page, index) => (
         // biome-ignore lint/suspicious/noArrayIndexKey: pages are known by their place
         <Page key={index} size={[width, height]} style={styles.page}>

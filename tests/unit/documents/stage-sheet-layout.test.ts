@@ -37,7 +37,12 @@ const texts = (page: SheetPage) => page.marks.filter((mark): mark is TextMark =>
 function ink(mark: TextMark) {
   const wide = textWidth(mark.text, mark.weight) * mark.size;
   const slack = { left: 0, center: (mark.width - wide) / 2, right: mark.width - wide }[mark.align];
-  return { left: mark.x + slack, right: mark.x + slack + wide, top: mark.y - 0.75 * mark.size, bottom: mark.y + 0.2 * mark.size };
+  return {
+    left: mark.x + slack,
+    right: mark.x + slack + wide,
+    top: mark.y - 0.75 * mark.size,
+    bottom: mark.y + 0.2 * mark.size,
+  };
 }
 
 function overlaps(page: SheetPage): string[] {
@@ -45,7 +50,12 @@ function overlaps(page: SheetPage): string[] {
   const found: string[] = [];
   boxes.forEach((a, index) => {
     for (const b of boxes.slice(index + 1)) {
-      if (a.left < b.right - 0.5 && b.left < a.right - 0.5 && a.top < b.bottom - 0.5 && b.top < a.bottom - 0.5) {
+      if (
+        a.left < b.right - 0.5 &&
+        b.left < a.right - 0.5 &&
+        a.top < b.bottom - 0.5 &&
+        b.top < a.bottom - 0.5
+      ) {
         found.push(`${a.text} over ${b.text}`);
       }
     }
@@ -53,11 +63,15 @@ function overlaps(page: SheetPage): string[] {
   return found;
 }
 
-const long = "The Long Slow Walk Home Along the Canal Towpath After the Last Bus Has Gone and the Rain Has Come On Again";
+const long =
+  "The Long Slow Walk Home Along the Canal Towpath After the Last Bus Has Gone and the Rain Has Come On Again";
 const shapes: [string, (number: number) => SheetRow][] = [
   ["short titles", (number) => row(number)],
   ["long titles", (number) => row(number, { title: long })],
-  ["one unbroken word", (number) => row(number, { title: "Llanfairpwllgwyngyllgogerychwyrndrobwllllantysiliogogogoch" })],
+  [
+    "one unbroken word",
+    (number) => row(number, { title: "Llanfairpwllgwyngyllgogerychwyrndrobwllllantysiliogogogoch" }),
+  ],
   [
     "everything at once",
     (number) =>
@@ -69,7 +83,10 @@ const shapes: [string, (number: number) => SheetRow][] = [
         tuning: ["Sol♯", "Re♭", "Mi", "Fa", "Si♭", "La"].map((letter) => ({ letter, turned: "up" })),
       }),
   ],
-  ["twelve strings", (number) => row(number, { tuning: [..."EEAADDGGBBEE"].map((letter) => ({ letter, turned: "up" })) })],
+  [
+    "twelve strings",
+    (number) => row(number, { tuning: [..."EEAADDGGBBEE"].map((letter) => ({ letter, turned: "up" })) }),
+  ],
 ];
 
 describe.each(["a4", "letter"] as const)("on %s", (paper) => {
@@ -78,7 +95,11 @@ describe.each(["a4", "letter"] as const)("on %s", (paper) => {
       const rows = Array.from({ length: count }, (__, index) => make(index + 1));
       const pages = layoutStageSheet(sheet(rows), { ...options, paper });
       const { width, height } = paperSizes[paper];
-      const numbers = pages.flatMap((page) => texts(page).filter((mark) => mark.role === "number").map((mark) => Number(mark.text)));
+      const numbers = pages.flatMap((page) =>
+        texts(page)
+          .filter((mark) => mark.role === "number")
+          .map((mark) => Number(mark.text)),
+      );
       expect(numbers).toEqual(rows.map((each) => each.number));
       for (const page of pages) {
         expect(overlaps(page)).toEqual([]);
@@ -88,9 +109,13 @@ describe.each(["a4", "letter"] as const)("on %s", (paper) => {
           expect(box.right, mark.text).toBeLessThanOrEqual(width - margin + 1);
           expect(box.bottom, mark.text).toBeLessThanOrEqual(height - margin + 4);
         }
-        const sizes = texts(page).filter((mark) => ["title", "tuning", "capo", "action"].includes(mark.role)).map((mark) => mark.size);
+        const sizes = texts(page)
+          .filter((mark) => ["title", "tuning", "capo", "action"].includes(mark.role))
+          .map((mark) => mark.size);
         expect(page.smallest).toBeCloseTo(Math.min(...sizes), 6);
-        const stated = texts(page).find((mark) => mark.text.startsWith("Reads at"))?.text.match(/Reads at ([\d.]+) m/)?.[1];
+        const stated = texts(page)
+          .find((mark) => mark.text.startsWith("Reads at"))
+          ?.text.match(/Reads at ([\d.]+) m/)?.[1];
         const real = readingDistance(Math.min(...sizes));
         expect(Number(stated)).toBeLessThanOrEqual(real + 1e-9);
         expect(Number(stated)).toBeGreaterThan(real - 0.1);
@@ -110,7 +135,10 @@ describe("as large as fits", () => {
 
   test("songs that need no work before them take one line, so that the type grows", () => {
     const busy = layoutStageSheet(sheet(Array.from({ length: 14 }, (_, index) => row(index + 1))), options);
-    const calm = layoutStageSheet(sheet(Array.from({ length: 14 }, (_, index) => row(index + 1, { action: "" }))), options);
+    const calm = layoutStageSheet(
+      sheet(Array.from({ length: 14 }, (_, index) => row(index + 1, { action: "" }))),
+      options,
+    );
     expect(calm[0]?.smallest).toBeGreaterThan(busy[0]?.smallest ?? 0);
   });
 
@@ -119,6 +147,8 @@ describe("as large as fits", () => {
     two.sets.push({ heading: "Set 2 of 2", doors: "", time: "", rows: [] });
     const pages = layoutStageSheet(two, options);
     expect(pages).toHaveLength(2);
-    expect(texts(pages[1] as SheetPage).some((mark) => mark.text.startsWith("No songs in this set yet"))).toBe(true);
+    expect(
+      texts(pages[1] as SheetPage).some((mark) => mark.text.startsWith("No songs in this set yet")),
+    ).toBe(true);
   });
 });
