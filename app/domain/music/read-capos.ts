@@ -4,8 +4,22 @@ import type { Capo } from "#app/domain/music/neck.ts";
 export type CaposReading = { ok: true; capos: Capo[] } | { ok: false; message: string; part: string };
 
 const romans = ["i", "ii", "iii", "iv", "v", "vi", "vii", "viii", "ix", "x", "xi", "xii"];
+const numberWords = [
+  "one",
+  "two",
+  "three",
+  "four",
+  "five",
+  "six",
+  "seven",
+  "eight",
+  "nine",
+  "ten",
+  "eleven",
+  "twelve",
+];
 const none = /^(?:no capos?|none|0|capo 0|without(?: capo)?|open|-)?$/i;
-const fretPart = "(?:(?:on|at) )?(?:the )?(?:fret )?(?<fret>\\d{1,2}|[ivx]{1,4})(?:st|nd|rd|th)?(?: fret)?";
+const fretPart = `(?:(?:on|at) )?(?:the )?(?:fret )?(?<fret>\\d{1,2}|[ivx]{1,4}|${numberWords.join("|")})(?:st|nd|rd|th)?(?: fret)?`;
 const coverPart = "(?<cover>(?:on|over|across|covers?|covering|strings?)[ :]*)";
 const leavePart = "(?<leave>(?:leaves?|leaving|without|except|but|not|free|minus)[ :]*)";
 const onePattern = new RegExp(
@@ -82,8 +96,8 @@ function readCapo(part: string, strings: number): CaposReading {
   const match = onePattern.exec(tidy);
   const groups = match?.groups;
   if (!groups?.fret) return { ok: false, part, message: `"${part}" is no capo that can be read. ${how}` };
-  const roman = romans.indexOf(groups.fret.toLowerCase()) + 1;
-  const fret = roman || Number(groups.fret);
+  const fretWord = groups.fret.toLowerCase();
+  const fret = Math.max(romans.indexOf(fretWord), numberWords.indexOf(fretWord)) + 1 || Number(groups.fret);
   if (!(fret >= 1 && fret <= highestCapoFret)) return beyond(groups.fret);
   const list = (groups.list ?? "").trim();
   const all = allStrings(strings);

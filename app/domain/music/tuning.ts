@@ -71,6 +71,8 @@ export function readTuning(text: string, options: ReadTuningOptions): TuningRead
   if (typed.length > longestTuning) {
     return refuse(`${typed.slice(0, 20)}…`, "This is too long for a tuning. Write one note for each string.");
   }
+  const remark = /^([^()[\]]+?)\s*[([]([^()[\]]+)$/u.exec(typed);
+  if (remark) return readWithRemark(remark[1]!, remark[2]!, options);
   const { shift, rest } = readTuningShift(typed);
   const move = (open: readonly Midi[]) => open.map((midi) => midi + shift);
   if (rest === "") return understood(options, [move(usual)]);
@@ -92,6 +94,15 @@ export function readTuning(text: string, options: ReadTuningOptions): TuningRead
 
 function refuse(part: string, message: string): TuningReading {
   return { ok: false, part, message };
+}
+
+/** A name with its letters behind it in brackets, or the other way round: "drop D (DADGBE)". */
+function readWithRemark(text: string, remark: string, options: ReadTuningOptions): TuningReading {
+  const first = readTuning(text, options);
+  const second = readTuning(remark, options);
+  if (!first.ok || !second.ok) return second.ok ? second : first;
+  if (first.open.join() === second.open.join()) return second.ambiguous.length > 0 ? first : second;
+  return refuse(remark, `"${text}" and "${remark}" are two tunings. Write one of them.`);
 }
 
 function cleaned(text: string): string {

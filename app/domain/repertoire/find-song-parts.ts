@@ -3,7 +3,13 @@ import type { Capo } from "#app/domain/music/neck.ts";
 import type { Midi } from "#app/domain/music/pitch.ts";
 import { readCapos } from "#app/domain/music/read-capos.ts";
 import type { AmbiguousString } from "#app/domain/music/tuning.ts";
-import { endsApart, findTuning, type LineReader, trimmedEnd } from "#app/domain/repertoire/find-tuning.ts";
+import {
+  endsApart,
+  findTuning,
+  type LineReader,
+  type TuningFound,
+  trimmedEnd,
+} from "#app/domain/repertoire/find-tuning.ts";
 import { readDuration } from "#app/domain/repertoire/read-duration.ts";
 
 /** What may follow a title on a pasted line; each at most once. */
@@ -44,24 +50,37 @@ function findTempo(text: string): Found | null {
     : null;
 }
 
-function findCapos(text: string, apart: boolean, reader: LineReader): Found | null {
+function findCapos(text: string, reader: LineReader): Found | null {
   const strings = reader.usual.length;
   const digits = /(?:^|[\s,;|/–—-])(\d{4,12})$/u.exec(text);
   if (digits?.[1]?.length === strings && /^0.*[1-9]/.test(digits[1]) && strings >= 5) {
     const reading = readCapos(digits[1], strings);
     if (reading.ok) return { rest: trimmedEnd(text.slice(0, digits.index)), parts: { capos: reading.capos } };
   }
-  const starts = [...text.matchAll(/(?<![\p{L}\d])(?:partial capo|no capo|capos?(?![\p{L}])|cap\.|c\d)/giu)];
-  for (const match of starts) {
-    const before = text.slice(0, match.index);
-    if (/(?:\bda\s|partial\s)$/i.test(before) || /^C\d/.test(match[0])) continue;
-    const stands = match.index === 0 ? apart : endsApart(before);
-    const tail = text.slice(match.index);
-    const reading = readCapos(tail, strings);
-    if (reading.ok && (reading.capos.length > 0 || /^no capo$/i.test(tail))) {
+  for (const { start, before } of capoStarts(text)) {
+    const reading = readCapos(text.slice(start), strings);
+    if (reading.ok && (reading.capos.length > 0 || /^no capo$/i.test(text.slice(start)))) {
       return { rest: trimmedEnd(before), parts: { capos: reading.capos } };
     }
-    if (!reading.ok && (stands || /^(?:partial )?capo ?\d/i.test(tail)) && !/[:]\d|[A-Z]{2}/.test(tail)) {
+  }
+  return null;
+}
+
+/** Places at which capos may begin: not the "capo" of "da capo", nor a note C2. */
+function capoStarts(text: string): { start: number; before: string }[] {
+  return [...text.matchAll(/(?<![\p{L}\d])(?:partial capo|no capo|capos?(?!\p{L})|c\d)/giu)]
+    .filter((match) => !/^C\d/.test(match[0]))
+    .map((match) => ({ start: match.index, before: text.slice(0, match.index) }))
+    .filter(({ before }) => !/(?:\bda\s|partial\s)$/i.test(before));
+}
+
+/** Words that are meant as capos, with a fret behind them, and cannot be read. */
+function findCapoProblem(text: string, apart: boolean, reader: LineReader): Found | null {
+  for (const { start, before } of capoStarts(text)) {
+    const tail = text.slice(start);
+    const stands = start === 0 ? apart : endsApart(before);
+    const reading = readCapos(tail, reader.usual.length);
+    if (!reading.ok && (stands || /^(?:partial )?capo ?\d/i.test(tail))) {
       return { rest: trimmedEnd(before), problem: reading.message };
     }
   }
@@ -76,22 +95,24 @@ export function readWholeKey(text: string, reader: LineReader): string | null {
   return reading.ok && reading.key !== "" ? reading.key : null;
 }
 
-function findKey(text: string, apart: boolean, reader: LineReader): Found | null {
+/** A key that says that it is one: "key of G", "in the key of F#m". */
+function findNamedKey(text: string, reader: LineReader): Found | null {
   const named =
     /(?:^|[\s,;|/–—-])((?:in (?:the )?)?key(?: of|:)? ?\S+(?: ?(?:major|minor|maj|min|m|dur|moll))?)$/iu.exec(
       text,
     );
-  if (named?.[1]) {
-    const key = readWholeKey(named[1], reader);
-    if (key) return { rest: trimmedEnd(text.slice(0, named.index)), parts: { key } };
-  }
+  const key = named?.[1] ? readWholeKey(named[1], reader) : null;
+  return named && key ? { rest: trimmedEnd(text.slice(0, named.index)), parts: { key } } : null;
+}
+
+/** A bare key: taken only behind another part, since "Vitamin C" and "Where I Am" are titles. */
+function findKey(text: string, apart: boolean, reader: LineReader): Found | null {
   const last = /(?:^|[\s,;|/–—-])(\S+(?: (?:major|minor|maj|min|dur|moll))?)$/iu.exec(text);
-  if (!last?.[1]) return null;
-  const key = readWholeKey(last[1], reader);
+  const key = last?.[1] && /^\p{Lu}/u.test(last[1]) ? readWholeKey(last[1], reader) : null;
+  if (!last || !key) return null;
   const before = trimmedEnd(text.slice(0, last.index));
-  if (!key || !/^\p{Lu}/u.test(last[1])) return null;
-  const sandwiched = before === "" ? apart : findOne(before, false, reader, ["key"]) !== null;
-  return sandwiched ? { rest: before, parts: { key } } : null;
+  const behindPart = before === "" ? apart : findOne(before, false, reader, ["key"]) !== null;
+  return behindPart ? { rest: before, parts: { key } } : null;
 }
 
 function findInBrackets(text: string, reader: LineReader): Found | null {
@@ -113,19 +134,27 @@ function findOne(text: string, apart: boolean, reader: LineReader, without: read
   const bracketed = findInBrackets(text, reader);
   if (bracketed) return bracketed;
   const wanted = (kind: Kind) => !without.includes(kind);
-  const tuning = wanted("tuning") ? findTuning(text, apart, reader) : null;
-  const found =
+  return (
     (wanted("seconds") ? findDuration(text, apart) : null) ??
     (wanted("tempo") ? findTempo(text) : null) ??
-    (wanted("capos") ? findCapos(text, apart, reader) : null);
-  if (found) return found;
-  if (tuning) {
-    const { rest } = tuning;
-    return "problem" in tuning
-      ? { rest, problem: tuning.problem }
-      : { rest, parts: { tuning: { open: tuning.open, ambiguous: tuning.ambiguous } } };
-  }
-  return wanted("key") ? findKey(text, apart, reader) : null;
+    (wanted("key") ? findNamedKey(text, reader) : null) ??
+    (wanted("capos") ? findCapos(text, reader) : null) ??
+    (wanted("tuning") ? tuningPart(findTuning(text, apart, reader)) : null) ??
+    (wanted("key") ? findKey(text, apart, reader) : null) ??
+    (wanted("capos") ? findCapoProblem(text, apart, reader) : null)
+  );
+}
+
+function tuningPart(found: TuningFound | null): Found | null {
+  if (!found || "problem" in found) return found;
+  return { rest: found.rest, parts: { tuning: { open: found.open, ambiguous: found.ambiguous } } };
+}
+
+/** A title without a tuning at its end that says again what was found: "drop D (DADGBE)". */
+function withoutRepeatedTuning(rest: string, parts: SongParts, reader: LineReader): string {
+  const again = parts.tuning ? findTuning(rest, false, reader) : null;
+  const same = again && "open" in again && again.open.join() === parts.tuning?.open.join();
+  return same && again.rest !== "" ? again.rest : rest;
 }
 
 /**
@@ -146,5 +175,5 @@ export function findParts(text: string, whole: boolean, reader: LineReader): Par
     parts = { ...parts, ...found.parts };
     rest = found.rest;
   }
-  return { rest, parts };
+  return { rest: withoutRepeatedTuning(rest, parts, reader), parts };
 }

@@ -15,17 +15,18 @@ export type TuningFound =
 
 /** Words and names that are spelled with the letters A to G alone: in running text they are words before they are notes. */
 const noteWords = new Set(
-  `abba abed aced acedd adage added aged babe bade badge baggage bagged bead beaded bedded beef beefed begged cabbage cabbed
+  `abba abed aced adage added aged babe bade badge baggage bagged bead beaded bedded beef beefed begged cabbage cabbed
   cabbaged cadge cafe caged cage cede ceded accede acceded dabbed dada dead deaf debagged decade deed deeded deface
   defaced edda edge edged efface effaced egged facade face faced fade faded feed feedbag gabbed gabe gaffe gaga gage gagged
   bebe cece dede fagged badged beebee deedee`.split(/\s+/),
 );
-const plainWords = new Set(
-  [...guitarTunings, ...otherTunings]
-    .filter((row) => row.plainWord)
-    .flatMap((row) => [row.name.toLowerCase(), ...row.also])
-    .concat("standard", "usual", "normal", "std", "concert"),
-);
+const tradeNames = [...guitarTunings, ...otherTunings];
+const namesOf = (plain: boolean) =>
+  tradeNames
+    .filter((row) => (row.plainWord === true) === plain)
+    .flatMap((row) => [row.name.toLowerCase(), ...row.also]);
+const plainWords = new Set(["standard", "usual", "normal", "std", "concert", ...namesOf(true)]);
+for (const name of namesOf(false)) plainWords.delete(name);
 const separatorsAtEnd = /[\s,;|/·–—:-]+$/u;
 const mostWords = 14;
 
@@ -60,8 +61,13 @@ function styleOf(text: string, naming: Naming): Style {
     const starts = text.match(/\p{Lu}/gu)?.length ?? 0;
     if (starts >= 4) return "capitals";
   }
-  if (/^(?:[A-H](?:[#♯b♭]|is|es)?\d?){3,}[A-Ha-h]\d?$/u.test(text)) return "capitals";
+  if (/^(?:[A-H](?:[#♯b♭]|is|es)?\d?){3,}[A-Ha-h][#♯b♭]?\d?$/u.test(text)) return "capitals";
   return /^[a-h#♯♭\d]{4,}$/u.test(text) ? "small" : "other";
+}
+
+/** Number of notes where a text is written note by note, else 0. */
+function notesWritten(text: string, naming: Naming): number {
+  return styleOf(text, naming) === "single" ? text.split(/[\s,/–—-]+/u).length : 0;
 }
 
 function isAlphabet(text: string): boolean {
@@ -75,8 +81,9 @@ function meantAsNotes(text: string, before: string, apart: boolean, naming: Nami
   if (style === "other" || isAlphabet(text)) return false;
   if (apart && (style !== "small" || !noteWords.has(text))) return true;
   if (style === "single" || /[#♯♭\d]/u.test(text)) return true;
-  const word = noteWords.has(text.toLowerCase()) && text.toLowerCase() !== "bead";
-  if (style !== "capitals" || word) return false;
+  const word = noteWords.has(text.toLowerCase()) && text !== "BEAD";
+  if (word) return false;
+  if (style === "small") return text.length >= 6 && before.trim() !== "";
   const stands = /\p{Ll}/u.test(before);
   return stands || (text.length >= 6 && before.trim() !== "");
 }
@@ -107,6 +114,7 @@ export function findTuning(text: string, apart: boolean, reader: LineReader): Tu
     const tail = text.slice(start);
     const before = text.slice(0, start);
     const stands = start === 0 ? apart : endsApart(before);
+    if (notesWritten(tail, reader.naming) > reader.usual.length) continue;
     const reading = readTail(tail, before, stands, reader);
     if (reading) return { ...reading, rest: trimmedEnd(before) };
   }

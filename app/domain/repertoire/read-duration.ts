@@ -93,5 +93,6 @@ export function formatDuration(seconds: number): string {
   const sign = seconds < 0 && whole > 0 ? "−" : "";
   const hours = Math.floor(whole / 3600);
   const minutes = Math.floor((whole % 3600) / 60);
-  return sign + (hours > 0 ? `${hours}:${pad(minutes)}` : `${minutes}`) + `:${pad(whole % 60)}`;
+  const upToMinutes = hours > 0 ? `${hours}:${pad(minutes)}` : `${minutes}`;
+  return `${sign}${upToMinutes}:${pad(whole % 60)}`;
 }

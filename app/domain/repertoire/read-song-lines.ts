@@ -36,6 +36,7 @@ export type SongLine = { line: number; raw: string } & (
 );
 
 const longestTitle = 200;
+const longestLine = 500;
 const inQuotes = 'If it belongs to the title, put the title in "quotation marks".';
 const headings =
   /^(?:set|set list|songs?|first set|second set|interval|intermission|break|encores?|set (?:\d+|one|two|three))\s*:?$/i;
@@ -78,6 +79,8 @@ function withoutNumber(raw: string, numbered: boolean): string {
 }
 
 function readLine(text: string, reader: LineReader): PastedSong | string {
+  if (text.length > longestLine)
+    return `This line is longer than ${longestLine} characters. Write one song a line.`;
   const quoted = /^["“„«]([^"“”„«»]+)["“”»](.*)$/u.exec(text);
   const columns = text.split(/\t+|\s\|\s|\s{3,}/).map((column) => column.trim());
   const fields = columns.filter((column) => column !== "" && !/^[-–—]+$/.test(column));
@@ -105,7 +108,10 @@ function readRunning(text: string, reader: LineReader): PastedSong | string {
   return strayPart(reading, reader) ?? song(reading.rest, "", reading.parts, reader);
 }
 
-function readColumns([title, ...fields]: string[], reader: LineReader): PastedSong | string {
+function readColumns(columns: string[], reader: LineReader): PastedSong | string {
+  const counted =
+    columns.length > 2 && /^\d{1,3}[.)]?$/.test(columns[0]!) && readField(columns[1]!, reader) === null;
+  const [title, ...fields] = counted ? columns.slice(1) : columns;
   let parts: SongParts = {};
   let credit = "";
   for (const field of fields) {
@@ -154,12 +160,18 @@ function strayPart({ rest, parts }: PartsReading, reader: LineReader): string | 
       : `${notUnderstood(after, last)} ${inQuotes}`;
   const onlyTime = parts.seconds === undefined && readDuration(rest).ok && /[:'′]/.test(rest);
   if (onlyTime || (parts.capos === undefined && /^capo\s*\d+$/i.test(rest))) return problem(rest, "");
+  if (parts.seconds === undefined && /^\d{1,2}:[0-5]\d\s/.test(rest)) {
+    return `A length stands before the title. Write the title first. ${inQuotes}`;
+  }
   for (let end = words.length - 1; end > 1; end -= 1) {
     const before = words.slice(0, end).join(" ");
     const after = words.slice(end).join(" ");
     const stray = findParts(before, false, reader);
-    const kinds = Object.keys(stray.parts).filter((kind) => !(kind in parts) && kind !== "key");
-    if (kinds.length > 0) return problem(partNames[kinds[0] as keyof SongParts], after);
+    const aboutTuning = /\btuning$/i.test(before);
+    const kinds = Object.keys(stray.parts).filter(
+      (kind) => !(kind in parts) && kind !== "key" && !aboutTuning,
+    );
+    if (kinds.length > 0) return problem(`the ${partNames[kinds[0] as keyof SongParts]}`, after);
   }
   return null;
 }
