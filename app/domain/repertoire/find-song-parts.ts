@@ -35,7 +35,7 @@ function findDuration(text: string, apart: boolean): Found | null {
     const before = text.slice(0, start);
     const stands = start === 0 ? apart : endsApart(before);
     if (/^\d+$/.test(tail) || !(stands || (clockLike.test(tail) && !/\d\.\d/.test(tail)))) continue;
-    const reading = readDuration(tail);
+    const reading = readDuration(tail.replace(/\.$/, ""));
     if (reading.ok) return { rest: trimmedEnd(before), parts: { seconds: reading.seconds } };
   }
   return null;
@@ -105,18 +105,23 @@ function findNamedKey(text: string, reader: LineReader): Found | null {
   return named && key ? { rest: trimmedEnd(text.slice(0, named.index)), parts: { key } } : null;
 }
 
-/** A bare key: taken only behind another part, since "Vitamin C" and "Where I Am" are titles. */
-function findKey(text: string, apart: boolean, reader: LineReader): Found | null {
+/**
+ * A bare key: taken only behind another part, or set off between the title and another part where it has more than
+ * one letter, since "Vitamin C", "Plan - B" and "Where I Am" are titles.
+ */
+function findKey(text: string, apart: boolean, hasParts: boolean, reader: LineReader): Found | null {
   const last = /(?:^|[\s,;|/–—-])(\S+(?: (?:major|minor|maj|min|dur|moll))?)$/iu.exec(text);
-  const key = last?.[1] && /^\p{Lu}/u.test(last[1]) ? readWholeKey(last[1], reader) : null;
+  const words = last?.[1] ?? "";
+  const key = /^\p{Lu}/u.test(words) ? readWholeKey(words, reader) : null;
   if (!last || !key) return null;
   const before = trimmedEnd(text.slice(0, last.index));
   const behindPart = before === "" ? apart : findOne(before, false, reader, ["key"]) !== null;
-  return behindPart ? { rest: before, parts: { key } } : null;
+  const setOff = hasParts && words.length > 1 && endsApart(text.slice(0, -words.length));
+  return behindPart || setOff ? { rest: before, parts: { key } } : null;
 }
 
 function findInBrackets(text: string, reader: LineReader): Found | null {
-  const match = /[([]([^()[\]]+)[)\]]$/u.exec(text);
+  const match = /[([{]([^()[\]{}]+)[)\]}]$/u.exec(text);
   if (!match?.[1]) return null;
   const inner = match[1].trim();
   const rest = trimmedEnd(text.slice(0, match.index));
@@ -140,7 +145,7 @@ function findOne(text: string, apart: boolean, reader: LineReader, without: read
     (wanted("key") ? findNamedKey(text, reader) : null) ??
     (wanted("capos") ? findCapos(text, reader) : null) ??
     (wanted("tuning") ? tuningPart(findTuning(text, apart, reader)) : null) ??
-    (wanted("key") ? findKey(text, apart, reader) : null) ??
+    (wanted("key") ? findKey(text, apart, without.length > 0, reader) : null) ??
     (wanted("capos") ? findCapoProblem(text, apart, reader) : null)
   );
 }

@@ -1,6 +1,7 @@
 import { guitarTunings, otherTunings } from "#app/domain/music/named-tunings.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Midi } from "#app/domain/music/pitch.ts";
+import { wordsToSigns } from "#app/domain/music/read-notes.ts";
 import { type AmbiguousString, readTuning } from "#app/domain/music/tuning.ts";
 import { readTuningName } from "#app/domain/music/tuning-names.ts";
 import { readTuningShift } from "#app/domain/music/tuning-shift.ts";
@@ -88,15 +89,18 @@ function meantAsNotes(text: string, before: string, apart: boolean, naming: Nami
   return stands || (text.length >= 6 && before.trim() !== "");
 }
 
-/** Whether words that name a tuning are meant as one, given what stands before them. */
-function meantAsName(words: string, before: string, apart: boolean): boolean {
-  const name = words.toLowerCase().replace(/\s+tuning$/, "");
-  if (apart || (name !== words.toLowerCase() && before.trim() !== "")) return true;
-  const distinct = words === words.toLowerCase() && /\p{Lu}/u.test(before);
-  const { shift, rest } = readTuningShift(name);
-  if (shift !== 0 && (rest === "" || /^[+−-]/.test(name))) return distinct && !/^[+−-]/.test(name);
-  if (plainWords.has(rest)) return false;
-  return !/^a standard$/.test(rest) || distinct;
+/**
+ * Whether a name of a tuning, and a move of `shift` semitones with it, is meant as one, given what stands before it.
+ * `name` is "" where only the move stands there.
+ */
+function meantAsName(words: string, name: string, before: string, apart: boolean, naming: Naming): boolean {
+  const root = /^(?:double )?drop(?:ped)?[ -](.+)$|^(.+?)[ -]?(?:standard|std)$/i.exec(name);
+  const rootName = root?.[1] ?? root?.[2];
+  if (rootName && !new RegExp(`^${note(naming)}$`, "iu").test(rootName)) return false;
+  if (apart || (/\stuning$/i.test(words) && before.trim() !== "")) return true;
+  const setOff = words === words.toLowerCase() && /\p{Lu}/u.test(before);
+  if (name === "" || /^a[ -]?standard$/i.test(name)) return setOff && !/^[+−-]/.test(words);
+  return !plainWords.has(name.toLowerCase());
 }
 
 /**
@@ -121,13 +125,15 @@ export function findTuning(text: string, apart: boolean, reader: LineReader): Tu
   return null;
 }
 
-function readTail(tail: string, before: string, apart: boolean, reader: LineReader) {
+function readTail(words: string, before: string, apart: boolean, reader: LineReader) {
+  const tail = wordsToSigns(words);
   const { shift, rest } = readTuningShift(tail.replace(/\s+tuning$/i, ""));
   const named = rest === "" ? null : readTuningName(rest, reader.usual, reader.naming, false);
   if (named || (rest === "" && shift !== 0)) {
-    if (!meantAsName(tail, before, apart)) return null;
+    if (!meantAsName(tail, rest, before, apart, reader.naming)) return null;
   } else if (!meantAsNotes(rest, before, apart, reader.naming)) return null;
   const reading = readTuning(tail, reader);
-  if (reading.ok) return { open: reading.open, ambiguous: reading.ambiguous };
-  return { problem: reading.message };
+  if (!reading.ok) return { problem: reading.message };
+  const ofAnotherInstrument = named && reading.notes.some(({ semitones }) => Math.abs(semitones) > 12);
+  return ofAnotherInstrument ? null : { open: reading.open, ambiguous: reading.ambiguous };
 }

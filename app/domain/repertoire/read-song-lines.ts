@@ -7,7 +7,7 @@ import {
   readWholeKey,
   type SongParts,
 } from "#app/domain/repertoire/find-song-parts.ts";
-import type { LineReader } from "#app/domain/repertoire/find-tuning.ts";
+import { findTuning, type LineReader } from "#app/domain/repertoire/find-tuning.ts";
 import { readDuration } from "#app/domain/repertoire/read-duration.ts";
 
 /** A song as one pasted line tells it. */
@@ -74,8 +74,11 @@ function haveBareNumbers(lines: readonly string[]): boolean {
 
 function withoutNumber(raw: string, numbered: boolean): string {
   const marked = raw.replace(/^\s*(?:\[[ x]?\]\s*|[-*•–—·▪]\s+)/iu, "");
-  const counted = marked.replace(/^\s*(?:[(#№]?\d{1,3}[.):]+(?:\s+|(?=\p{L}))|[#№]\s?\d{1,3}\s+)/u, "");
-  return (numbered ? counted.replace(/^\s*\d{1,3}\s+/, "") : counted).trim();
+  const counted = marked.replace(
+    /^\s*(?:[(#№]?\d{1,3}[.):]+(?:\s+|(?=\p{L}))|[#№]\s?\d{1,3}\s+|0\d{1,2}\s+(?:[-–—]\s+)?)/u,
+    "",
+  );
+  return (numbered ? counted.replace(/^\s*\d{1,3}\s+(?:[-–—]\s+)?/, "") : counted).trim();
 }
 
 function readLine(text: string, reader: LineReader): PastedSong | string {
@@ -162,6 +165,11 @@ function strayPart({ rest, parts }: PartsReading, reader: LineReader): string | 
   if (onlyTime || (parts.capos === undefined && /^capo\s*\d+$/i.test(rest))) return problem(rest, "");
   if (parts.seconds === undefined && /^\d{1,2}:[0-5]\d\s/.test(rest)) {
     return `A length stands before the title. Write the title first. ${inQuotes}`;
+  }
+  const firstTuning =
+    parts.tuning === undefined && words.length > 1 ? findTuning(words[0]!, false, reader) : null;
+  if (firstTuning && "open" in firstTuning) {
+    return `A tuning stands before the title. Write the title first. ${inQuotes}`;
   }
   for (let end = words.length - 1; end > 1; end -= 1) {
     const before = words.slice(0, end).join(" ");

@@ -72,6 +72,11 @@ describe("each part by itself", () => {
     ["Low Meadow DADGAD G 3:15", "Low Meadow | DADGAD | G | 3:15"],
     ["Low Meadow 96 bpm DADGAD 3:15", "Low Meadow | DADGAD | 96 bpm | 3:15"],
     ["Low Meadow Eb standard", "Low Meadow | E♭ A♭ D♭ G♭ B♭ E♭"],
+    ["Low Meadow E flat standard 3:15", "Low Meadow | E♭ A♭ D♭ G♭ B♭ E♭ | 3:15"],
+    ["Low Meadow drop D down 1 3:15", "Low Meadow | D♭ A♭ D♭ G♭ B♭ E♭ | 3:15"],
+    ["Low Meadow - Am - DADGAD - 3:15", "Low Meadow | DADGAD | Am | 3:15"],
+    ["Low Meadow {DADGAD} 3:15.", "Low Meadow | DADGAD | 3:15"],
+    ["01 - Low Meadow - 3:15", "Low Meadow | usual | 3:15"],
     ["Low Meadow half step down 3:15", "Low Meadow | E♭ A♭ D♭ G♭ B♭ E♭ | 3:15"],
     ["Low Meadow CGCFFC down 1", "Low Meadow | B F♯ B E E B"],
     ["Low Meadow EbAbDbGbBbEb", "Low Meadow | E♭ A♭ D♭ G♭ B♭ E♭"],
@@ -122,6 +127,9 @@ describe("a title keeps its words, however much they look like something else", 
     "Be",
     "Hush, Little Stone",
     "High Strung",
+    "Mic Drop Es",
+    "Such As Standard",
+    "River - Bass",
     "Last Standard Tuning Fork",
   ])("%j", (title) => {
     expect(told(title)).toBe(`${title} | usual`);
@@ -157,6 +165,7 @@ describe("what cannot be read is told, and nothing of it is kept", () => {
     ["Low Meadow D A D G B", /5 notes were read; this instrument needs 6/],
     ["Low Meadow capo 30 3:15", /Fret 30 is outside 1 to 24/],
     ["Low Meadow DADGAD capo 2 on 8 3:15", /"8" in "capo 2 on 8" is no string of 1 to 6/],
+    ["DADGAD Low Meadow", /A tuning stands before the title/],
     ["3:15 Low Meadow", /A length stands before the title/],
     ["3:15", /There is no title on this line/],
     ["capo 2", /There is no title on this line/],
@@ -199,6 +208,7 @@ describe("a list", () => {
       "Cold Wire",
       "99 Winters",
     ]);
+    expect(titles("1 - Low Meadow\n2 - Cold Wire")).toEqual(["Low Meadow", "Cold Wire"]);
     expect(titles("99 Winters\n12 Bridges")).toEqual(["99 Winters", "12 Bridges"]);
   });
 
