@@ -76,7 +76,8 @@ export function spellString(midi: Midi, keyFifths: number): Note {
 
 /**
  * The key signature that spells a tuning best where no key is known: the one in which its notes lie closest together
- * on the line of fifths, then nearest to plain letters, flats before sharps. So open E gets G♯, E♭ standard gets flats.
+ * on the line of fifths; of two equal ones the one that calls the lowest string C♯ or F♯ where it is that (common
+ * practice, no source), then the one nearest to plain letters. So open E has a G♯, E♭ standard flats, drop C♯ sharps.
  * @example fifthsOfTuning([40, 47, 52, 56, 59, 64]) // a signature with G♯
  */
 export function fifthsOfTuning(open: readonly Midi[]): number {
@@ -88,7 +89,9 @@ export function fifthsOfTuning(open: readonly Midi[]): number {
       return fifthsOf(note.letter, note.alter);
     });
     const spread = places.length === 0 ? 0 : Math.max(...places) - Math.min(...places);
-    const score = spread * 1000 + places.reduce((sum, place) => sum + Math.abs(place), 0);
+    const lowestIsSharp = places[0] === fifthsOf("C", 1) || places[0] === fifthsOf("F", 1);
+    const fromPlain = places.reduce((sum, place) => sum + Math.abs(place), 0);
+    const score = spread * 1000 + (lowestIsSharp ? 0 : 500) + fromPlain;
     if (score < bestScore) {
       best = candidate;
       bestScore = score;

@@ -50,6 +50,7 @@ describe("a tuning without a key", () => {
     expect(letters([40, 47, 52, 56, 59, 64])).toBe("E B E G♯ B E");
     expect(letters([40, 45, 52, 57, 61, 64])).toBe("E A E A C♯ E");
     expect(letters([39, 44, 49, 54, 58, 63])).toBe("E♭ A♭ D♭ G♭ B♭ E♭");
+    expect(letters([37, 44, 49, 54, 58, 63])).toBe("C♯ G♯ C♯ F♯ A♯ D♯");
     expect(letters([38, 43, 50, 55, 58, 62])).toBe("D G D G B♭ D");
   });
 

@@ -73,7 +73,7 @@ describe("each part by itself", () => {
     ["Low Meadow 96 bpm DADGAD 3:15", "Low Meadow | DADGAD | 96 bpm | 3:15"],
     ["Low Meadow Eb standard", "Low Meadow | E♭ A♭ D♭ G♭ B♭ E♭"],
     ["Low Meadow E flat standard 3:15", "Low Meadow | E♭ A♭ D♭ G♭ B♭ E♭ | 3:15"],
-    ["Low Meadow drop D down 1 3:15", "Low Meadow | D♭ A♭ D♭ G♭ B♭ E♭ | 3:15"],
+    ["Low Meadow drop D down 1 3:15", "Low Meadow | C♯ G♯ C♯ F♯ A♯ D♯ | 3:15"],
     ["Low Meadow - Am - DADGAD - 3:15", "Low Meadow | DADGAD | Am | 3:15"],
     ["Low Meadow {DADGAD} 3:15.", "Low Meadow | DADGAD | 3:15"],
     ["01 - Low Meadow - 3:15", "Low Meadow | usual | 3:15"],
