@@ -9,7 +9,7 @@ export type Octave = number;
 export type Hertz = number;
 
 /** Reference pitch of A4, ISO 16:1975. */
-export const concertPitch: Hertz = 440;
+const concertPitch: Hertz = 440;
 
 /** Remainder that is never negative: `wrap(-1, 12)` is 11. */
 export function wrap(value: number, size: number): number {

@@ -20,7 +20,7 @@ export function defaultRange(usual: readonly Midi[]): StringRange {
 }
 
 /** Why a neck cannot be had on an instrument. `string` is null where the number of strings is what differs. */
-export type OutOfRange = { string: number | null; message: string };
+type OutOfRange = { string: number | null; message: string };
 
 export type Playability = { ok: true } | { ok: false; reasons: OutOfRange[] };
 

@@ -55,7 +55,7 @@ function dropped(pitchClass: PitchClass, usual: readonly Midi[], both: boolean):
   const octaves = guitarOctaves(usual);
   const base = octaves ? standardGuitar : usual;
   if (base.some((midi) => midi < base[0]!)) return null;
-  const move = moveTo(pitchClass, base[0]! - 2, 1);
+  const move = moveTo(pitchClass, base[0]! - 2, octaves ? 0 : 1);
   const open = base.map(
     (midi, index) => midi + move - (index === 0 || (both && index === base.length - 1) ? 2 : 0),
   );

@@ -52,6 +52,7 @@ describe("what sounds with capos on", () => {
     expect(frettedPitch(neck, 6, 3)).toBe(39);
     expect(frettedPitch(neck, 5, 2)).toBeNull();
     expect(frettedPitch(neck, 5, 0)).toBe(46);
+    expect(frettedPitch(neck, 5, 3)).toBe(46);
     expect(() => frettedPitch(neck, 7, 0)).toThrow(RangeError);
   });
 
@@ -108,6 +109,14 @@ describe("a capo behind another", () => {
     expect(shadowedCapos(capos("capo 2; capo 4 on 5-3"))).toEqual([
       { capo: { fret: 2, strings: [6, 5, 4, 3, 2, 1] }, strings: [5, 4, 3], useless: false },
     ]);
+  });
+
+  test("of two alike the second is useless", () => {
+    const first = { fret: 2, strings: [6, 5] };
+    const second = { fret: 2, strings: [5, 6] };
+    const found = shadowedCapos([first, second]);
+    expect(found).toHaveLength(1);
+    expect(found[0]?.capo).toBe(second);
   });
 
   test("on other strings does no harm", () => {

@@ -17,7 +17,7 @@ function pitches(name: string, usual: readonly number[] = standard): string {
 
 // Letters and octaves as published: h2g2 A87856825; daviddarling.info; LilyPond regression test 71e; Guitar Player;
 // musicradar.com; guitarplayer.com 2007-01-22; indiepanda.net; Taylor, Ask Bob; Wikipedia (regular and standard
-// tunings); stringsdirect.co.uk. DADGAD's octaves, open G minor and drop C: common practice, no source.
+// tunings); stringsdirect.co.uk. DADGAD's octaves, open G minor and the drop tunings below D: common practice, no source.
 test.each([
   ["standard", "E2 A2 D3 G3 B3 E4"],
   ["drop D", "D2 A2 D3 G3 B3 E4"],
@@ -41,6 +41,8 @@ test.each([
   ["B standard", "B1 E2 A2 D3 F♯3 B3"],
   ["A standard", "A1 D2 G2 C3 E3 A3"],
   ["Nashville", "E3 A3 D4 G4 B3 E4"],
+  ["drop E", "E1 B1 E2 A2 D♭3 F♯3"],
+  ["drop Eb", "E♭1 B♭1 E♭2 A♭2 C3 F3"],
   ["high strung", "E3 A3 D4 G3 B3 E4"],
 ])("%s is %s", (name, notes) => {
   expect(pitches(name)).toBe(notes);
@@ -81,6 +83,7 @@ describe("other instruments", () => {
     );
     expect(pitches("low G", usualTuningFor("ukulele", 4))).toBe("G3 C4 E4 A4");
     expect(pitches("drop A", usualTuningFor("electric", 7))).toBe("A1 E2 A2 D3 G3 B3 E4");
+    expect(pitches("drop A", [34, 39, 44, 49, 54, 58, 63])).toBe("A1 E2 A2 D3 G3 B3 E4");
     expect(pitches("Eb standard", usualTuningFor("electric", 7))).toBe("B♭1 E♭2 A♭2 D♭3 F♯3 B♭3 E♭4");
     expect(pitches("drop D", usualTuningFor("bass", 4))).toBe("D1 A1 D2 G2");
   });
