@@ -8,7 +8,11 @@ export const gigLimits = { sets: 12, entriesPerSet: 100, rules: 500 } as const;
  * Why an edit could not be applied. `gone`: what it changes is no longer there. `changed`: it stands otherwise than the
  * edit supposes. `invalid`: the gig would no longer be one.
  */
-export type EditConflict = { code: "gone" | "changed" | "invalid"; key: string; message: string };
+export type EditConflict = {
+  code: "gone" | "changed" | "invalid";
+  key: string;
+  message: string;
+};
 
 export type Applied = { ok: true; gig: Gig; inverse: Edit[] } | { ok: false; conflict: EditConflict };
 
@@ -29,7 +33,10 @@ export function applyEdit(gig: Gig, edit: Edit): Applied {
     case "set.set": {
       const set = gig.sets.find((one) => one.id === edit.setId);
       if (!set) return setGone(edit.setId);
-      return setField(gig, set, edit, (next) => ({ ...gig, sets: replaced(gig.sets, next) }));
+      return setField(gig, set, edit, (next) => ({
+        ...gig,
+        sets: replaced(gig.sets, next),
+      }));
     }
     case "entry.add":
       return addEntry(gig, edit.entry);
@@ -40,7 +47,10 @@ export function applyEdit(gig: Gig, edit: Edit): Applied {
     case "entry.set": {
       const entry = gig.entries.find((one) => one.id === edit.entryId);
       if (!entry) return entryGone(edit.entryId);
-      return setField(gig, entry, edit, (next) => ({ ...gig, entries: replaced(gig.entries, next) }));
+      return setField(gig, entry, edit, (next) => ({
+        ...gig,
+        entries: replaced(gig.entries, next),
+      }));
     }
     case "rule.add":
       return addRule(gig, edit.rule);
@@ -94,7 +104,10 @@ function setField<Of extends object>(
 ): Applied {
   const before = holder[edit.field as keyof Of];
   if (stableJson(before) === stableJson(edit.value)) return done(gig);
-  return done(put({ ...holder, [edit.field]: edit.value }), { ...edit, value: before } as Edit);
+  return done(put({ ...holder, [edit.field]: edit.value }), {
+    ...edit,
+    value: before,
+  } as Edit);
 }
 
 function addSet(gig: Gig, set: GigSet): Applied {
@@ -143,8 +156,17 @@ function placeEntry(gig: Gig, edit: Extract<Edit, { kind: "entry.place" }>): App
   const noRoom = entry.setId === setId ? null : roomFor(gig, entry.id, setId);
   if (noRoom) return noRoom;
   return done(
-    { ...gig, entries: replaced(gig.entries, { ...entry, setId, section, rank }) },
-    { kind: "entry.place", entryId: entry.id, setId: entry.setId, section: entry.section, rank: entry.rank },
+    {
+      ...gig,
+      entries: replaced(gig.entries, { ...entry, setId, section, rank }),
+    },
+    {
+      kind: "entry.place",
+      entryId: entry.id,
+      setId: entry.setId,
+      section: entry.section,
+      rank: entry.rank,
+    },
   );
 }
 

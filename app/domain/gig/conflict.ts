@@ -70,7 +70,12 @@ function clashesWhere(
   for (const [key, value] of mine) {
     for (const [other, write] of theirs) {
       if (!meets(key, other) || (key === other && value === write.value)) continue;
-      found.push({ key: other, mine: value, theirs: write.value, by: write.by });
+      found.push({
+        key: other,
+        mine: value,
+        theirs: write.value,
+        by: write.by,
+      });
     }
   }
   return found;

@@ -16,7 +16,9 @@ export type SetField = "name" | "interval" | "holdFirst" | "holdLast" | "rank";
 export type EntryField = "guitarId" | "neckId" | "pinned" | "cover" | "techNote";
 
 /** One field of `Of` with a value that fits it. */
-type FieldValue<Of, Field extends keyof Of> = { [F in Field]: { field: F; value: Of[F] } }[Field];
+type FieldValue<Of, Field extends keyof Of> = {
+  [F in Field]: { field: F; value: Of[F] };
+}[Field];
 
 /**
  * Everything that can happen to a gig, as a closed list of values. The browser applies them at once, the server in a
@@ -76,15 +78,24 @@ export function writeOf(edit: Edit): Write {
     case "set.remove":
       return { key: `set:${edit.setId}`, value: null };
     case "set.set":
-      return { key: `set:${edit.setId}:${edit.field}`, value: stableJson(edit.value) };
+      return {
+        key: `set:${edit.setId}:${edit.field}`,
+        value: stableJson(edit.value),
+      };
     case "entry.add":
       return { key: `entry:${edit.entry.id}`, value: stableJson(edit.entry) };
     case "entry.remove":
       return { key: `entry:${edit.entryId}`, value: null };
     case "entry.place":
-      return { key: `entry:${edit.entryId}:place`, value: stableJson([edit.setId, edit.section, edit.rank]) };
+      return {
+        key: `entry:${edit.entryId}:place`,
+        value: stableJson([edit.setId, edit.section, edit.rank]),
+      };
     case "entry.set":
-      return { key: `entry:${edit.entryId}:${edit.field}`, value: stableJson(edit.value) };
+      return {
+        key: `entry:${edit.entryId}:${edit.field}`,
+        value: stableJson(edit.value),
+      };
     case "rule.add":
       return { key: `rule:${edit.rule.id}`, value: stableJson(edit.rule) };
     case "rule.remove":

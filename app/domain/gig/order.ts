@@ -146,7 +146,13 @@ function placesFor(
   const place = (after: string | null) => {
     const ranks = generateNKeysBetween(before, after, run.length);
     run.forEach((entry, index) => {
-      edits.push({ kind: "entry.place", entryId: entry.id, setId, section, rank: ranks[index]! });
+      edits.push({
+        kind: "entry.place",
+        entryId: entry.id,
+        setId,
+        section,
+        rank: ranks[index]!,
+      });
     });
     run = [];
   };
