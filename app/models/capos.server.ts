@@ -69,18 +69,19 @@ export async function createCapo(db: Knex, member: OfAct, fields: CapoFields): P
   return id;
 }
 
-/** Saves a capo over the version it was read at. Nothing is written where somebody else was first. */
+/** Saves a capo over the version it was read at, unless somebody else was first; see `updateSong`. */
 export async function updateCapo(
   db: Knex,
   member: OfAct,
   id: string,
   version: number,
   fields: CapoFields,
+  restore = false,
 ): Promise<SaveCapo> {
   const written = await db("capos")
     .where({ id, act_id: member.actId, version })
-    .whereNull("deleted_at")
-    .update({ ...capoToRow(fields), version: version + 1 });
+    .modify((query) => (restore ? query : query.whereNull("deleted_at")))
+    .update({ ...capoToRow(fields), deleted_at: null, version: version + 1 });
   if (written === 1) return { outcome: "saved" };
   const current = await findCapo(db, member, id);
   return current ? { outcome: "conflict", current } : { outcome: "gone" };

@@ -82,9 +82,7 @@ function guitarToRow(fields: GuitarFields) {
 }
 
 function guitarsOf(db: Knex, member: OfAct) {
-  return db("guitars")
-    .where({ act_id: member.actId })
-    .select<GuitarRow[]>("guitars.*", db.raw("date_format(strung_on, '%Y-%m-%d') as strung_on"));
+  return db("guitars").where({ act_id: member.actId }).select<GuitarRow[]>("*");
 }
 
 /** The act's guitars, by name. */
@@ -132,24 +130,29 @@ export async function createGuitar(
   const by = await holderOfShortName(trx, member, fields.shortName, null);
   if (by !== null) return { outcome: "short-name-taken", by };
   const id = nanoid(16);
-  await trx("guitars").insert({ id, act_id: member.actId, ...guitarToRow(fields) });
+  await trx("guitars").insert({
+    id,
+    act_id: member.actId,
+    ...guitarToRow(fields),
+  });
   return { outcome: "saved", id };
 }
 
-/** Saves a guitar over the version it was read at. Nothing is written where somebody else was first. */
+/** Saves a guitar over the version it was read at, unless somebody else was first; see `updateSong`. */
 export async function updateGuitar(
   trx: Knex.Transaction,
   member: OfAct,
   id: string,
   version: number,
   fields: GuitarFields,
+  restore = false,
 ): Promise<KeepGuitar> {
   const by = await holderOfShortName(trx, member, fields.shortName, id);
   if (by !== null) return { outcome: "short-name-taken", by };
   const written = await trx("guitars")
     .where({ id, act_id: member.actId, version })
-    .whereNull("deleted_at")
-    .update({ ...guitarToRow(fields), version: version + 1 });
+    .modify((query) => (restore ? query : query.whereNull("deleted_at")))
+    .update({ ...guitarToRow(fields), deleted_at: null, version: version + 1 });
   if (written === 1) return { outcome: "saved", id };
   const current = await findGuitar(trx, member, id);
   return current ? { outcome: "conflict", current } : { outcome: "gone" };

@@ -73,7 +73,13 @@ export function songToRow(fields: SongFields, present: readonly SongNeck[] = [])
   const kept = new Set(present.map((neck) => neck.id));
   const necks: SongNeck[] = fields.necks.map((neck) => {
     const id = neck.id !== null && kept.delete(neck.id) ? neck.id : nanoid(16);
-    return { id, open: neck.open, capos: neck.capos, guitars: neck.guitars, penalty: neck.penalty };
+    return {
+      id,
+      open: neck.open,
+      capos: neck.capos,
+      guitars: neck.guitars,
+      penalty: neck.penalty,
+    };
   });
   return {
     title: fields.title,

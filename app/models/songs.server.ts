@@ -55,25 +55,37 @@ export async function createSong(db: Knex, member: OfAct, fields: SongFields): P
 
 /** Adds several songs in one statement: all of them or none. Ids come back in the order given. */
 export async function createSongs(db: Knex, member: OfAct, songs: readonly SongFields[]): Promise<string[]> {
-  const rows = songs.map((fields) => ({ id: nanoid(16), act_id: member.actId, ...songToRow(fields) }));
+  const rows = songs.map((fields) => ({
+    id: nanoid(16),
+    act_id: member.actId,
+    ...songToRow(fields),
+  }));
   if (rows.length > 0) await db("songs").insert(rows);
   return rows.map((row) => row.id);
 }
 
-/** Saves a song over the version it was read at. Nothing is written where somebody else was first. */
+/**
+ * Saves a song over the version it was read at. Nothing is written where somebody else was first. A deleted song is
+ * written only where `restore` says to put it back.
+ */
 export async function updateSong(
   db: Knex,
   member: OfAct,
   id: string,
   version: number,
   fields: SongFields,
+  restore = false,
 ): Promise<SaveSong> {
   const before = await findSong(db, member, id);
   if (!before) return { outcome: "gone" };
   const written = await db("songs")
     .where({ id, act_id: member.actId, version })
-    .whereNull("deleted_at")
-    .update({ ...songToRow(fields, before.necks), version: version + 1 });
+    .modify((query) => (restore ? query : query.whereNull("deleted_at")))
+    .update({
+      ...songToRow(fields, before.necks),
+      deleted_at: null,
+      version: version + 1,
+    });
   if (written === 1) return { outcome: "saved" };
   const current = await findSong(db, member, id);
   return current ? { outcome: "conflict", current } : { outcome: "gone" };
