@@ -17,25 +17,40 @@ export type Member = {
   acts: { id: string; name: string; role: Role }[];
 };
 
+/** The signed-in person, in whatever act. */
+export type Person = Omit<Member, "personId" | "actId" | "actName" | "role" | "acts"> & { id: string };
+
 /** Set once by the root middleware; null for strangers. */
+export const personContext = createContext<Person | null>(null);
+
+/** Set once by the root middleware; null for strangers and for people who belong to no act. */
 export const memberContext = createContext<Member | null>(null);
 
 type Context = Readonly<RouterContextProvider>;
 
-/** The member, or a redirect to sign-in that comes back to this address. For pages. */
+/** The signed-in person, or a redirect to sign-in that comes back to this address. For pages without an act. */
+export function requirePerson(context: Context, url: URL): Person {
+  const person = context.get(personContext);
+  if (!person) throw redirect(`/sign-in?to=${encodeURIComponent(url.pathname + url.search)}`);
+  return person;
+}
+
+/** The member, or a redirect: to sign-in for strangers, to making an act for a person who belongs to none. For pages. */
 export function requireMember(context: Context, url: URL): Member {
+  requirePerson(context, url);
   const member = context.get(memberContext);
-  if (!member) throw redirect(`/sign-in?to=${encodeURIComponent(url.pathname + url.search)}`);
+  if (!member) throw redirect("/act/new");
   return member;
 }
 
 /** The member, or 401 as JSON. For API routes. */
 export function requireApiMember(context: Context): Member {
   const member = context.get(memberContext);
-  if (!member) {
-    throw Response.json({ message: "Sign in first: this address needs a session." }, { status: 401 });
+  if (member) return member;
+  if (context.get(personContext)) {
+    throw Response.json({ message: "You belong to no act. Make one, or ask for a join link." }, { status: 403 });
   }
-  return member;
+  throw Response.json({ message: "Sign in first: this address needs a session." }, { status: 401 });
 }
 
 /** Throws 403 where the member's role may not do this. */
