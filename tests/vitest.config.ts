@@ -1,33 +1,52 @@
 import { defineConfig } from "vitest/config";
 
+const secret = "only-for-tests-and-known-to-everybody";
+
+const fixedSeed = "tests/support/fixed-seed.ts";
+const resolve = { tsconfigPaths: true };
+
+const base = {
+  environment: "node",
+  setupFiles: [fixedSeed],
+  env: { NODE_ENV: "test", SESSION_SECRET: secret, PASSWORD_PEPPER: secret, LOG_LEVEL: "silent" },
+};
+
+const withDatabase = {
+  // Knex reads migrations by itself, past Vitest.
+  execArgv: ["--import", "tsx"],
+  globalSetup: ["tests/support/start-database.ts"],
+  setupFiles: [fixedSeed, "tests/support/worker-environment.ts"],
+};
+
 /** Pure tests run in parallel; those that need MariaDB or Chromium have projects of their own. */
 export default defineConfig({
+  root: new URL("..", import.meta.url).pathname,
   test: {
     projects: [
+      { resolve, test: { ...base, name: "unit", include: ["tests/unit/**/*.test.{ts,tsx}"] } },
       {
-        resolve: { tsconfigPaths: true },
-        test: { name: "unit", include: ["tests/unit/**/*.test.{ts,tsx}"], environment: "node" },
+        resolve,
+        test: { ...base, name: "reference", include: ["tests/reference/**/*.test.ts"], testTimeout: 120_000 },
       },
       {
-        resolve: { tsconfigPaths: true },
-        test: { name: "reference", include: ["tests/reference/**/*.test.ts"], environment: "node", testTimeout: 120_000 },
-      },
-      {
-        resolve: { tsconfigPaths: true },
+        resolve,
         test: {
+          ...base,
+          ...withDatabase,
           name: "integration",
           include: ["tests/integration/**/*.test.ts"],
-          environment: "node",
           testTimeout: 30_000,
         },
       },
       {
-        resolve: { tsconfigPaths: true },
+        resolve,
         test: {
+          ...base,
+          ...withDatabase,
           name: "browser",
           include: ["tests/browser/**/*.test.ts"],
-          environment: "node",
           testTimeout: 60_000,
+          hookTimeout: 60_000,
           fileParallelism: false,
         },
       },

@@ -1,0 +1,56 @@
+import { reactRouter } from "@react-router/dev/vite";
+import tailwindcss from "@tailwindcss/vite";
+import { defineConfig, type Plugin } from "vite";
+
+/**
+ * One server build with three entries: the pages, the server that serves them, and the workers of the
+ * planner and of passwords. The
+ * framework names every entry alike; this comes after it and gives each its own name, all in one folder, so that the
+ * server finds the worker beside itself.
+ */
+function serverEntries(): Plugin {
+  return {
+    name: "stillpeg:server-entries",
+    enforce: "post",
+    apply: "build",
+    configEnvironment(name) {
+      if (name !== "ssr") return;
+      return {
+        build: {
+          rollupOptions: {
+            input: {
+              index: "virtual:react-router/server-build",
+              serve: "app/launch/serve.ts",
+              "planner.node": "app/workers/planner.node.ts",
+              "password.node": "app/workers/password.node.ts",
+            },
+            output: { entryFileNames: "[name].js", chunkFileNames: "[name]-[hash].js" },
+          },
+        },
+      };
+    },
+  };
+}
+
+export default defineConfig({
+  plugins: [tailwindcss(), reactRouter(), serverEntries()],
+  resolve: { tsconfigPaths: true },
+  worker: { format: "es" },
+  optimizeDeps: {
+    include: [
+      "@base-ui/react/dialog",
+      "@base-ui/react/menu",
+      "@base-ui/react/popover",
+      "@base-ui/react/toast",
+      "@conform-to/react",
+      "@conform-to/zod/v4",
+      "@dnd-kit/core",
+      "@dnd-kit/sortable",
+      "@dnd-kit/utilities",
+      "fractional-indexing",
+      "nanoid",
+      "tonal",
+      "zod",
+    ],
+  },
+});
