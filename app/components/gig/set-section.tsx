@@ -1,0 +1,67 @@
+import { AddSong } from "#app/components/gig/add-song.tsx";
+import type { Part } from "#app/components/gig/moves.ts";
+import { partName } from "#app/components/gig/moves.ts";
+import { usePageTools } from "#app/components/gig/page-context.tsx";
+import { SongItem } from "#app/components/gig/song-item.tsx";
+import type { GigSet } from "#app/domain/gig/gig.ts";
+import type { Row } from "#app/domain/gig/plan.ts";
+import type { Song } from "#app/domain/repertoire/song.ts";
+
+type SetSectionProps = {
+  part: Part;
+  set: GigSet;
+  rows: Row[];
+  /** Entries at the ends of the whole set. */
+  firstId: string | undefined;
+  lastId: string | undefined;
+  songs: Song[];
+  standing: ReadonlySet<string>;
+  onAdd: (song: Song, part: Part) => void;
+};
+
+/** The songs of one section in their order, and the line that adds another. */
+export function SetSection({ part, set, rows, firstId, lastId, songs, standing, onAdd }: SetSectionProps) {
+  const { may } = usePageTools();
+  return (
+    <>
+      {part.section === 1 ? (
+        <h3
+          data-box="head"
+          data-set={set.id}
+          data-section={1}
+          className="flex h-8 items-end pb-1 pl-[60px] font-semibold text-base text-grey-800 lg:pl-[66px]"
+        >
+          Encore
+        </h3>
+      ) : null}
+      {rows.length > 0 ? (
+        // biome-ignore lint/a11y/noRedundantRoles: Safari drops the list where its marks are styled away
+        <ol role="list" aria-label={partName(part)} className="pt-px">
+          {rows.map((row) => (
+            <SongItem
+              key={row.entry.id}
+              row={row}
+              set={set}
+              first={row.entry.id === firstId}
+              last={row.entry.id === lastId}
+            />
+          ))}
+        </ol>
+      ) : (
+        <p className="flex min-h-10 items-center border-grey-200 border-y border-dashed pl-[60px] text-grey-600 lg:pl-[66px]">
+          {may.plan ? "No songs yet. Add some below, or paste a list." : "No songs yet."}
+        </p>
+      )}
+      {may.plan ? (
+        <div className="hidden pl-[38px] lg:block">
+          <AddSong
+            songs={songs}
+            standing={standing}
+            where={partName(part)}
+            onAdd={(song) => onAdd(song, part)}
+          />
+        </div>
+      ) : null}
+    </>
+  );
+}
