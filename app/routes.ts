@@ -5,6 +5,7 @@ const auth = [
   route("sign-in", "routes/auth/sign-in.tsx"),
   route("sign-out", "routes/auth/sign-out.tsx"),
   route("join/:token", "routes/auth/join.tsx"),
+  route("act/new", "routes/act/new.tsx"),
 ];
 
 const people = [
@@ -18,7 +19,6 @@ const people = [
   route("account/sessions", "routes/account/sessions.tsx"),
   route("act", "routes/act/edit.tsx"),
   route("act/switch", "routes/act/switch.tsx"),
-  route("act/new", "routes/act/new.tsx"),
   route("act/delete", "routes/act/delete.tsx"),
 ];
 

@@ -8,9 +8,12 @@ import { createPerson, findPasswordHash } from "#app/models/people.server.ts";
 import { getDb, transact } from "#app/services/db.server.ts";
 import { hashPassword, isPassword } from "#app/services/password.server.ts";
 import { countTry, forgetTries, waitWords } from "#app/services/rate-limit.server.ts";
+import { rememberAct } from "#app/services/session.server.ts";
 
 /** Who signed in or up, or why not, in words for the form. */
-export type Entry = { personId: string; actId?: string } | { refused: string; status: 400 | 409 | 410 | 429; field?: "email" };
+export type Entry =
+  | { personId: string; actId?: string }
+  | { refused: string; status: 400 | 409 | 410 | 429; field?: "email" };
 
 const wrong = "No account has this e-mail address and password. Check both, or sign up.";
 
@@ -19,12 +22,15 @@ function tooMany(seconds: number): Entry {
 }
 
 async function checkSignIn(form: FormData, ip: string): Promise<Entry> {
-  const email = String(form.get("email") ?? "").trim().toLowerCase();
+  const email = String(form.get("email") ?? "")
+    .trim()
+    .toLowerCase();
   const password = String(form.get("password") ?? "");
   const wait = (await countTry("sign-in", ip, email)) ?? (await countTry("sign-in-place", ip));
   if (wait !== null) return tooMany(wait);
   const known = await findPasswordHash(getDb(), email);
-  if (!(await isPassword(password, known?.passwordHash ?? null)) || !known) return { refused: wrong, status: 400 };
+  if (!(await isPassword(password, known?.passwordHash ?? null)) || !known)
+    return { refused: wrong, status: 400 };
   await forgetTries("sign-in", ip, email);
   return { personId: known.personId };
 }
@@ -73,6 +79,12 @@ export async function signUpToJoin(form: Omit<SignUp, "actName">, token: string,
     if (error instanceof LinkRefused) return { refused: linkWords[error.outcome], status: 410 };
     throw error;
   }
+}
+
+/** Takes somebody who is signed in into the act that a join link leads to: the Set-Cookie that shows it; null if it cannot. */
+export async function joinAct(request: Request, personId: string, token: string): Promise<string | null> {
+  const { actId } = await transact(getDb(), (trx) => useJoinLink(trx, token, personId, new Date()));
+  return actId && rememberAct(request, actId);
 }
 
 /** Rolls the new person back where the link does not let them in. */

@@ -22,7 +22,10 @@ export function isOwnRequest(request: Request, publicUrl: string): boolean {
 export const csrfMiddleware: MiddlewareFunction<Response> = ({ request }) => {
   if (isOwnRequest(request, getEnv().PUBLIC_URL)) return;
   throw data(
-    { message: "This was sent from another site, so nothing was changed. Open Stillpeg itself and try again there." },
+    {
+      message:
+        "This was sent from another site, so nothing was changed. Open Stillpeg itself and try again there.",
+    },
     { status: 403 },
   );
 };

@@ -48,7 +48,10 @@ export function requireApiMember(context: Context): Member {
   const member = context.get(memberContext);
   if (member) return member;
   if (context.get(personContext)) {
-    throw Response.json({ message: "You belong to no act. Make one, or ask for a join link." }, { status: 403 });
+    throw Response.json(
+      { message: "You belong to no act. Make one, or ask for a join link." },
+      { status: 403 },
+    );
   }
   throw Response.json({ message: "Sign in first: this address needs a session." }, { status: 401 });
 }
@@ -56,7 +59,10 @@ export function requireApiMember(context: Context): Member {
 /** Throws 403 where the member's role may not do this. */
 export function requireCan(member: Member, action: Action): void {
   if (!can(member.role, action)) {
-    throw data({ message: `Your role in ${member.actName} (${member.role}) may not do this. Ask an owner.` }, { status: 403 });
+    throw data(
+      { message: `Your role in ${member.actName} (${member.role}) may not do this. Ask an owner.` },
+      { status: 403 },
+    );
   }
 }
 

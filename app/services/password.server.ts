@@ -9,7 +9,8 @@ let pool: Piscina | null = null;
 function openPool(): Piscina {
   const fromSource = import.meta.url.endsWith(".ts");
   return new Piscina({
-    filename: new URL(fromSource ? "../workers/password.node.ts" : "./password.node.js", import.meta.url).href,
+    filename: new URL(fromSource ? "../workers/password.node.ts" : "./password.node.js", import.meta.url)
+      .href,
     execArgv: fromSource ? ["--import", "tsx"] : [],
     minThreads: 0,
     maxThreads: 2,

@@ -7,7 +7,8 @@ const nowhere = "http://nowhere.invalid";
  * @example returnTo("//elsewhere.example", "/gigs") // "/gigs"
  */
 export function returnTo(wanted: FormDataEntryValue | null, fallback: string): string {
-  if (typeof wanted !== "string" || !wanted.startsWith("/") || !URL.canParse(wanted, nowhere)) return fallback;
+  if (typeof wanted !== "string" || !wanted.startsWith("/") || !URL.canParse(wanted, nowhere))
+    return fallback;
   const url = new URL(wanted, nowhere);
   const path = url.pathname + url.search + url.hash;
   return url.origin === nowhere && !path.startsWith("//") ? path : fallback;

@@ -1,5 +1,11 @@
 import { createHash, randomBytes } from "node:crypto";
-import { type Cookie, createContext, createCookie, createSessionStorage, type SessionStorage } from "react-router";
+import {
+  type Cookie,
+  createContext,
+  createCookie,
+  createSessionStorage,
+  type SessionStorage,
+} from "react-router";
 import {
   deleteExpiredSessions,
   deleteSession,
