@@ -75,3 +75,15 @@ function wallClock(instant: number, zone: string): number {
   ) as [number, number, number, number, number, number];
   return Date.UTC(year, month - 1, day, hour, minutes, second);
 }
+
+const months = ["Jan", "Feb", "March", "April", "May", "June", "July", "Aug", "Sept", "Oct", "Nov", "Dec"];
+const weekdays = ["Sun", "Mon", "Tue", "Wed", "Thu", "Fri", "Sat"];
+
+/**
+ * A day as people write it. Made here rather than by the browser, so that server and browser write the same.
+ * @example dateWords("2027-03-12") // "Fri 12 March 2027"
+ */
+export function dateWords(date: string): string {
+  const day = new Date(`${date}T00:00:00.000Z`);
+  return `${weekdays[day.getUTCDay()]} ${day.getUTCDate()} ${months[day.getUTCMonth()]} ${day.getUTCFullYear()}`;
+}
