@@ -30,11 +30,10 @@ type GuitarRow = {
 };
 
 /** Why a guitar was not kept. The short name must be one of its own in the act: it is all that a badge says. */
-export type KeepGuitar =
-  | { outcome: "saved"; id: string }
-  | { outcome: "short-name-taken"; by: string }
-  | { outcome: "conflict"; current: StoredGuitar }
-  | { outcome: "gone" };
+export type AddGuitar = { outcome: "saved"; id: string } | { outcome: "short-name-taken"; by: string };
+
+/** What became of a save; `conflict` as in `SaveSong`. */
+export type KeepGuitar = AddGuitar | { outcome: "conflict"; current: StoredGuitar } | { outcome: "gone" };
 
 const pitches = z.array(z.int().min(0).max(127)).min(4).max(12);
 const badge = z.enum(badgeShapes);
@@ -126,7 +125,7 @@ export async function createGuitar(
   trx: Knex.Transaction,
   member: OfAct,
   fields: GuitarFields,
-): Promise<KeepGuitar> {
+): Promise<AddGuitar> {
   const by = await holderOfShortName(trx, member, fields.shortName, null);
   if (by !== null) return { outcome: "short-name-taken", by };
   const id = nanoid(16);

@@ -3,6 +3,7 @@ import { parseWithZod } from "@conform-to/zod/v4";
 import { Plus } from "lucide-react";
 import type { ReactNode } from "react";
 import { Form, useNavigation } from "react-router";
+import { SaveBar } from "#app/components/save-bar.tsx";
 import { SongFacts } from "#app/components/songs/song-facts.tsx";
 import { WayFields } from "#app/components/songs/way-fields.tsx";
 import { Button } from "#app/components/ui/button.tsx";
@@ -101,18 +102,7 @@ export function SongForm({
             ) : null}
           </div>
         </div>
-        <div className="fixed inset-x-0 bottom-0 z-10 flex flex-wrap items-center gap-x-4 gap-y-1 border-grey-200 border-t bg-ground px-4 py-3 md:sticky md:px-6">
-          <Button type="submit" look="primary" disabled={saving} className="grow md:grow-0">
-            {saving ? "Saving" : saveLabel}
-          </Button>
-          {form.errors?.map((error) => (
-            <Warning key={error}>{error}</Warning>
-          ))}
-          {form.status === "error" && !form.errors ? (
-            <Warning>Not saved. See the fields marked above.</Warning>
-          ) : null}
-          {form.dirty ? null : status}
-        </div>
+        <SaveBar form={form} saving={saving} label={saveLabel} status={status} />
       </Form>
     </FormProvider>
   );

@@ -1,0 +1,48 @@
+import { Link } from "react-router";
+import { CapoPicture } from "#app/components/guitars/capo-picture.tsx";
+import { coverWords } from "#app/components/guitars/capo-words.ts";
+import { PostButton } from "#app/components/post-button.tsx";
+import type { ActCapo } from "#app/domain/repertoire/guitar.ts";
+
+/** The kinds of capo an act owns, one row each. */
+export function CapoList({ capos, mayEdit }: { capos: readonly ActCapo[]; mayEdit: boolean }) {
+  return (
+    <ul className="border-grey-200 border-t">
+      {capos.map((capo) => (
+        <li key={capo.id} className="border-grey-200 border-b bg-white hover:bg-ground">
+          <div className="relative grid min-h-13 grid-cols-[5rem_minmax(0,1fr)_auto] items-center gap-x-4 px-4 py-2 md:px-6 lg:grid-cols-[4.5rem_minmax(0,1fr)_12.5rem_8.5rem_6rem]">
+            <CapoPicture strings={capo.strings} count={Math.max(6, ...(capo.strings ?? []))} />
+            <p className="truncate">
+              {mayEdit ? (
+                <Link
+                  to={`/capos/${capo.id}`}
+                  className="font-display font-semibold text-lg underline-offset-4 after:absolute after:inset-0 hover:underline"
+                >
+                  {capo.name}
+                </Link>
+              ) : (
+                <span className="font-display font-semibold text-lg">{capo.name}</span>
+              )}
+            </p>
+            <p className="text-sm max-lg:col-start-2 max-lg:row-start-2">{coverWords(capo.strings)}</p>
+            <p className="text-sm max-lg:col-start-3 max-lg:row-start-1">
+              {capo.count === 1 ? "One of them" : `${capo.count} of them`}
+            </p>
+            {mayEdit ? (
+              <div className="relative z-10 justify-self-end max-lg:hidden">
+                <PostButton
+                  small
+                  look="quiet"
+                  action={`/capos/${capo.id}/delete`}
+                  aria-label={`Delete ${capo.name}`}
+                >
+                  Delete
+                </PostButton>
+              </div>
+            ) : null}
+          </div>
+        </li>
+      ))}
+    </ul>
+  );
+}
