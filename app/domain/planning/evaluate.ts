@@ -1,4 +1,5 @@
 import type { Neck } from "#app/domain/music/neck.ts";
+import { weigh } from "#app/domain/planning/aim.ts";
 import type { Gap, GuitarBefore, Play, Totals, Work } from "#app/domain/planning/answer.ts";
 import { type Breach, orderBreaches } from "#app/domain/planning/breaches.ts";
 import {
@@ -9,15 +10,8 @@ import {
   semitonesOf,
 } from "#app/domain/planning/change.ts";
 import { movedSongs } from "#app/domain/planning/moved.ts";
-import {
-  type Aim,
-  coverInto,
-  mayPlay,
-  type NeckChoice,
-  type Problem,
-  type ProblemGuitar,
-  type ProblemSong,
-} from "#app/domain/planning/problem.ts";
+import { coverInto, mayPlay } from "#app/domain/planning/playable.ts";
+import type { NeckChoice, Problem, ProblemGuitar, ProblemSong } from "#app/domain/planning/problem.ts";
 import { type TechJob, techShift } from "#app/domain/planning/tech-shift.ts";
 
 /** A gap with what talk covers of it and what is left as dead air, both in seconds. */
@@ -45,22 +39,6 @@ type Due = {
   seconds: number;
   resting: boolean;
 };
-
-/**
- * The weighted total that is kept low.
- *
- * @example weigh({ exposed: 100, seconds: 1, … }, { exposed: 9, seconds: 21, … }) // 100 × 9 + 21 + …
- */
-export function weigh(aim: Aim, totals: Totals): number {
-  return (
-    aim.exposed * totals.exposed +
-    aim.seconds * totals.seconds +
-    aim.strings * totals.strings +
-    aim.semitones * totals.semitones +
-    aim.capoActions * totals.capoActions +
-    aim.swaps * totals.swaps
-  );
-}
 
 function stepsOf(problem: Problem, order: string[], plays: Play[]): Step[] {
   const songs = new Map(problem.songs.map((song) => [song.id, song]));

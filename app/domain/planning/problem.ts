@@ -1,4 +1,8 @@
 import type { Neck } from "#app/domain/music/neck.ts";
+import { type BadProblem, bad } from "#app/domain/planning/bad-problem.ts";
+import { crossCheck } from "#app/domain/planning/problem-cross-checks.ts";
+import { problemShape } from "#app/domain/planning/problem-shape.ts";
+import { shapeProblems } from "#app/domain/planning/shape-problems.ts";
 
 /** `alone`: the performer does everything on stage. `tech`: somebody changes resting guitars while songs play. */
 export type Crew = "alone" | "tech";
@@ -71,42 +75,23 @@ export type Problem = {
   maxMoved: number | null;
 };
 
-/** Least dead air first; the small weights see to it that nothing pointless is proposed. */
-export const defaultAim: Aim = {
-  exposed: 100,
-  seconds: 1,
-  strings: 1,
-  semitones: 0,
-  capoActions: 1,
-  swaps: 1,
-};
+export type ParsedProblem = { ok: true; problem: Problem } | { ok: false; problems: BadProblem[] };
+
+const MOST_LISTED = 1000;
 
 /**
- * Seconds of the gap into a song that talk and applause fill anyway.
+ * Reads a problem from any JSON value. What may be left out is filled in (check, cover, aim.exposed and keeps; a song's
+ * cover as `null`); otherwise all that is wrong is listed, up to a thousand lines. Never throws.
  *
- * @example coverInto({ cover: 12 }, { cover: null }) // 12
+ * @example parseProblem({ version: 2 }) // { ok: false, problems: [{ code: "unknown-value", path: "version", … }, …] }
  */
-export function coverInto(times: Pick<Times, "cover">, song: Pick<ProblemSong, "cover">): number {
-  return song.cover ?? times.cover;
-}
-
-/**
- * Whether a guitar can be tuned to a neck: as many strings, and each open pitch within its string's range.
- * Which guitars a song names is another question, see `mayPlay`.
- *
- * @example fitsGuitar({ strings: 1, lowest: [38], highest: [42] }, { open: [40] }) // true
- */
-export function fitsGuitar(
-  guitar: Pick<ProblemGuitar, "strings" | "lowest" | "highest">,
-  neck: Pick<Neck, "open">,
-): boolean {
-  return (
-    neck.open.length === guitar.strings &&
-    neck.open.every((pitch, i) => pitch >= guitar.lowest[i]! && pitch <= guitar.highest[i]!)
-  );
-}
-
-/** Whether a song may be played in this way on this guitar: the song allows the guitar, and the neck fits it. */
-export function mayPlay(guitar: ProblemGuitar, neck: NeckChoice): boolean {
-  return (neck.guitars === null || neck.guitars.includes(guitar.id)) && fitsGuitar(guitar, neck);
+export function parseProblem(input: unknown): ParsedProblem {
+  const parsed = problemShape.safeParse(input);
+  const shape = parsed.success ? [] : parsed.error.issues.flatMap((issue) => shapeProblems(issue, input));
+  const problems = [...shape, ...crossCheck(input)];
+  if (parsed.success && problems.length === 0) return { ok: true, problem: parsed.data };
+  if (problems.length <= MOST_LISTED) return { ok: false, problems };
+  const rest = problems.length - MOST_LISTED;
+  const more = bad("more", [], `${rest} more things are wrong.`, "Mend these first.");
+  return { ok: false, problems: [...problems.slice(0, MOST_LISTED), more] };
 }

@@ -1,0 +1,80 @@
+import { z } from "zod";
+
+export const LIMITS = { songs: 100, guitars: 12, strings: 12, necks: 12, fret: 24 } as const;
+
+const whole = z.number().refine(Number.isInteger, { params: { code: "not-whole" } });
+const notNegative = z.number().nonnegative();
+const wholeBetween = (low: number, high: number) =>
+  z.number().refine((value) => Number.isInteger(value) && value >= low && value <= high, {
+    params: { code: "out-of-range", low, high },
+  });
+
+const midi = wholeBetween(0, 127);
+
+const capo = z.strictObject({
+  fret: wholeBetween(1, LIMITS.fret),
+  strings: z.array(whole).min(1),
+});
+
+const neckFields = { open: z.array(midi), capos: z.array(capo) };
+
+const guitar = z.strictObject({
+  id: z.string(),
+  strings: wholeBetween(1, LIMITS.strings),
+  lowest: z.array(midi),
+  highest: z.array(midi),
+  start: z.strictObject(neckFields).nullable(),
+  keeps: z.boolean().default(false),
+});
+
+const song = z.strictObject({
+  id: z.string(),
+  seconds: notNegative,
+  section: whole,
+  cover: notNegative.nullable().default(null),
+  necks: z
+    .array(z.strictObject({ ...neckFields, guitars: z.array(z.string()).nullable(), penalty: notNegative }))
+    .max(LIMITS.necks),
+});
+
+const pair = z.tuple([z.string(), z.string()]);
+
+/** The shape of a problem; what needs two fields to be seen is in `problem-cross-checks.ts`. */
+export const problemShape = z.strictObject({
+  version: z.literal(1),
+  crew: z.enum(["alone", "tech"]),
+  times: z.strictObject({
+    string: notNegative,
+    semitone: notNegative,
+    capoMove: notNegative,
+    capoOn: notNegative,
+    capoOff: notNegative,
+    swap: notNegative,
+    check: notNegative.default(0),
+    cover: notNegative.default(0),
+  }),
+  aim: z.strictObject({
+    exposed: notNegative.default(0),
+    seconds: notNegative,
+    strings: notNegative,
+    semitones: notNegative,
+    capoActions: notNegative,
+    swaps: notNegative,
+  }),
+  guitars: z.array(guitar).max(LIMITS.guitars),
+  songs: z.array(song).max(LIMITS.songs),
+  order: z.array(z.string()),
+  rules: z.strictObject({
+    at: z.custom<Record<string, number>>(isPlainRecord, {
+      params: { code: "wrong-type", wanted: "an object" },
+    }),
+    before: z.array(pair),
+    into: z.array(pair),
+    apart: z.array(pair),
+  }),
+  maxMoved: whole.nonnegative().nullable(),
+});
+
+function isPlainRecord(value: unknown): boolean {
+  return typeof value === "object" && value !== null && !Array.isArray(value);
+}
