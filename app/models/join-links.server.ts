@@ -102,7 +102,7 @@ export type JoinOutcome = "joined" | "already" | Exclude<JoinLinkState, "open"> 
  * Lets a person into an act by its link. The link is locked first, so of two people who press at once one gets in.
  * Somebody who is in the act already does not use it up. Needs a transaction.
  */
-export async function useJoinLink(
+export async function takeJoinLink(
   trx: Knex.Transaction,
   token: string,
   personId: string,

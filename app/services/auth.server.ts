@@ -2,22 +2,27 @@ import { Authenticator } from "remix-auth";
 import { FormStrategy } from "remix-auth-form";
 import type { SignUp } from "#app/domain/people/account-forms.ts";
 import { createAct } from "#app/models/acts.server.ts";
-import { type JoinOutcome, useJoinLink } from "#app/models/join-links.server.ts";
+import { type JoinOutcome, takeJoinLink } from "#app/models/join-links.server.ts";
 import { addMembership } from "#app/models/memberships.server.ts";
-import { createPerson, findPasswordHash } from "#app/models/people.server.ts";
+import {
+  createPerson,
+  findPasswordHash,
+  findPasswordHashOf,
+  updatePasswordHash,
+} from "#app/models/people.server.ts";
 import { getDb, transact } from "#app/services/db.server.ts";
 import { hashPassword, isPassword } from "#app/services/password.server.ts";
 import { countTry, forgetTries, waitWords } from "#app/services/rate-limit.server.ts";
-import { rememberAct } from "#app/services/session.server.ts";
+import { rememberAct, revokeSessions, startSession } from "#app/services/session.server.ts";
+
+type Refused<Field extends string> = { refused: string; status: 400 | 409 | 410 | 429; field?: Field };
 
 /** Who signed in or up, or why not, in words for the form. */
-export type Entry =
-  | { personId: string; actId?: string }
-  | { refused: string; status: 400 | 409 | 410 | 429; field?: "email" };
+export type Entry = { personId: string; actId?: string } | Refused<"email">;
 
 const wrong = "No account has this e-mail address and password. Check both, or sign up.";
 
-function tooMany(seconds: number): Entry {
+function tooMany(seconds: number): Refused<never> {
   return { refused: `That was too many tries. Wait ${waitWords(seconds)}, then try again.`, status: 429 };
 }
 
@@ -29,8 +34,8 @@ async function checkSignIn(form: FormData, ip: string): Promise<Entry> {
   const wait = (await countTry("sign-in", ip, email)) ?? (await countTry("sign-in-place", ip));
   if (wait !== null) return tooMany(wait);
   const known = await findPasswordHash(getDb(), email);
-  if (!(await isPassword(password, known?.passwordHash ?? null)) || !known)
-    return { refused: wrong, status: 400 };
+  const right = await isPassword(password, known?.passwordHash ?? null);
+  if (!right || !known) return { refused: wrong, status: 400 };
   await forgetTries("sign-in", ip, email);
   return { personId: known.personId };
 }
@@ -71,7 +76,7 @@ export async function signUpToJoin(form: Omit<SignUp, "actName">, token: string,
     return await transact(getDb(), async (trx) => {
       const personId = await createPerson(trx, { ...form, passwordHash });
       if (!personId) return taken;
-      const { outcome, actId } = await useJoinLink(trx, token, personId, new Date());
+      const { outcome, actId } = await takeJoinLink(trx, token, personId, new Date());
       if (outcome !== "joined" || !actId) throw new LinkRefused(outcome);
       return { personId, actId };
     });
@@ -83,8 +88,38 @@ export async function signUpToJoin(form: Omit<SignUp, "actName">, token: string,
 
 /** Takes somebody who is signed in into the act that a join link leads to: the Set-Cookie that shows it; null if it cannot. */
 export async function joinAct(request: Request, personId: string, token: string): Promise<string | null> {
-  const { actId } = await transact(getDb(), (trx) => useJoinLink(trx, token, personId, new Date()));
+  const { actId } = await transact(getDb(), (trx) => takeJoinLink(trx, token, personId, new Date()));
   return actId && rememberAct(request, actId);
+}
+
+/** Starts an act with this person as its owner and opens it: the Set-Cookie that shows it. */
+export async function startAct(request: Request, personId: string, name: string): Promise<string> {
+  const actId = await transact(getDb(), async (trx) => {
+    const id = await createAct(trx, name);
+    await addMembership(trx, id, personId, "owner");
+    return id;
+  });
+  return rememberAct(request, actId);
+}
+
+type PasswordChange = { cookie: string } | Refused<"current">;
+
+/** Changes a password for somebody who knows the old one, and ends every session but a fresh one. */
+export async function changePassword(
+  request: Request,
+  member: { personId: string; actId: string },
+  form: { current: string; password: string },
+): Promise<PasswordChange> {
+  const wait = await countTry("password", member.personId);
+  if (wait !== null) return tooMany(wait);
+  const hash = await findPasswordHashOf(getDb(), member.personId);
+  if (!(await isPassword(form.current, hash))) {
+    return { refused: "This is not the password that you have now.", status: 400, field: "current" };
+  }
+  await forgetTries("password", member.personId);
+  await updatePasswordHash(getDb(), member.personId, await hashPassword(form.password));
+  await revokeSessions(member.personId, "others", null);
+  return { cookie: await startSession(request, member.personId, member.actId) };
 }
 
 /** Rolls the new person back where the link does not let them in. */

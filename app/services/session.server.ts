@@ -12,6 +12,8 @@ import {
   findSession,
   insertSession,
   prolongSession,
+  revokeOtherSessions,
+  revokeSession,
   type SessionData,
   updateSession,
 } from "#app/models/sessions.server.ts";
@@ -111,6 +113,16 @@ export async function rememberAct(request: Request, actId: string): Promise<stri
   const session = await sessions.getSession(request.headers.get("Cookie"));
   session.set("actId", actId);
   return sessions.commitSession(session);
+}
+
+/** Ends one of a person's sessions, or all but the one that is kept (all of them where that is null). */
+export async function revokeSessions(
+  personId: string,
+  which: string,
+  keptHash: string | null,
+): Promise<void> {
+  if (which === "others") await revokeOtherSessions(getDb(), personId, keptHash ?? "");
+  else await revokeSession(getDb(), personId, which);
 }
 
 /** Lets a session in use live on: the Set-Cookie, at most once an hour; null in between. */
