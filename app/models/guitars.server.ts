@@ -80,8 +80,11 @@ function guitarToRow(fields: GuitarFields) {
   };
 }
 
+/** The day on which strings were fitted is asked for as text: a day has no zone to be moved by. */
 function guitarsOf(db: Knex, member: OfAct) {
-  return db("guitars").where({ act_id: member.actId }).select<GuitarRow[]>("*");
+  return db("guitars")
+    .where({ act_id: member.actId })
+    .select<GuitarRow[]>("*", db.raw("date_format(strung_on, '%Y-%m-%d') as strung_on"));
 }
 
 /** The act's guitars, by name. */

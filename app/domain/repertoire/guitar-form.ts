@@ -1,7 +1,7 @@
 import { z } from "zod";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import { defaultReach } from "#app/domain/music/range.ts";
-import { readTuning } from "#app/domain/music/tuning.ts";
+import { readTuning, type TuningReading } from "#app/domain/music/tuning.ts";
 import { usualTuningFor } from "#app/domain/music/usual-tuning.ts";
 import {
   bareBAnswer,
@@ -10,7 +10,12 @@ import {
   requiredText,
   tick,
 } from "#app/domain/repertoire/form-fields.ts";
-import { badgeShapes, type Guitar, instrumentKinds } from "#app/domain/repertoire/guitar.ts";
+import {
+  badgeShapes,
+  type Guitar,
+  type InstrumentKind,
+  instrumentKinds,
+} from "#app/domain/repertoire/guitar.ts";
 
 /** What a person writes of a guitar. */
 export type GuitarFields = Omit<Guitar, "id">;
@@ -59,6 +64,29 @@ function dateField() {
     });
 }
 
+/** The fields that say together what a guitar is usually tuned to. */
+type UsualParts = {
+  kind: InstrumentKind;
+  strings: number | null;
+  usual?: string | undefined;
+  bareB?: "natural" | "flat" | undefined;
+};
+
+const usualStrings = 6;
+
+function usualReading({ kind, strings, usual, bareB }: UsualParts, naming: Naming): TuningReading {
+  const own = usualTuningFor(kind, strings ?? usualStrings);
+  return readTuning(usual?.trim() ? usual : "usual", { usual: own, naming, bareB });
+}
+
+/** Whether kind and strings were understood, so that a tuning can be read even where other fields are wrong. */
+function saysWhatItIs(value: unknown): value is UsualParts {
+  const { kind, strings } = value as Partial<UsualParts>;
+  const { least, most } = guitarLimits.strings;
+  const count = strings === null || (typeof strings === "number" && strings >= least && strings <= most);
+  return count && instrumentKinds.some((known) => known === kind);
+}
+
 /**
  * The form of a guitar or any other stringed instrument, for the browser and the server alike. The usual tuning may
  * be left out: then it is the kind's own. How far each string goes is typed as semitones below and above its usual
@@ -87,19 +115,18 @@ export function guitarFormSchema({ naming, others }: GuitarFormReader) {
       strungOn: dateField(),
       notes: optionalText(guitarLimits.notes),
     })
+    .refine((guitar) => usualReading(guitar, naming).ok, {
+      path: ["usual"],
+      when: ({ value }) => saysWhatItIs(value),
+      error: ({ input }) => {
+        const reading = usualReading(input as UsualParts, naming);
+        return reading.ok ? "" : reading.message;
+      },
+    })
     .transform(({ bareB, below, above, ...guitar }, context): GuitarFields => {
-      const strings = guitar.strings ?? 6;
-      const own = usualTuningFor(guitar.kind, strings);
-      const reading = readTuning(guitar.usual?.trim() ? guitar.usual : "usual", {
-        usual: own,
-        naming,
-        bareB,
-      });
-      if (!reading.ok) {
-        context.addIssue({ code: "custom", path: ["usual"], message: reading.message });
-        return z.NEVER;
-      }
-      const spareFor = guitar.spareFor ?? null;
+      const reading = usualReading({ ...guitar, bareB }, naming);
+      if (!reading.ok) return z.NEVER;
+      const spareFor = guitar.spareFor || null;
       if (spareFor !== null && !others.includes(spareFor)) {
         const message = "That guitar is no longer in the act. Reload the page and choose again.";
         context.addIssue({ code: "custom", path: ["spareFor"], message });
@@ -108,7 +135,7 @@ export function guitarFormSchema({ naming, others }: GuitarFormReader) {
       const usual = reading.open;
       return {
         ...guitar,
-        strings,
+        strings: usual.length,
         spareFor,
         usual,
         lowest: usual.map((midi, index) => Math.max(0, midi - (below?.[index] ?? defaultReach.below))),
