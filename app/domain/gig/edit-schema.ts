@@ -235,8 +235,12 @@ export const batchSchema = z.strictObject({
     .max(500, "A batch holds at most 500 edits."),
 }) satisfies z.ZodType<Batch>;
 
-/** What a window posts: its batches in their order, and the revision up to which it knows the gig. */
+/**
+ * What a window posts: its batches in their order, and the revision up to which it knows the gig. `person` is whose
+ * edits they are, where the sender says so.
+ */
 export const editsRequestSchema = z.strictObject({
+  person: idSchema.optional(),
   batches: z
     .array(batchSchema)
     .min(1, "Send at least one batch.")

@@ -15,6 +15,8 @@ export async function loader({ params, context, url }: Route.LoaderArgs) {
     const message = "since is a revision: a whole number, 0 or more.";
     return Response.json({ problems: [{ path: "since", message }] }, { status: 400 });
   }
+  const person = url.searchParams.get("person");
+  if (person !== null && person !== member.personId) return otherPerson();
   const news = (await gigNews(getDb(), member, params.gigId, Number(since))) ?? apiNotFound("gig");
   return Response.json(news, { headers: { "Cache-Control": "no-store" } });
 }
@@ -34,6 +36,14 @@ export async function action({ request, params, context }: Route.ActionArgs) {
     const problems = read.error.issues.map(({ path, message }) => ({ path: path.join("."), message }));
     return Response.json({ problems }, { status: 400 });
   }
+  const { person = member.personId } = read.data;
+  if (person !== member.personId) return otherPerson();
   const answer = (await applyBatches(getDb(), member, params.gigId, read.data)) ?? apiNotFound("gig");
   return Response.json(answer);
+}
+
+/** The window was opened by somebody else, who has signed out since: what it sends would be taken for the member's. */
+function otherPerson(): Response {
+  const message = "Somebody else has signed in. Sign in as the person whose edits these are.";
+  return Response.json({ message }, { status: 401 });
 }
