@@ -130,7 +130,7 @@ function gigWithSongs(songs: Song[], guitars: Map<string, string>, today: Date):
  */
 export async function seedDemo(db: Knex, passwordHash: string, today: Date): Promise<"seeded" | "present"> {
   if (await findPasswordHash(db, demoPeople[0].email)) return "present";
-  return db.transaction(async (trx) => {
+  return db.transaction(async (trx): Promise<"seeded"> => {
     const actId = await createAct(trx, demoAct);
     for (const { role, ...person } of demoPeople) {
       const personId = await createPerson(trx, { ...person, passwordHash });
