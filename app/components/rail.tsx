@@ -49,7 +49,7 @@ export function Rail({ displayName, actName }: RailProps) {
           key={place.to}
           to={place.to}
           className={({ isActive }) =>
-            `flex min-h-12 shrink-0 items-center border-b-2 px-2 font-display font-semibold last:pr-3 md:min-h-11 md:w-full md:justify-center md:border-b-0 md:border-l-2 md:px-1 ${
+            `flex min-h-12 shrink-0 items-center border-b-2 px-2 font-display font-semibold last:pr-3 md:last:pr-1 md:min-h-11 md:w-full md:justify-center md:border-b-0 md:border-l-2 md:px-1 ${
               isActive ? "border-white text-white" : "border-transparent text-grey-300 hover:text-white"
             }`
           }

@@ -35,6 +35,12 @@ export async function findActPerson(db: Knex, member: OfAct, personId: string): 
   return person ?? null;
 }
 
+/** Whether the act would be left without an owner if this person went. */
+export async function isLastOwner(db: Knex, member: OfAct, personId: string): Promise<boolean> {
+  const owners = await db("memberships").where({ act_id: member.actId, role: "owner" }).select("person_id");
+  return owners.length === 1 && owners[0].person_id === personId;
+}
+
 /** Takes a person into an act. False where they are in it already; their role stays as it is. */
 export async function addMembership(db: Knex, actId: string, personId: string, role: Role): Promise<boolean> {
   const known = await db("memberships").where({ act_id: actId, person_id: personId }).first("role");
@@ -46,17 +52,13 @@ export async function addMembership(db: Knex, actId: string, personId: string, r
 export type MembershipChange = "done" | "last-owner" | "gone";
 
 /**
- * The role of a person, with the act and all its owners locked until the transaction ends, so that two owners who
+ * The role of a person, with the act locked until the transaction ends, so that two owners who
  * step down in the same moment cannot both succeed.
  */
 async function roleUnderLock(trx: Knex, member: OfAct, personId: string) {
   await trx("acts").where({ id: member.actId }).forUpdate().first("id");
-  const owners = await trx("memberships").where({ act_id: member.actId, role: "owner" }).select("person_id");
   const row = await trx("memberships").where({ act_id: member.actId, person_id: personId }).first("role");
-  return {
-    role: (row?.role ?? null) as Role | null,
-    isLastOwner: owners.length === 1 && owners[0].person_id === personId,
-  };
+  return { role: (row?.role ?? null) as Role | null, isLastOwner: await isLastOwner(trx, member, personId) };
 }
 
 /** Gives a person another role. An act always keeps an owner. Needs a transaction. */

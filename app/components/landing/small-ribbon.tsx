@@ -1,10 +1,10 @@
 const strings = [
-  { weight: 3.4, path: "M280 0V170L271 188V368" },
-  { weight: 2.8, path: "M302 0V266L293 284V368" },
-  { weight: 2.3, path: "M324 0V368" },
-  { weight: 1.8, path: "M346 0V368" },
-  { weight: 1.4, path: "M368 0V368" },
-  { weight: 1.1, path: "M390 0V266L381 284V368" },
+  { weight: 3.4, path: "M280 0V170L271 188V348" },
+  { weight: 2.8, path: "M302 0V266L293 284V348" },
+  { weight: 2.3, path: "M324 0V348" },
+  { weight: 1.8, path: "M346 0V348" },
+  { weight: 1.4, path: "M368 0V348" },
+  { weight: 1.1, path: "M390 0V266L381 284V348" },
 ];
 
 const songs = [
@@ -30,7 +30,7 @@ const turns = [
 export function SmallRibbon() {
   return (
     <svg
-      viewBox="0 0 420 368"
+      viewBox="0 0 420 348"
       className="h-auto w-full font-display"
       role="img"
       aria-labelledby="small-ribbon"
@@ -39,7 +39,7 @@ export function SmallRibbon() {
         Four songs in order, with the strings of a guitar running down beside them. Strings that are retuned
         between two songs step aside there; a capo lies across the strings for two songs.
       </title>
-      <rect width="252" height="368" fill="var(--color-white)" />
+      <rect width="252" height="348" fill="var(--color-white)" />
       {gaps.map((gap) => (
         <g key={gap.y} fontSize="14">
           <rect y={gap.y} width="252" height="36" fill="var(--color-ground)" />

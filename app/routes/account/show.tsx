@@ -35,23 +35,25 @@ export default function AccountPage({ loaderData, actionData }: Route.ComponentP
         <PostButton action="/sign-out">Sign out</PostButton>
       </PageHead>
       <div className="grid max-w-5xl gap-x-16 gap-y-10 px-4 py-5 md:px-6 lg:grid-cols-2">
-        <section className="flex flex-col gap-3">
-          <h2 className="font-semibold text-xl">Your acts</h2>
-          <ActList acts={acts} actId={actId} personId={personId} />
-          <ButtonLink to="/act/new" className="self-start">
-            Start another act
-          </ButtonLink>
-        </section>
+        <div className="flex flex-col gap-10">
+          <section className="flex flex-col gap-3">
+            <h2 className="font-semibold text-xl">Your acts</h2>
+            <ActList acts={acts} actId={actId} personId={personId} />
+            <ButtonLink to="/act/new" className="self-start">
+              Start another act
+            </ButtonLink>
+          </section>
+          <section className="flex flex-col items-start gap-3">
+            <h2 className="font-semibold text-xl">Signing in</h2>
+            <div className="flex flex-wrap gap-2">
+              <ButtonLink to="/account/password">Change the password</ButtonLink>
+              <ButtonLink to="/account/sessions">See where you are signed in</ButtonLink>
+            </div>
+          </section>
+        </div>
         <section className="flex flex-col gap-3">
           <h2 className="font-semibold text-xl">You and how you read</h2>
           <PreferencesForm preferences={preferences} lastResult={actionData} />
-        </section>
-        <section className="flex flex-col items-start gap-3">
-          <h2 className="font-semibold text-xl">Signing in</h2>
-          <div className="flex flex-wrap gap-2">
-            <ButtonLink to="/account/password">Change the password</ButtonLink>
-            <ButtonLink to="/account/sessions">See where you are signed in</ButtonLink>
-          </div>
         </section>
       </div>
     </>

@@ -54,7 +54,12 @@ export default function SignInPage({ loaderData, actionData }: Route.ComponentPr
         </>
       }
     >
-      <Form method="post" {...getFormProps(form)} className="flex flex-col gap-5">
+      <Form
+        method="post"
+        action={`/sign-in?to=${encodeURIComponent(loaderData.to)}`}
+        {...getFormProps(form)}
+        className="flex flex-col gap-5"
+      >
         <FormErrors id={form.errorId} errors={form.errors} />
         <TextInput field={fields.email} type="email" label="E-mail" autoComplete="username" />
         <TextInput field={fields.password} type="password" label="Password" autoComplete="current-password" />
