@@ -1,12 +1,17 @@
+import { readdirSync } from "node:fs";
 import { reactRouter } from "@react-router/dev/vite";
 import tailwindcss from "@tailwindcss/vite";
 import { defineConfig, type Plugin } from "vite";
 
+/** What runs in threads beside the server: app/workers/planner.node.ts becomes planner.node.js. */
+const nodeWorkers = readdirSync("app/workers")
+  .filter((file) => file.endsWith(".node.ts"))
+  .map((file) => [file.replace(/\.ts$/, ""), `app/workers/${file}`]);
+
 /**
- * One server build with three entries: the pages, the server that serves them, and the workers of the
- * planner and of passwords. The
- * framework names every entry alike; this comes after it and gives each its own name, all in one folder, so that the
- * server finds the worker beside itself.
+ * One server build with several entries: the pages, the server that serves them, and the workers. The framework names
+ * every entry alike; this comes after it and gives each its own name, all in one folder, so that the server finds its
+ * workers beside itself.
  */
 function serverEntries(): Plugin {
   return {
@@ -21,8 +26,7 @@ function serverEntries(): Plugin {
             input: {
               index: "virtual:react-router/server-build",
               serve: "app/launch/serve.ts",
-              "planner.node": "app/workers/planner.node.ts",
-              "password.node": "app/workers/password.node.ts",
+              ...Object.fromEntries(nodeWorkers),
             },
             output: { entryFileNames: "[name].js", chunkFileNames: "[name]-[hash].js" },
           },

@@ -8,7 +8,13 @@ const resolve = { tsconfigPaths: true };
 const base = {
   environment: "node",
   setupFiles: [fixedSeed],
-  env: { NODE_ENV: "test", SESSION_SECRET: secret, PASSWORD_PEPPER: secret, LOG_LEVEL: "silent" },
+  env: {
+    NODE_ENV: "test",
+    SESSION_SECRET: secret,
+    PASSWORD_PEPPER: secret,
+    PASSWORD_COST: "4",
+    LOG_LEVEL: "silent",
+  },
 };
 
 const withDatabase = {

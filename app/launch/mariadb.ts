@@ -10,12 +10,12 @@ import {
   rmSync,
   writeFileSync,
 } from "node:fs";
-import { createServer } from "node:net";
 import { tmpdir } from "node:os";
 import { setTimeout as pause } from "node:timers/promises";
 import { createConnection } from "mysql2/promise";
 import { findMariaDb, type MariaDbPrograms } from "./mariadb-programs.ts";
 import { PlainError } from "./plain-error.ts";
+import { freePort, obstacle } from "./ports.ts";
 import { endProcess, isAlive, markOf, type ProcessMark, run } from "./processes.ts";
 
 /** What is remembered of a private server between starts, in a file that only its owner may read. */
@@ -50,7 +50,7 @@ export async function startMariaDb(folder: string, options: MariaDbOptions = {})
   mkdirSync(folder, { recursive: true, mode: 0o700 });
   const known = await prepare(folder, programs);
   await endLeftBehind(folder);
-  const port = (await isFree(known.port)) ? known.port : await freePort();
+  const port = (await obstacle("127.0.0.1", known.port)) ? await freePort() : known.port;
   if (port !== known.port) remember(folder, { ...known, port });
   return launch(folder, programs, { ...known, port }, options);
 }
@@ -216,25 +216,6 @@ function remember(folder: string, known: Remembered): void {
   const file = `${folder}/server.json`;
   writeFileSync(`${file}.new`, `${JSON.stringify(known, null, 2)}\n`, { mode: 0o600 });
   renameSync(`${file}.new`, file);
-}
-
-function isFree(port: number): Promise<boolean> {
-  return new Promise((resolve) => {
-    const probe = createServer();
-    probe.once("error", () => resolve(false));
-    probe.listen(port, "127.0.0.1", () => probe.close(() => resolve(true)));
-  });
-}
-
-function freePort(): Promise<number> {
-  return new Promise((resolve, reject) => {
-    const probe = createServer();
-    probe.once("error", reject);
-    probe.listen(0, "127.0.0.1", () => {
-      const address = probe.address();
-      probe.close(() => resolve(typeof address === "object" && address ? address.port : 0));
-    });
-  });
 }
 
 function lastError(log: string): string {

@@ -40,11 +40,11 @@ function signal(pid: number, name: NodeJS.Signals): void {
   }
 }
 
-/** Runs a program to its end and answers with what it wrote. */
+/** Runs a program to its end and answers with what it wrote. An aborted signal ends it and rejects. */
 export async function run(
   command: string,
   args: readonly string[],
-  options: { cwd?: string; env?: NodeJS.ProcessEnv } = {},
+  options: { cwd?: string; env?: NodeJS.ProcessEnv; signal?: AbortSignal } = {},
 ): Promise<{ code: number; output: string }> {
   const child = spawn(command, args, { ...options, stdio: ["ignore", "pipe", "pipe"] });
   const parts: Buffer[] = [];

@@ -1,6 +1,9 @@
 import { z } from "zod";
 
-const port = z.coerce.number().int().min(1).max(65535);
+function whole(least: number, most: number) {
+  const error = `must be a whole number from ${least} to ${most}`;
+  return z.coerce.number(error).int(error).min(least, error).max(most, error);
+}
 
 /** `false`, a number of proxies, or a comma-separated list of their addresses. */
 const trustProxy = z
@@ -11,7 +14,8 @@ const trustProxy = z
     return /^\d+$/.test(value) ? Number(value) : value;
   });
 
-const level = z.enum(["fatal", "error", "warn", "info", "debug", "trace", "silent"]).default("info");
+const levels = ["fatal", "error", "warn", "info", "debug", "trace", "silent"] as const;
+const level = z.enum(levels, `must be one of ${levels.join(", ")}`).default("info");
 
 const schema = z
   .object({
@@ -22,16 +26,16 @@ const schema = z
     }),
     SESSION_SECRET: z.string().min(32, "must be at least 32 characters, made at random"),
     PASSWORD_PEPPER: z.string().min(32, "must be at least 32 characters, made at random and never changed"),
-    PASSWORD_COST: z.coerce.number().int().min(4).max(15).default(12),
+    PASSWORD_COST: whole(4, 15).default(12),
     HOST: z.string().min(1).default("127.0.0.1"),
-    PORT: port.default(4780),
+    PORT: whole(1, 65_535).default(4780),
     PUBLIC_URL: z
       .url({ protocol: /^https?$/, error: "must be the http:// or https:// address people type" })
       .optional(),
     TRUST_PROXY: trustProxy,
     LOG_LEVEL: level,
-    DATABASE_CONNECTIONS: z.coerce.number().int().min(1).max(200).default(10),
-    PLANNER_THREADS: z.coerce.number().int().min(1).max(32).optional(),
+    DATABASE_CONNECTIONS: whole(1, 200).default(10),
+    PLANNER_THREADS: whole(1, 32).optional(),
   })
   .transform((env) => ({
     ...env,

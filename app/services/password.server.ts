@@ -48,6 +48,10 @@ let nobody: Promise<string> | null = null;
 /** Whether a password is right. Without a hash it takes as long and says no: the time tells nobody who has an account. */
 export async function isPassword(password: string, hash: string | null): Promise<boolean> {
   nobody ??= hashPassword("nobody's");
+  // The pool may be closed while it works on this: the next to ask begins again.
+  nobody.catch(() => {
+    nobody = null;
+  });
   const known = hash ?? (await nobody);
   const same = await run({ secret: secretOf(password), hash: known });
   return hash !== null && same === true;
