@@ -103,12 +103,19 @@ export function rebase(queue: Queue): Queue {
 /**
  * Makes an edit: it shows at once and waits to be sent. One that changes nothing is dropped; one that cannot be is told.
  * @param id an id that no other batch has
+ * @param on the revision that the person saw when they began; left out: what they see now
  */
-export function makeEdit(queue: Queue, id: string, edits: readonly Edit[], label: string): Queue {
+export function makeEdit(
+  queue: Queue,
+  id: string,
+  edits: readonly Edit[],
+  label: string,
+  on = queue.base.revision,
+): Queue {
   return push(queue, {
     id,
     client: queue.client,
-    on: queue.base.revision,
+    on,
     label,
     undoes: null,
     edits: [...edits],

@@ -41,7 +41,7 @@ export type GigSync = {
   unkept: () => boolean;
   subscribe: (listener: () => void) => () => void;
   start: (browser: SyncBrowser) => () => void;
-  edit: (edits: Edit[], label: string) => void;
+  edit: (edits: Edit[], label: string, on?: number) => void;
   undo: () => void;
   redo: () => void;
   keepMine: (troubleId: string) => void;
@@ -182,7 +182,7 @@ export function gigSync(given: {
         callOff?.();
       };
     },
-    edit: (edits, label) => act(makeEdit(queue, newId(), edits, label)),
+    edit: (edits, label, on) => act(makeEdit(queue, newId(), edits, label, on)),
     undo: () => act(stepHistory(queue, newId(), "undo", names())),
     redo: () => act(stepHistory(queue, newId(), "redo", names())),
     keepMine: (id) => act(keepMine(queue, id, newId())),

@@ -19,7 +19,8 @@ export type GigEdits = {
   conflicts: Trouble[];
   /** What keeps edits from being sent, in words; null where nothing does. */
   notice: string | null;
-  edit: (edits: Edit[], label: string) => void;
+  /** `on` is the revision of the gig that the person saw when they began, where that was not just now. */
+  edit: (edits: Edit[], label: string, on?: number) => void;
   undo: () => void;
   redo: () => void;
   /** What undo would take back; null where there is nothing. */

@@ -192,3 +192,29 @@ export function gigFieldEdits(gig: Gig, next: GigFields): Edit[] {
   if (then.notes !== now.notes) edits.push({ kind: "gig.set", field: "notes", value: next.notes });
   return edits;
 }
+
+export type GigFormInput = z.input<typeof gigFormSchema>;
+export type NewGigFormInput = z.input<typeof newGigFormSchema>;
+export type NewGigFields = z.output<typeof newGigFormSchema>;
+export type DuplicateFormInput = z.input<ReturnType<typeof duplicateFormSchema>>;
+export type DuplicateFields = z.output<ReturnType<typeof duplicateFormSchema>>;
+
+/**
+ * What stands in the form of a new gig before anything is written.
+ * @example newGigValues("Europe/Dublin").crew // "alone"
+ */
+export function newGigValues(zone: string): NewGigFormInput {
+  return {
+    name: "",
+    venue: "",
+    date: "",
+    time: "20:00",
+    zone,
+    slot: "",
+    curfew: "",
+    crew: "alone",
+    notes: "",
+    sets: "1",
+    interval: String(usualIntervalMinutes),
+  };
+}

@@ -1,0 +1,95 @@
+import type { FieldMetadata, FormMetadata } from "@conform-to/react";
+import { Button } from "#app/components/ui/button.tsx";
+import { describedBy, fieldIds } from "#app/components/ui/field.tsx";
+import { Warning } from "#app/components/ui/warning.tsx";
+import { type Crew, defaultTimes, type GigTimes } from "#app/domain/gig/gig.ts";
+import { type GigFormInput, timeKeys, timeNames } from "#app/domain/gig/gig-form.ts";
+
+type GigTimesFieldsProps = {
+  // biome-ignore lint/suspicious/noExplicitAny: any form with these fields has what this needs
+  form: Pick<FormMetadata<any>, "update">;
+  times: FieldMetadata<GigFormInput["times"]>;
+  crew: Crew;
+};
+
+const groups: { title: string; keys: readonly (keyof GigTimes)[] }[] = [
+  { title: "Work", keys: timeKeys.filter((key) => !/cover/i.test(key)) },
+  { title: "Talk and applause", keys: timeKeys.filter((key) => /cover/i.test(key)) },
+];
+
+/** The seconds that work takes and talk covers; folded away, since the usual ones do for most gigs. */
+export function GigTimesFields({ form, times, crew }: GigTimesFieldsProps) {
+  const fields = times.getFieldset();
+  const own = timeKeys.filter((key) => (fields[key].value ?? "") !== "").length;
+  const wrong = timeKeys.some((key) => fields[key].errors?.length);
+  const words = own === 0 ? "usual" : own === 1 ? "1 of your own" : `${own} of your own`;
+  return (
+    <details className="border-grey-200 border-y" open={wrong || undefined}>
+      <summary className="flex min-h-11 flex-wrap items-center gap-x-3 font-display font-semibold">
+        Times
+        <span className="font-normal font-sans text-grey-600 text-sm">{words}</span>
+      </summary>
+      <div className="flex flex-col gap-4 pb-4">
+        <p className="text-grey-600 text-sm">
+          Seconds. Where a field is empty the usual time counts, shown in grey.
+        </p>
+        {groups.map(({ title, keys }) => (
+          <fieldset key={title} className="grid gap-x-6 gap-y-2 sm:grid-cols-2">
+            <legend className="pb-1 font-semibold text-base">{title}</legend>
+            {keys.map((key) => (
+              <Seconds
+                key={fields[key].key}
+                label={timeNames[key]}
+                usual={defaultTimes[crew][key]}
+                field={fields[key]}
+              />
+            ))}
+          </fieldset>
+        ))}
+        <Button
+          small
+          className="self-start"
+          {...form.update.getButtonProps({
+            name: times.name,
+            value: Object.fromEntries(timeKeys.map((key) => [key, ""])),
+          })}
+          disabled={own === 0}
+        >
+          Reset to usual times
+        </Button>
+      </div>
+    </details>
+  );
+}
+
+type SecondsProps = { label: string; usual: number; field: FieldMetadata<string | undefined> };
+
+function Seconds({ label, usual, field }: SecondsProps) {
+  const ids = fieldIds(field.id);
+  return (
+    <div>
+      <div className="flex items-center justify-between gap-3">
+        <label htmlFor={field.id} className="font-medium">
+          {label}
+        </label>
+        <input
+          id={field.id}
+          name={field.name}
+          defaultValue={field.initialValue}
+          placeholder={String(usual)}
+          inputMode="numeric"
+          className="tabular min-h-11 w-20 rounded-sm border border-grey-400 bg-white px-3 text-right text-base placeholder:text-grey-600 aria-[invalid=true]:border-2 aria-[invalid=true]:border-warning"
+          aria-invalid={field.errors?.length ? true : undefined}
+          aria-describedby={describedBy(ids, null, field.errors)}
+        />
+      </div>
+      {field.errors?.length ? (
+        <div id={ids.errorId}>
+          {field.errors.map((error) => (
+            <Warning key={error}>{error}</Warning>
+          ))}
+        </div>
+      ) : null}
+    </div>
+  );
+}

@@ -1,0 +1,21 @@
+import { redirect } from "react-router";
+import { deleteGig, findGigName } from "#app/models/gigs.server.ts";
+import { getDb } from "#app/services/db.server.ts";
+import { notFound, requireCan, requireMember } from "#app/services/member.server.ts";
+import type { Route } from "./+types/delete";
+
+export function loader() {
+  return redirect("/gigs");
+}
+
+export async function action({ params, context, url }: Route.ActionArgs) {
+  const member = requireMember(context, url);
+  requireCan(member, "plan");
+  const done = await deleteGig(getDb(), member, params.gigId);
+  if (!done && !(await findGigName(getDb(), member, params.gigId))) notFound("gig");
+  return redirect(`/gigs?deleted=${params.gigId}`);
+}
+
+export default function DeleteGig() {
+  return null;
+}
