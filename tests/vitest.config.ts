@@ -49,6 +49,7 @@ export default defineConfig({
         test: {
           ...base,
           ...withDatabase,
+          globalSetup: ["tests/support/start-build.ts", ...withDatabase.globalSetup],
           name: "browser",
           include: ["tests/browser/**/*.test.ts"],
           testTimeout: 60_000,

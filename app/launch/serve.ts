@@ -61,18 +61,15 @@ const lastResort: ErrorRequestHandler = (error, request, response, next) => {
   const status = error.code === "ERR_INVALID_URL" ? 400 : Number(error.status ?? 500);
   if (status >= 500)
     log.error({ err: error, method: request.method, path: request.path }, "a request failed");
-  const words: Record<number, string> = {
-    400: "This address cannot be read.",
-    404: "There is nothing at this address.",
-  };
-  response
-    .status(status)
-    .type("text/plain")
-    .send(
-      words[status] ??
-        "Something went wrong on our side, and it has been written to the log. Try again in a moment.",
-    );
+  response.status(status).type("text/plain").send(wordsFor(status));
 };
+
+function wordsFor(status: number): string {
+  if (status >= 500) {
+    return "Something went wrong on our side, and it has been written to the log. Try again in a moment.";
+  }
+  return status === 404 ? "There is nothing at this address." : "This address cannot be read.";
+}
 
 function serve(): void {
   const { HOST, PORT } = getEnv();
