@@ -75,7 +75,7 @@ export function allStrings(strings: number): number[] {
  * @example stringsInWords([1, 2, 6]) // "6, 2 and 1"
  * @example stringsInWords([3, 4, 5]) // "5-3"
  */
-function stringsInWords(strings: readonly number[]): string {
+export function stringsInWords(strings: readonly number[]): string {
   const parts = runs(strings);
   return parts.length < 2 ? parts.join("") : `${parts.slice(0, -1).join(", ")} and ${parts.at(-1)}`;
 }

@@ -1,0 +1,68 @@
+import { isFullCapo, stringsInWords } from "#app/domain/music/capo.ts";
+import type { Capo, Neck } from "#app/domain/music/neck.ts";
+import type { ActCapo, Guitar } from "#app/domain/repertoire/guitar.ts";
+
+/** More capos of a kind on necks at once than the act owns. */
+export type CapoShortage = {
+  entryId: string;
+  /** What kind it is, in words: "full capos", "capos over 5-1". */
+  kind: string;
+  needed: number;
+  owned: number;
+  message: string;
+};
+
+type Placed = {
+  entry: { id: string };
+  song: { title: string } | null;
+  guitar: Guitar | null;
+  neck: Neck | null;
+};
+
+function kindOf(capo: Capo, strings: number): string {
+  return isFullCapo(capo, strings) ? "full" : capo.strings.toSorted((a, b) => a - b).join();
+}
+
+function owned(kind: string, capos: readonly ActCapo[]): number {
+  return capos.reduce((sum, capo) => {
+    const own = capo.strings === null ? "full" : capo.strings.toSorted((a, b) => a - b).join();
+    return own === kind ? sum + capo.count : sum;
+  }, 0);
+}
+
+function words(kind: string): string {
+  return kind === "full" ? "full capos" : `capos over ${stringsInWords(kind.split(",").map(Number))}`;
+}
+
+/**
+ * Where a set first needs more capos of a kind than the act owns. A capo stays on its guitar until that guitar's next
+ * song wants it otherwise. An act that has listed no capos at all is not warned.
+ * @example capoShortages(rows, before, [{ id: "c", name: "Steel", strings: null, count: 1 }])[0]?.needed // 2
+ */
+export function capoShortages(
+  rows: readonly Placed[],
+  before: readonly { guitar: Guitar; neck: Neck }[],
+  capos: readonly ActCapo[],
+): CapoShortage[] {
+  if (capos.length === 0) return [];
+  const now = new Map(before.map(({ guitar, neck }) => [guitar.id, { guitar, neck }]));
+  const found = new Map<string, CapoShortage>();
+  for (const { entry, song, guitar, neck } of rows) {
+    if (!guitar || !neck) continue;
+    now.set(guitar.id, { guitar, neck });
+    const needed = new Map<string, number>();
+    for (const one of now.values()) {
+      for (const capo of one.neck.capos) {
+        const kind = kindOf(capo, one.guitar.strings);
+        needed.set(kind, (needed.get(kind) ?? 0) + 1);
+      }
+    }
+    for (const [kind, count] of needed) {
+      const have = owned(kind, capos);
+      if (count <= have || (found.get(kind)?.needed ?? 0) >= count) continue;
+      const message = `At ${song?.title ?? "this song"} ${count} ${words(kind)} are on necks at once; the act has ${have === 0 ? "none" : have}. Take one off a resting guitar, or borrow one.`;
+      found.set(kind, { entryId: entry.id, kind: words(kind), needed: count, owned: have, message });
+    }
+  }
+  return [...found.values()];
+}

@@ -1,0 +1,143 @@
+import type { Entry, Gig } from "#app/domain/gig/gig.ts";
+import { entriesOf } from "#app/domain/gig/order.ts";
+import type { Repertoire } from "#app/domain/gig/repertoire.ts";
+import { encoreOpener, rulesOf, straightInto } from "#app/domain/gig/set-rules.ts";
+import { canPlay, whyLeft } from "#app/domain/gig/why-left.ts";
+import type { Naming } from "#app/domain/music/note-names.ts";
+import { defaultAim } from "#app/domain/planning/aim.ts";
+import type { Play } from "#app/domain/planning/answer.ts";
+import type { Problem } from "#app/domain/planning/problem.ts";
+import type { Guitar } from "#app/domain/repertoire/guitar.ts";
+import type { Song, SongNeck } from "#app/domain/repertoire/song.ts";
+
+/** One set as a planning problem, with the way each song is played now and what had to be left out. */
+export type SetProblem = {
+  problem: Problem;
+  /** The present choice of every song in the problem. */
+  plays: Play[];
+  /** Entry id → why no guitar can play it. */
+  left: Map<string, string>;
+  /** Entry id → the song's ways in the order in which the problem lists them. */
+  necks: Map<string, SongNeck[]>;
+};
+
+/** The ways of a song that an entry's pins leave open. */
+function openNecks(entry: Entry, song: Song): SongNeck[] {
+  const pinsNeck = entry.pinned === "neck" || entry.pinned === "both";
+  const pinned = pinsNeck ? song.necks.filter((neck) => neck.id === entry.neckId) : [];
+  return pinned.length > 0 ? pinned : song.necks;
+}
+
+function openGuitars(entry: Entry, guitars: readonly Guitar[]): readonly Guitar[] {
+  const pinsGuitar = entry.pinned === "guitar" || entry.pinned === "both";
+  const pinned = pinsGuitar ? guitars.filter((guitar) => guitar.id === entry.guitarId) : [];
+  return pinned.length > 0 ? pinned : guitars;
+}
+
+/** How an entry is played now: as it says where that can be, else the first way in order of preference that can. */
+function presentPlay(entry: Entry, necks: readonly SongNeck[], guitars: readonly Guitar[]): Play | null {
+  const asked = necks.findIndex((neck) => neck.id === entry.neckId);
+  const order = asked >= 0 ? [asked, ...necks.keys()] : [...necks.keys()];
+  for (const neck of order) {
+    const able = guitars.filter((guitar) => canPlay(guitar, necks[neck]!));
+    const guitar = able.find((one) => one.id === entry.guitarId) ?? able[0];
+    if (guitar) return { song: entry.id, guitar: guitar.id, neck };
+  }
+  return null;
+}
+
+/**
+ * One set of a gig as one planning problem: every guitar is prepared freely before it. Songs are known by their
+ * entries' ids, since a song may stand twice. Only pinned choices bind. An entry that no guitar can play is left out.
+ * @throws RangeError where the gig has no such set
+ * @example setProblem(gig, "set1", repertoire).problem.order // ["e1", "e2", "e3"]
+ */
+export function setProblem(
+  gig: Gig,
+  setId: string,
+  repertoire: Repertoire,
+  naming: Naming = "english",
+): SetProblem {
+  const set = gig.sets.find((one) => one.id === setId);
+  if (!set) throw new RangeError(`There is no set ${setId} in this gig.`);
+  const songs = new Map(repertoire.songs.map((song) => [song.id, song]));
+  const all = entriesOf(gig, setId);
+  const left = new Map<string, string>();
+  const necks = new Map<string, SongNeck[]>();
+  const plays: Play[] = [];
+  const limited = new Map<string, readonly Guitar[]>();
+  for (const entry of all) {
+    const song = songs.get(entry.songId);
+    const ways = song ? openNecks(entry, song) : [];
+    const guitars = openGuitars(entry, repertoire.guitars);
+    const play = song ? presentPlay(entry, ways, guitars) : null;
+    if (play) {
+      plays.push(play);
+      necks.set(entry.id, ways);
+      limited.set(entry.id, guitars);
+    } else {
+      left.set(entry.id, whyLeft(song, guitars, ways, naming) ?? "No guitar can play this.");
+    }
+  }
+  const entries = all.filter((entry) => necks.has(entry.id));
+  const opener = encoreOpener(gig, entries);
+  const into = straightInto(gig, entries);
+  const problem: Problem = {
+    version: 1,
+    crew: gig.crew,
+    times: {
+      string: gig.times.string,
+      semitone: gig.times.semitone,
+      capoMove: gig.times.capoMove,
+      capoOn: gig.times.capoOn,
+      capoOff: gig.times.capoOff,
+      swap: gig.times.swap,
+      check: gig.times.check,
+      cover: gig.times.cover,
+    },
+    aim: defaultAim,
+    guitars: repertoire.guitars.map(({ id, strings, lowest, highest, keeps }) => ({
+      id,
+      strings,
+      lowest,
+      highest,
+      start: null,
+      keeps,
+    })),
+    songs: entries.map((entry) => {
+      const song = songs.get(entry.songId)!;
+      const allowed = limited.get(entry.id)!;
+      const free = allowed.length === repertoire.guitars.length;
+      const cover = into.has(entry.id)
+        ? gig.times.intoCover
+        : entry.id === opener?.id
+          ? gig.times.encoreCover
+          : (entry.cover ?? song.cover);
+      return {
+        id: entry.id,
+        seconds: song.seconds,
+        section: entry.section,
+        cover,
+        necks: necks.get(entry.id)!.map((neck) => ({
+          open: neck.open,
+          capos: neck.capos,
+          guitars: free
+            ? knownGuitars(neck.guitars, repertoire.guitars)
+            : allowed
+                .filter((guitar) => neck.guitars?.includes(guitar.id) ?? true)
+                .map((guitar) => guitar.id),
+          penalty: neck.penalty,
+        })),
+      };
+    }),
+    order: entries.map((entry) => entry.id),
+    rules: rulesOf(gig, set, entries, all),
+    maxMoved: null,
+  };
+  return { problem, plays, left, necks };
+}
+
+/** A way's guitars without those the act no longer has. */
+function knownGuitars(ids: string[] | null, guitars: readonly Guitar[]): string[] | null {
+  return ids === null ? null : ids.filter((id) => guitars.some((guitar) => guitar.id === id));
+}
