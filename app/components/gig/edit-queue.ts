@@ -180,7 +180,7 @@ export function stepHistory(
     edits: target.inverse,
   };
   const later = log.slice(log.findIndex((one) => one.id === target.id) + 1);
-  const clashing = undoClashes(target.inverse, later);
+  const clashing = undoClashes(target, later);
   const passed = [...queue.passed, target.id];
   if (clashing.length > 0) {
     const spoken = { gig: queue.gig, log, names };

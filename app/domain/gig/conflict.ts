@@ -39,14 +39,16 @@ export function clashes(edits: readonly Edit[], later: readonly LoggedBatch[]): 
 
 /**
  * What forbids taking a batch back: a field that was written again since. Taking back an addition also meets whatever
- * was done since to what was added.
- * @param inverse the edits that take the batch back
+ * was done since to what was added. What its maker wrote since without changing anything forbids nothing.
+ * @param target the batch to take back
  * @param later every batch that was applied after it, in their order
- * @example undoClashes([{ kind: "entry.remove", entryId: "e1" }], [batchOf(choose("birch"))])
- *   // [{ key: "entry:e1:guitarId", … }]
+ * @example undoClashes(batchThatAdds("e1"), [batchOf(choose("birch"))]) // [{ key: "entry:e1:guitarId", … }]
  */
-export function undoClashes(inverse: readonly Edit[], later: readonly LoggedBatch[]): Clash[] {
-  return clashesWhere(inverse, later, (key, other) => other === key || other.startsWith(`${key}:`));
+export function undoClashes(target: LoggedBatch, later: readonly LoggedBatch[]): Clash[] {
+  const idle = (one: LoggedBatch) =>
+    one.personId === target.personId && one.undoes === null && one.inverse.length === 0;
+  const changing = later.filter((one) => !idle(one));
+  return clashesWhere(target.inverse, changing, (key, other) => other === key || other.startsWith(`${key}:`));
 }
 
 function clashesWhere(

@@ -58,7 +58,7 @@ function judgeUndo(ground: Ground, batch: Batch, targetId: string, sender: Sende
   if (!standing([target, ...later]).includes(target)) {
     return refuse("This was taken back already, in another window.");
   }
-  return tryEdits(ground.gig, batch, target.inverse, undoClashes(target.inverse, later), sender);
+  return tryEdits(ground.gig, batch, target.inverse, undoClashes(target, later), sender);
 }
 
 function tryEdits(gig: Gig, batch: Batch, edits: Edit[], clashing: Clash[], sender: Sender): Verdict {
