@@ -19,11 +19,15 @@ export async function buildIfChanged(signal?: AbortSignal): Promise<boolean> {
   const hash = sourceHash();
   if (existsSync(stampFile) && readFileSync(stampFile, "utf8") === hash) return false;
   rmSync(stampFile, { force: true });
-  const { code, output } = await run(process.execPath, ["node_modules/@react-router/dev/bin.js", "build"], {
-    cwd: projectFolder,
-    env: { ...process.env, NODE_ENV: "production" },
-    signal,
-  });
+  const { code, output } = await run(
+    process.execPath,
+    ["node_modules/@react-router/dev/bin.js", "build", "--logLevel", "warn"],
+    {
+      cwd: projectFolder,
+      env: { ...process.env, NODE_ENV: "production" },
+      signal,
+    },
+  );
   if (code !== 0) throw new PlainError(`The build failed.\n${output.trim()}`);
   writeFileSync(stampFile, hash);
   return true;
