@@ -1,0 +1,172 @@
+import type { Gap, Row } from "#app/domain/gig/plan.ts";
+import { isFullCapo, stops, stringsInWords } from "#app/domain/music/capo.ts";
+import { keyFifths } from "#app/domain/music/key.ts";
+import { fifthsOfTuning, type Naming, stringName } from "#app/domain/music/note-names.ts";
+import type { CapoWork, StringWork } from "#app/domain/planning/answer.ts";
+import type { Guitar } from "#app/domain/repertoire/guitar.ts";
+
+/** One thing that happens in a gap, ready to be drawn: a triangle for a peg, words for the rest. */
+export type GapToken =
+  | { kind: "swap"; guitar: Guitar }
+  | { kind: "capo"; words: string }
+  | { kind: "string"; string: number; direction: "up" | "down"; semitones: number; to: string }
+  | { kind: "tech"; words: string };
+
+/** What of a row its words need. */
+export type GapRow = Pick<Row, "guitar" | "neck" | "song" | "gap">;
+
+/** The change of this row's guitar in its gap, whoever makes it; null where there is none. */
+function changeOf(
+  row: GapRow,
+): { strings: StringWork[]; capos: CapoWork[]; onStage: boolean; atSide: boolean } | null {
+  const works = row.gap?.work.filter((work) => work.guitar === row.guitar?.id) ?? [];
+  const first = works[0];
+  if (!first) return null;
+  return {
+    strings: first.strings,
+    capos: first.capos,
+    onStage: works.some((work) => work.by === "player"),
+    atSide: works.some((work) => work.by === "tech"),
+  };
+}
+
+/** The line of fifths to spell this row's strings on: the song's key where it has one, else what suits the tuning. */
+export function fifthsOf(row: Pick<Row, "song" | "neck">): number {
+  const key = row.song ? keyFifths(row.song.key) : null;
+  return key ?? fifthsOfTuning(row.neck?.open ?? []);
+}
+
+/** Which strings a partial capo leaves or covers, told the shorter way; "" for a full one. */
+function coverage(strings: readonly number[], count: number): string {
+  if (isFullCapo({ fret: 1, strings: [...strings] }, count)) return "";
+  const free = Array.from({ length: count }, (_, index) => index + 1).filter(
+    (string) => !strings.includes(string),
+  );
+  return free.length <= strings.length ? `, leave ${stringsInWords(free)}` : ` on ${stringsInWords(strings)}`;
+}
+
+/** A capo's change in words: "capo off", "capo on 3, leave 6", "capo to 5". */
+function capoWord(change: CapoWork, count: number, several: boolean): string {
+  const which = coverage(change.strings, count);
+  if (change.action === "off") return several ? `capo off ${change.from}` : "capo off";
+  if (change.action === "on") return `capo on ${change.to}${which}`;
+  return several ? `capo ${change.from} to ${change.to}` : `capo to ${change.to}`;
+}
+
+/** Changes in the order in which hands work: capos off first, strings down, strings up, then capos on or moved. */
+function inOrder(strings: readonly StringWork[], capos: readonly CapoWork[]) {
+  return {
+    off: capos.filter((capo) => capo.action === "off"),
+    down: strings.filter((string) => string.to < string.from),
+    up: strings.filter((string) => string.to > string.from),
+    on: capos.filter((capo) => capo.action !== "off"),
+  };
+}
+
+/**
+ * A gap for the planning line, in the order in which hands work.
+ * @example gapTokens(row, "english") // [{ kind: "capo", words: "capo off" }, { kind: "string", string: 6, direction: "down", … }]
+ */
+export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
+  const tokens: GapToken[] = [];
+  if (row.gap?.swap && row.guitar) tokens.push({ kind: "swap", guitar: row.guitar });
+  const change = changeOf(row);
+  if (!change || !row.guitar) return tokens;
+  const count = row.guitar.strings;
+  const { off, down, up, on } = inOrder(change.strings, change.capos);
+  const fifths = fifthsOf(row);
+  for (const capo of off)
+    tokens.push({ kind: "capo", words: capoWord(capo, count, change.capos.length > 1) });
+  for (const { string, from, to } of [...down, ...up]) {
+    tokens.push({
+      kind: "string",
+      string,
+      direction: to > from ? "up" : "down",
+      semitones: Math.abs(to - from),
+      to: stringName(to, naming, fifths),
+    });
+  }
+  for (const capo of on) tokens.push({ kind: "capo", words: capoWord(capo, count, change.capos.length > 1) });
+  if (change.atSide)
+    tokens.push({ kind: "tech", words: change.onStage ? "late at the side" : "at the side" });
+  return tokens;
+}
+
+function upperFirst(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
+}
+
+function seconds(value: number): string {
+  return `${Math.round(value)} s`;
+}
+
+function timeWords(gap: Gap): string {
+  if (gap.seconds === 0) return gap.work.length > 0 ? "Nothing to wait for on stage" : "Nothing to do";
+  const about = `About ${seconds(gap.seconds)}`;
+  if (gap.exposed > 0 && gap.cover > 0)
+    return `${about}, ${seconds(gap.exposed)} longer than the talk covers`;
+  if (gap.exposed > 0) return `${about} of dead air`;
+  return `${about}, covered by the talk`;
+}
+
+/**
+ * A gap in sentences, for hover, focus and screen readers.
+ * @example gapSentence(row, "english")
+ *   // "Capo off. String 6 down 2, to D. About 14 s, 2 s longer than the talk covers."
+ */
+export function gapSentence(row: GapRow, naming: Naming): string {
+  const { gap, guitar } = row;
+  if (!gap) return "";
+  const parts: string[] = [];
+  if (gap.swap && guitar) parts.push(`Change to ${guitar.shortName}`);
+  for (const token of gapTokens(row, naming)) {
+    if (token.kind === "capo") parts.push(upperFirst(token.words));
+    if (token.kind === "string")
+      parts.push(`String ${token.string} ${token.direction} ${token.semitones}, to ${token.to}`);
+    if (token.kind === "tech")
+      parts.push(
+        token.words === "at the side"
+          ? "The tech does this at the side"
+          : "The tech starts this at the side; the rest is done on stage",
+      );
+  }
+  if (parts.length === 0 && gap.seconds === 0) return "Nothing to do.";
+  parts.push(timeWords(gap));
+  return `${parts.join(". ")}.`;
+}
+
+/**
+ * What hands must do before a song, for the stage sheet: guitar changes stand beside it, so the words begin with the
+ * capo. Only what the player does: a guitar that the tech hands over is ready.
+ * @example stageWords(row, "english") // "capo off, 2 down, 1 up"
+ */
+export function stageWords(row: GapRow, naming: Naming): string {
+  const change = changeOf(row);
+  if (!change || !row.guitar || !row.neck || !change.onStage) return "";
+  const count = row.guitar.strings;
+  const { off, down, up, on } = inOrder(change.strings, change.capos);
+  const words = off.map((capo) => capoWord(capo, count, change.capos.length > 1));
+  if (down.length > 0) words.push(`${down.length} down`);
+  if (up.length > 0) words.push(`${up.length} up`);
+  words.push(...on.map((capo) => capoWord(capo, count, change.capos.length > 1)));
+  return [...words, ...tunerWords(row, change, naming)].join(", ");
+}
+
+/** What the tuner reads where a string is retuned under a capo that stays: "6 reads E". */
+function tunerWords(
+  row: GapRow,
+  change: { strings: StringWork[]; capos: CapoWork[] },
+  naming: Naming,
+): string[] {
+  if (!row.neck || !row.guitar) return [];
+  const moved = new Set(
+    change.capos.flatMap((capo) => (capo.action === "off" ? [] : [`${capo.to}:${capo.strings.join()}`])),
+  );
+  const staying = row.neck.capos.filter((capo) => !moved.has(`${capo.fret}:${capo.strings.join()}`));
+  const stop = stops(staying, row.guitar.strings);
+  const fifths = fifthsOf(row);
+  return change.strings.flatMap(({ string, to }) => {
+    const fret = stop[row.guitar!.strings - string] ?? 0;
+    return fret === 0 ? [] : [`${string} reads ${stringName(to + fret, naming, fifths)}`];
+  });
+}
