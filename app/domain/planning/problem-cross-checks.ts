@@ -129,8 +129,9 @@ function checkCapos(neck: unknown, path: Place): BadProblem[] {
       named.add(string);
       return [];
     });
-    const key = JSON.stringify([field(capo, "fret"), [...covered].sort((a, b) => Number(a) - Number(b))]);
-    if (covered.length > 0 && seen.has(key))
+    const numbers = covered.filter((string) => typeof string === "number").sort((a, b) => a - b);
+    const key = JSON.stringify([field(capo, "fret"), numbers]);
+    if (numbers.length > 0 && seen.has(key))
       problems.push(
         bad(
           "repeated-capo",

@@ -1,0 +1,115 @@
+import type { Neck } from "#app/domain/music/neck.ts";
+import { type ChangeTable, changeTable } from "#app/domain/planning/change-table.ts";
+import { coverInto, mayPlay } from "#app/domain/planning/playable.ts";
+import type { Problem } from "#app/domain/planning/problem.ts";
+
+/** One way to play a song: guitar and neck as numbers of the model, `choice` its place in the song's `necks`. */
+export type Option = { guitar: number; neck: number; choice: number; penalty: number };
+
+/** The neck number of a guitar that has not been used and may still be prepared freely. */
+export const UNUSED = -1;
+
+/**
+ * A problem as numbers, for searching. Songs are numbered as they stand in the present order, guitars as in the problem,
+ * distinct necks from 0. `penalty` of an option is weighted, ready to be added to a total.
+ */
+export type Model = {
+  problem: Problem;
+  songs: number;
+  guitars: number;
+  tech: boolean;
+  necks: Neck[];
+  changes: ChangeTable;
+  options: Option[][];
+  cover: Float64Array;
+  seconds: Float64Array;
+  start: Int32Array;
+  keeps: Uint8Array;
+  /** Whether a tech can fail to finish a job at all; if not, free time need not be counted. */
+  mayBeLate: boolean;
+};
+
+function neckKey({ open, capos }: Neck): string {
+  const written = capos.map(({ fret, strings }) => `${fret}:${[...strings].sort((a, b) => a - b)}`);
+  return `${open}|${written.sort().join(" ")}`;
+}
+
+function numberNecks(): { necks: Neck[]; numberOf: (neck: Neck) => number } {
+  const necks: Neck[] = [];
+  const numbers = new Map<string, number>();
+  const numberOf = (neck: Neck) => {
+    const key = neckKey(neck);
+    const known = numbers.get(key) ?? necks.length;
+    if (known === necks.length) {
+      numbers.set(key, known);
+      necks.push({ open: neck.open, capos: neck.capos });
+    }
+    return known;
+  };
+  return { necks, numberOf };
+}
+
+/** Of several ways on the same guitar with the same neck, only the one with the least penalty is kept. */
+function cheapest(options: Option[]): Option[] {
+  return options.filter(
+    (option, i) =>
+      !options.some(
+        (other, k) =>
+          other.guitar === option.guitar &&
+          other.neck === option.neck &&
+          (other.penalty < option.penalty || (other.penalty === option.penalty && k < i)),
+      ),
+  );
+}
+
+/** A job always finishes if no job is longer than the shortest song: the song before it is the tech's alone. */
+function jobsMayBeLate(changes: ChangeTable, options: Option[][], start: Int32Array, seconds: Float64Array) {
+  const shortest = Math.min(...seconds);
+  return start.some((first, guitar) => {
+    const used = new Set(
+      options
+        .flat()
+        .filter((option) => option.guitar === guitar)
+        .map(({ neck }) => neck),
+    );
+    const from = first === UNUSED ? [...used] : [...used, first];
+    return from.some((x) => [...used].some((y) => changes.seconds[x * changes.size + y]! > shortest));
+  });
+}
+
+/** The problem as numbers. Songs that no guitar can play have no options; see `why-infeasible.ts`. */
+export function modelOf(problem: Problem): Model {
+  const { necks, numberOf } = numberNecks();
+  const byId = new Map(problem.songs.map((song) => [song.id, song]));
+  const songs = problem.order.map((id) => byId.get(id)!);
+  const weight = problem.aim.seconds + problem.aim.exposed;
+  const options = songs.map((song) =>
+    cheapest(
+      problem.guitars.flatMap((guitar, g) =>
+        song.necks.flatMap((neck, choice) =>
+          mayPlay(guitar, neck)
+            ? [{ guitar: g, neck: numberOf(neck), choice, penalty: weight * neck.penalty }]
+            : [],
+        ),
+      ),
+    ),
+  );
+  const start = Int32Array.from(problem.guitars, ({ start }) => (start ? numberOf(start) : UNUSED));
+  const changes = changeTable(problem, necks);
+  const seconds = Float64Array.from(songs, (song) => song.seconds);
+  const tech = problem.crew === "tech";
+  return {
+    problem,
+    songs: songs.length,
+    guitars: problem.guitars.length,
+    tech,
+    necks,
+    changes,
+    options,
+    cover: Float64Array.from(songs, (song) => coverInto(problem.times, song)),
+    seconds,
+    start,
+    keeps: Uint8Array.from(problem.guitars, ({ keeps }) => (keeps ? 1 : 0)),
+    mayBeLate: tech && songs.length > 0 && jobsMayBeLate(changes, options, start, seconds),
+  };
+}

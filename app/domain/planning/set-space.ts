@@ -1,0 +1,202 @@
+import { freeAfterSong, freeCeiling, takeFree } from "#app/domain/planning/free-time.ts";
+import { type Model, type Option, UNUSED } from "#app/domain/planning/model.ts";
+import type { OrderRules } from "#app/domain/planning/order-rules.ts";
+import type { Space } from "#app/domain/planning/search/space.ts";
+import {
+  isPlayed,
+  markPlayed,
+  NOBODY,
+  readFree,
+  type SetLayout,
+  setLayout,
+  startState,
+  writeFree,
+} from "#app/domain/planning/set-layout.ts";
+import { stepCost } from "#app/domain/planning/step-cost.ts";
+import { elderTwins, sortTwins, twinGuitars } from "#app/domain/planning/twins.ts";
+
+/** A lower bound on what the rest of a half-built set costs. */
+export type SetBound = (state: Int32Array, depth: number) => number;
+
+export type SetSpace = Space & {
+  model: Model;
+  rules: OrderRules;
+  layout: SetLayout;
+  /** What a way's moves mean: songs in order, and the option of each. */
+  planOf(moves: number[]): { songs: number[]; options: Option[] };
+};
+
+/**
+ * Sets that are built from the first song on: a state is what matters of the songs played so far, a move plays one more
+ * song in one of its ways.
+ */
+export function setSpace(
+  model: Model,
+  rules: OrderRules,
+  boundOf: (layout: SetLayout) => SetBound,
+): SetSpace {
+  const layout = setLayout(model);
+  const songs = model.songs;
+  const most = Math.max(1, ...model.options.map((options) => options.length));
+  const elder = layout.limited ? new Int32Array(songs).fill(-1) : elderTwins(model, rules);
+  const groups = twinGuitars(model);
+  const fixedAt = new Int32Array(songs).fill(NOBODY);
+  for (let song = 0; song < songs; song += 1)
+    if (rules.earliest[song] === rules.latest[song]) fixedAt[rules.earliest[song]!] = song;
+  const maxMoved = model.problem.maxMoved ?? songs;
+
+  const ceiling = freeCeiling(model);
+  const free = new Float64Array(layout.freeCount);
+  const freeAfter = new Float64Array(layout.freeCount);
+
+  function mayFollow(state: Int32Array, depth: number, song: number, last: number): boolean {
+    if (fixedAt[depth] !== NOBODY && fixedAt[depth] !== song) return false;
+    if (isPlayed(layout, state, song) || depth < rules.earliest[song]! || depth > rules.latest[song]!)
+      return false;
+    if (rules.previous[song]! !== -1 && rules.previous[song] !== last) return false;
+    if (elder[song]! !== -1 && !isPlayed(layout, state, elder[song]!)) return false;
+    if (last !== NOBODY && rules.apart[last]!.includes(song)) return false;
+    return rules.predecessors[song]!.every((other) => isPlayed(layout, state, other));
+  }
+
+  function lastMatters(state: Int32Array, song: number): boolean {
+    return rules.next[song] !== -1 || rules.apart[song]!.some((other) => !isPlayed(layout, state, other));
+  }
+
+  /** Songs from `from` to `to` of the present order that have not been played: they are left behind. */
+  function leftBehind(state: Int32Array, from: number, to: number): number {
+    let count = 0;
+    for (let song = from; song < to; song += 1) if (!isPlayed(layout, state, song)) count += 1;
+    return count;
+  }
+
+  /** Everything that one more song changes but the bits about the order: neck, guitar in hand, the tech's time. */
+  function take(state: Int32Array, depth: number, song: number, option: Option, child: Int32Array): void {
+    const { guitar, neck } = option;
+    child.set(state);
+    markPlayed(layout, child, song);
+    child[layout.necks + guitar] = neck;
+    child[layout.current] = guitar;
+    if (layout.freeCount === 0) return;
+    const from = state[layout.necks + guitar]!;
+    const job = from !== UNUSED && depth > 0 && state[layout.current] !== guitar;
+    freeAfter.set(free);
+    if (job) takeFree(freeAfter, guitar, model.changes.seconds[from * model.changes.size + neck]!);
+    const rests = (other: number) => child[layout.necks + other] !== UNUSED;
+    freeAfterSong(freeAfter, guitar, model.seconds[song]!, ceiling, rests);
+    writeFree(layout, child, freeAfter);
+  }
+
+  function play(
+    state: Int32Array,
+    depth: number,
+    song: number,
+    kept: number,
+    moved: number,
+    child: Int32Array,
+    emit: (cost: number, move: number) => void,
+  ): void {
+    const current = state[layout.current]!;
+    const options = model.options[song]!;
+    for (const [i, option] of options.entries()) {
+      const { guitar, neck } = option;
+      const from = state[layout.necks + guitar]!;
+      const idle = layout.freeCount > 0 ? free[guitar]! : Number.POSITIVE_INFINITY;
+      const step = stepCost(
+        model,
+        guitar,
+        from,
+        neck,
+        model.cover[song]!,
+        depth === 0,
+        current !== guitar,
+        idle,
+      );
+      if (step === Number.POSITIVE_INFINITY) continue;
+      take(state, depth, song, option, child);
+      child[layout.last] = lastMatters(child, song) ? song : NOBODY;
+      if (layout.limited) {
+        child[layout.kept] = kept;
+        child[layout.moved] = moved;
+      }
+      for (const group of groups) sortTwins(child, layout, group);
+      emit(step + option.penalty, song * most + i);
+    }
+  }
+
+  function follow(
+    state: Int32Array,
+    depth: number,
+    song: number,
+    child: Int32Array,
+    emit: (cost: number, move: number) => void,
+  ): void {
+    if (!layout.limited) {
+      play(state, depth, song, 0, 0, child, emit);
+      return;
+    }
+    const kept = state[layout.kept]!;
+    const moved = state[layout.moved]!;
+    if (song < kept) {
+      play(state, depth, song, kept, moved, child, emit);
+      return;
+    }
+    const skipped = moved + leftBehind(state, kept, song);
+    if (skipped <= maxMoved) play(state, depth, song, song + 1, skipped, child, emit);
+    if (moved + 1 <= maxMoved) play(state, depth, song, kept, moved + 1, child, emit);
+  }
+
+  function expand(
+    state: Int32Array,
+    depth: number,
+    child: Int32Array,
+    emit: (cost: number, move: number) => void,
+  ): void {
+    readFree(layout, state, free);
+    const last = state[layout.last]!;
+    const forced = last !== NOBODY && rules.next[last] !== -1 ? rules.next[last]! : fixedAt[depth]!;
+    if (forced !== NOBODY) {
+      if (mayFollow(state, depth, forced, last)) follow(state, depth, forced, child, emit);
+      return;
+    }
+    for (let song = 0; song < songs; song += 1)
+      if (mayFollow(state, depth, song, last)) follow(state, depth, song, child, emit);
+  }
+
+  function planOf(moves: number[]) {
+    const owner = Int32Array.from({ length: model.guitars }, (_, guitar) => guitar);
+    const row = startState(model, layout);
+    const child = new Int32Array(layout.width);
+    const plan = { songs: [] as number[], options: [] as Option[] };
+    for (const [depth, move] of moves.entries()) {
+      const song = Math.floor(move / most);
+      const slot = model.options[song]![move % most]!;
+      plan.songs.push(song);
+      plan.options.push(
+        model.options[song]!.find(
+          (option) =>
+            option.guitar === owner[slot.guitar] &&
+            option.neck === slot.neck &&
+            option.penalty === slot.penalty,
+        )!,
+      );
+      readFree(layout, row, free);
+      take(row, depth, song, slot, child);
+      for (const group of groups) sortTwins(child, layout, group, owner);
+      row.set(child);
+    }
+    return plan;
+  }
+
+  return {
+    model,
+    rules,
+    layout,
+    width: layout.width,
+    depth: songs,
+    start: startState(model, layout),
+    expand,
+    bound: boundOf(layout),
+    planOf,
+  };
+}
