@@ -2,7 +2,7 @@
  * The indexes of a longest strictly rising subsequence, from left to right (patience sorting, O(n log n)).
  * @example longestRising(["a1", "a0", "a2"]) // [1, 2]
  */
-export function longestRising(values: readonly string[]): number[] {
+export function longestRising<Value extends string | number>(values: readonly Value[]): number[] {
   const ends: number[] = [];
   const previous: (number | undefined)[] = [];
   values.forEach((value, index) => {

@@ -63,6 +63,8 @@ export type SetPlan = {
   totals: Totals;
   problem: Problem;
   plays: Play[];
+  /** Entry id → the song's ways in the order in which the problem lists them. */
+  necks: Map<string, SongNeck[]>;
   evaluation: Evaluation;
   /** Rules that the present order breaks, in words. */
   breaches: RuleBreach[];
@@ -222,6 +224,7 @@ function planSet(look: Look, set: GigSet, repertoire: Repertoire, startSecond: n
     totals: totalsOf(evaluation),
     problem: given.problem,
     plays: given.plays,
+    necks: given.necks,
     evaluation,
     breaches: breachesOf(evaluation, look),
     seconds: at - startSecond,
