@@ -43,16 +43,20 @@ export async function hashPassword(password: string): Promise<string> {
   return String(await run({ secret: secretOf(password), cost: getEnv().PASSWORD_COST }));
 }
 
-let nobody: Promise<string> | null = null;
+let nobodys: Promise<string> | null = null;
+
+/** The hash of a password that is nobody's. Begun again where the pool was closed while it worked on it. */
+function nobodysHash(): Promise<string> {
+  nobodys ??= hashPassword("nobody's").catch((error) => {
+    nobodys = null;
+    throw error;
+  });
+  return nobodys;
+}
 
 /** Whether a password is right. Without a hash it takes as long and says no: the time tells nobody who has an account. */
 export async function isPassword(password: string, hash: string | null): Promise<boolean> {
-  nobody ??= hashPassword("nobody's");
-  // The pool may be closed while it works on this: the next to ask begins again.
-  nobody.catch(() => {
-    nobody = null;
-  });
-  const known = hash ?? (await nobody);
-  const same = await run({ secret: secretOf(password), hash: known });
+  const spare = await nobodysHash();
+  const same = await run({ secret: secretOf(password), hash: hash ?? spare });
   return hash !== null && same === true;
 }
