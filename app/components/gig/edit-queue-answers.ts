@@ -52,9 +52,8 @@ export function takeAnswer(queue: Queue, answer: EditsAnswer): Queue {
 
 /** What happened to the gig in other windows. */
 export function takeNews(queue: Queue, news: GigNews): Queue {
-  const answered =
-    queue.failures === 0 && queue.closed === null ? queue : { ...queue, failures: 0, closed: null };
-  const next = withNews(answered, news.batches);
+  const open = queue.failures === 0 && queue.closed === null;
+  const next = withNews(open ? queue : { ...queue, failures: 0, closed: null }, news.batches);
   return next.base === queue.base ? next : rebase(next);
 }
 
@@ -113,10 +112,9 @@ function withNews(queue: Queue, batches: readonly LoggedBatch[]): Queue {
   let { base } = queue;
   const arrived: LoggedBatch[] = [];
   for (const batch of batches) {
-    if (batch.revision !== base.revision + 1) continue;
-    const applied = applyEdits(base, batch.edits);
-    if (!applied.ok)
-      throw new Error(`Revision ${batch.revision} does not apply: ${applied.conflict.message}`);
+    if (batch.revision <= base.revision) continue;
+    const applied = batch.revision === base.revision + 1 ? applyEdits(base, batch.edits) : null;
+    if (!applied?.ok) return { ...queue, closed: "stale" };
     base = { ...applied.gig, revision: batch.revision };
     arrived.push(batch);
   }

@@ -128,10 +128,7 @@ export function gigSync(given: {
     else if (queue.failures === 0) void pump();
     else {
       callOff?.();
-      callOff = now.later(
-        () => void (queue.pending.length > 0 ? pump() : poll()),
-        retryDelay(queue.failures),
-      );
+      callOff = now.later(() => void pump(), retryDelay(queue.failures));
     }
   };
 

@@ -4,7 +4,7 @@ import { HistoryButtons } from "#app/components/gig/history-buttons.tsx";
 import { SaveState, type SaveStatus } from "#app/components/gig/save-state.tsx";
 import { SheetsMenu } from "#app/components/gig/sheets-menu.tsx";
 import { TotalsBar } from "#app/components/gig/totals-bar.tsx";
-import { buttonClass } from "#app/components/ui/button.tsx";
+import { Button, buttonClass } from "#app/components/ui/button.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { entriesOf, setsOf } from "#app/domain/gig/order.ts";
@@ -18,17 +18,21 @@ type GigHeaderProps = {
   warnings: string[];
   paper: "a4" | "letter";
   save: { status: SaveStatus; pending: number };
+  /** Undo and redo; null for a reader who may change nothing. */
   history: { undoLabel: string | null; redoLabel: string | null; undo: () => void; redo: () => void } | null;
   onDetails: (() => void) | null;
+  onSuggestions: () => void;
 };
 
 /** Name, what the order costs, undo, and the sheets. Stays in view while the sets scroll under it. */
-export function GigHeader({ gig, plan, before, warnings, paper, save, history, onDetails }: GigHeaderProps) {
+export function GigHeader(props: GigHeaderProps) {
+  const { gig, plan, before, warnings, paper, save, history, onDetails, onSuggestions } = props;
   const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
   return (
     <>
       <div className="on-ebony flex items-center gap-3 bg-ebony px-4 pt-1 pb-3 text-white lg:hidden">
         <Name gig={gig} songs={songs} onDetails={onDetails} />
+        {history ? <HistoryButtons {...history} small /> : null}
       </div>
       <header className="sticky top-0 z-20 flex flex-wrap items-center gap-x-8 gap-y-2 border-grey-200 border-b bg-ground px-4 py-2 lg:px-6 lg:py-2.5">
         <div className="hidden min-w-48 max-w-[24rem] lg:block">
@@ -46,8 +50,15 @@ export function GigHeader({ gig, plan, before, warnings, paper, save, history, o
           />
         </div>
         <div className="hidden flex-1 items-center justify-end gap-3 lg:flex">
-          <SaveState status={save.status} pending={save.pending} />
-          {history ? <HistoryButtons {...history} /> : null}
+          {history ? (
+            <>
+              <SaveState status={save.status} pending={save.pending} />
+              <HistoryButtons {...history} />
+            </>
+          ) : null}
+          <Button className="min-[1360px]:hidden" onClick={onSuggestions}>
+            Less retuning
+          </Button>
           <SheetsMenu gigId={gig.id} paper={paper} pending={save.pending} />
         </div>
         {warnings.length > 0 ? (

@@ -8,18 +8,12 @@ type HistoryButtonsProps = {
   redoLabel: string | null;
   undo: () => void;
   redo: () => void;
+  /** Only the signs, where there is little room. */
+  small?: boolean;
 };
 
-/** Whether keys typed there are text, so that undo belongs to the field. */
-function typesText(target: EventTarget | null): boolean {
-  return (
-    target instanceof HTMLElement &&
-    (target.isContentEditable || target.matches("textarea, select, input:not([type=checkbox], [type=radio])"))
-  );
-}
-
-/** Undo and redo of one's own edits, by button and by Ctrl or Command with Z. */
-export function HistoryButtons({ undoLabel, redoLabel, undo, redo }: HistoryButtonsProps) {
+/** Undo by Ctrl or Command with Z, redo with Shift as well or with Y. Inside a field the keys belong to the field. */
+export function useHistoryKeys(undo: () => void, redo: () => void): void {
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
       if (!(event.ctrlKey || event.metaKey) || event.altKey || typesText(event.target)) return;
@@ -32,28 +26,42 @@ export function HistoryButtons({ undoLabel, redoLabel, undo, redo }: HistoryButt
     document.addEventListener("keydown", onKey);
     return () => document.removeEventListener("keydown", onKey);
   }, [undo, redo]);
+}
+
+/** Whether keys typed there are text, so that undo belongs to the field. */
+function typesText(target: EventTarget | null): boolean {
+  return (
+    target instanceof HTMLElement &&
+    (target.isContentEditable || target.matches("textarea, select, input:not([type=checkbox], [type=radio])"))
+  );
+}
+
+/** Undo and redo of one's own edits. */
+export function HistoryButtons({ undoLabel, redoLabel, undo, redo, small = false }: HistoryButtonsProps) {
   return (
     <div className="flex">
-      <Button
-        look="quiet"
-        className="px-2.5 lg:min-h-9"
-        disabled={undoLabel === null}
-        onClick={undo}
-        title={undoLabel === null ? undefined : `Undo: ${undoLabel}`}
-      >
-        <Undo2 size={18} aria-hidden="true" />
-        Undo
-      </Button>
-      <Button
-        look="quiet"
-        className="px-2.5 lg:min-h-9"
-        disabled={redoLabel === null}
-        onClick={redo}
-        title={redoLabel === null ? undefined : `Redo: ${redoLabel}`}
-      >
-        <Redo2 size={18} aria-hidden="true" />
-        Redo
-      </Button>
+      <Step words="Undo" what={undoLabel} act={undo} small={small} />
+      <Step words="Redo" what={redoLabel} act={redo} small={small} />
     </div>
+  );
+}
+
+type StepProps = { words: "Undo" | "Redo"; what: string | null; act: () => void; small: boolean };
+
+function Step({ words, what, act, small }: StepProps) {
+  const Icon = words === "Undo" ? Undo2 : Redo2;
+  const said = what === null ? words : `${words}: ${what}`;
+  return (
+    <Button
+      look="quiet"
+      className={small ? "w-11 px-0 text-current hover:bg-transparent" : "px-2.5 lg:min-h-9"}
+      disabled={what === null}
+      onClick={act}
+      aria-label={said}
+      title={said}
+    >
+      <Icon size={18} aria-hidden="true" />
+      {small ? null : words}
+    </Button>
   );
 }

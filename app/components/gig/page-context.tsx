@@ -13,7 +13,8 @@ export type OpenDialog =
   | { kind: "set"; setId: string }
   | { kind: "add"; setId: string }
   | { kind: "paste"; setId: string }
-  | { kind: "suggestions" };
+  | { kind: "suggestions" }
+  | { kind: "details" };
 
 export type EntryPayload = { entryId: string };
 

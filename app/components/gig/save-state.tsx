@@ -11,17 +11,26 @@ export function saveWords(status: SaveStatus, pending: number): string {
   return pending === 1 ? "1 edit waiting for the server" : `${pending} edits waiting for the server`;
 }
 
-/** Said aloud when edits begin to wait and when they have arrived, not at each save. */
-export function SaveState({ status, pending }: { status: SaveStatus; pending: number }) {
-  const words = saveWords(status, pending);
+type SaveStateProps = { status: SaveStatus; pending: number };
+
+/** The save state as it stands on the page. */
+export function SaveState({ status, pending }: SaveStateProps) {
+  const late = status === "waiting" || status === "conflict";
   return (
-    <p
-      className={`font-display font-medium text-base leading-tight ${status === "waiting" || status === "conflict" ? "text-warning" : "text-grey-600 max-lg:text-grey-300"}`}
+    <span
+      aria-hidden="true"
+      className={`font-display font-medium leading-tight ${late ? "underline underline-offset-4" : ""}`}
     >
-      <span aria-hidden="true">{words}</span>
-      <span role="status" className="sr-only">
-        {status === "saving" ? "" : words}
-      </span>
+      {saveWords(status, pending)}
+    </span>
+  );
+}
+
+/** The save state for a screen reader: said when edits begin to wait and when they have arrived, not at each edit. */
+export function LiveSaveState({ status, pending }: SaveStateProps) {
+  return (
+    <p role="status" className="sr-only">
+      {status === "saving" ? "" : saveWords(status, pending)}
     </p>
   );
 }

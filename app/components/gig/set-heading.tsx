@@ -1,4 +1,4 @@
-import { timeWords } from "#app/components/gig/gig-words.ts";
+import { timeAfter } from "#app/components/gig/gig-words.ts";
 import { usePageTools } from "#app/components/gig/page-context.tsx";
 import { SetMenu } from "#app/components/gig/set-menu.tsx";
 import type { Gig } from "#app/domain/gig/gig.ts";
@@ -7,16 +7,12 @@ import { formatDuration } from "#app/domain/repertoire/read-duration.ts";
 
 type SetHeadingProps = { gig: Gig; plan: SetPlan; alone: boolean; hasEncore: boolean; id: string };
 
-function instant(startsAt: string, seconds: number): string {
-  return new Date(Date.parse(startsAt) + seconds * 1000).toISOString();
-}
-
 /** Name of a set, when it plays and what it costs. */
 export function SetHeading({ gig, plan, alone, hasEncore, id }: SetHeadingProps) {
   const { may } = usePageTools();
   const { set } = plan;
-  const from = timeWords(instant(gig.startsAt, plan.startSecond), gig.zone);
-  const to = timeWords(instant(gig.startsAt, plan.startSecond + plan.seconds), gig.zone);
+  const from = timeAfter(gig.startsAt, plan.startSecond, gig.zone);
+  const to = timeAfter(gig.startsAt, plan.startSecond + plan.seconds, gig.zone);
   return (
     <div
       data-box="head"

@@ -7,6 +7,8 @@ import type { GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
 
+const none: readonly string[] = [];
+
 type SetSectionProps = {
   part: Part;
   set: GigSet;
@@ -14,13 +16,15 @@ type SetSectionProps = {
   /** Entries at the ends of the whole set. */
   firstId: string | undefined;
   lastId: string | undefined;
+  troubles: ReadonlyMap<string, string[]>;
   songs: Song[];
   standing: ReadonlySet<string>;
   onAdd: (song: Song, part: Part) => void;
 };
 
 /** The songs of one section in their order, and the line that adds another. */
-export function SetSection({ part, set, rows, firstId, lastId, songs, standing, onAdd }: SetSectionProps) {
+export function SetSection(props: SetSectionProps) {
+  const { part, set, rows, firstId, lastId, troubles, songs, standing, onAdd } = props;
   const { may } = usePageTools();
   return (
     <>
@@ -44,6 +48,7 @@ export function SetSection({ part, set, rows, firstId, lastId, songs, standing, 
               set={set}
               first={row.entry.id === firstId}
               last={row.entry.id === lastId}
+              troubles={troubles.get(row.entry.id) ?? none}
             />
           ))}
         </ol>

@@ -11,10 +11,11 @@ type SongItemProps = {
   set: Pick<GigSet, "id" | "holdFirst" | "holdLast">;
   first: boolean;
   last: boolean;
+  troubles: readonly string[];
 };
 
 /** A song with the gap that leads into it. The number is what it is dragged by. */
-export const SongItem = memo(function SongItem({ row, set, first, last }: SongItemProps) {
+export const SongItem = memo(function SongItem({ row, set, first, last, troubles }: SongItemProps) {
   const { may } = usePageTools();
   const { attributes, listeners, setNodeRef, setActivatorNodeRef, isDragging } = useDraggable({
     id: row.entry.id,
@@ -40,7 +41,7 @@ export const SongItem = memo(function SongItem({ row, set, first, last }: SongIt
     <li className={isDragging ? "opacity-35" : ""}>
       {row.gap ? <GapRow row={row} gap={row.gap} /> : null}
       <div ref={setNodeRef} data-box="entry" data-entry={row.entry.id} className="-mt-px">
-        <SongRow row={row} set={set} first={first} last={last} number={number} />
+        <SongRow row={row} set={set} first={first} last={last} troubles={troubles} number={number} />
       </div>
     </li>
   );

@@ -7,7 +7,7 @@ import { NeckCells } from "#app/components/gig/neck-cells.tsx";
 import { usePageTools } from "#app/components/gig/page-context.tsx";
 import { chooserTriggerId, menuTriggerId } from "#app/components/gig/row-menu.tsx";
 import { RowTags } from "#app/components/gig/row-tags.tsx";
-import { RowWarnings } from "#app/components/gig/row-warnings.tsx";
+import { RowTroubles, RowWarnings } from "#app/components/gig/row-warnings.tsx";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
 import type { GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
@@ -25,15 +25,19 @@ type SongRowProps = {
   set: Pick<GigSet, "id" | "holdFirst" | "holdLast">;
   first: boolean;
   last: boolean;
+  /** What must be mended about it. */
+  troubles: readonly string[];
   /** The number, as a handle to drag the row by, or plain. */
   number: ReactNode;
+  /** Without anything to press: the picture of a row that is being dragged. */
+  plain?: boolean;
 };
 
 const areas =
   "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_84px_auto_104px_48px_48px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
 
 /** One song of a set. */
-export function SongRow({ row, set, first, last, number }: SongRowProps) {
+export function SongRow({ row, set, first, last, troubles, number, plain = false }: SongRowProps) {
   const { naming, may } = usePageTools();
   const { entry, song, neck } = row;
   const title = titleOfRow(row);
@@ -46,19 +50,22 @@ export function SongRow({ row, set, first, last, number }: SongRowProps) {
         <span className="truncate font-display font-semibold text-lg leading-6 lg:text-xl" title={title}>
           {title}
         </span>
-        <RowTags
-          title={title}
-          entryId={entry.id}
-          setId={set.id}
-          rules={row.rules}
-          first={first}
-          last={last}
-          holdFirst={set.holdFirst}
-          holdLast={set.holdLast}
-        />
+        {plain ? null : (
+          <RowTags
+            title={title}
+            entryId={entry.id}
+            setId={set.id}
+            rules={row.rules}
+            first={first}
+            last={last}
+            holdFirst={set.holdFirst}
+            holdLast={set.holdLast}
+          />
+        )}
+        {plain ? null : <RowWarnings entryId={entry.id} warnings={row.warnings} />}
       </div>
       <div className="flex justify-end pr-1 [grid-area:badge] lg:justify-start">
-        <ChooserButton row={row} title={title} />
+        <ChooserButton row={row} title={title} plain={plain || !may.prepare} />
       </div>
       <div className="min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:min-w-[156px] lg:self-center lg:p-0">
         {neck ? (
@@ -72,9 +79,9 @@ export function SongRow({ row, set, first, last, number }: SongRowProps) {
       </div>
       <KeyAndLength songKey={song?.key ?? ""} seconds={song?.seconds ?? null} naming={naming} />
       <div className="flex justify-end [grid-area:menu]">
-        {may.prepare ? <MenuButton entryId={entry.id} title={title} /> : null}
+        {may.prepare && !plain ? <MenuButton entryId={entry.id} title={title} /> : null}
       </div>
-      <RowWarnings row={row} />
+      <RowTroubles troubles={troubles} />
     </div>
   );
 }
@@ -105,8 +112,8 @@ function KeyAndLength({
   );
 }
 
-function ChooserButton({ row, title }: { row: Row; title: string }) {
-  const { chooser, may } = usePageTools();
+function ChooserButton({ row, title, plain }: { row: Row; title: string; plain: boolean }) {
+  const { chooser } = usePageTools();
   const { entry, guitar } = row;
   const pinned = entry.pinned !== "none";
   const face = (
@@ -122,7 +129,7 @@ function ChooserButton({ row, title }: { row: Row; title: string }) {
       {pinned ? <span className="sr-only">, pinned</span> : null}
     </>
   );
-  if (!may.prepare || !row.song) return <span className="inline-flex items-center gap-0.5">{face}</span>;
+  if (plain || !row.song) return <span className="inline-flex items-center gap-0.5">{face}</span>;
   return (
     <Popover.Trigger
       id={chooserTriggerId(entry.id)}

@@ -1,0 +1,46 @@
+import { memo } from "react";
+import { usePointAt } from "#app/components/gig/gap-focus.tsx";
+import { GapStrokes } from "#app/components/gig/gap-strokes.tsx";
+import { GapTokens } from "#app/components/gig/gap-tokens.tsx";
+import { usePageTools } from "#app/components/gig/page-context.tsx";
+import { gapSentence, gapTokens } from "#app/domain/gig/gap-words.ts";
+import type { Gap, Row } from "#app/domain/gig/plan.ts";
+
+/** Dead air from here on is underlined: the room notices (common practice, no source). */
+const longDeadAir = 20;
+
+/**
+ * What happens between two songs, in a line. Bold where the room has to wait; hover, focus or tap says it in words,
+ * here and in the ribbon.
+ */
+export const GapRow = memo(function GapRow({ row, gap }: { row: Row; gap: Gap }) {
+  const { naming } = usePageTools();
+  const { show, hide } = usePointAt();
+  const sentence = gapSentence(row, naming);
+  const tokens = gapTokens(row, naming);
+  const exposed = Math.round(gap.exposed);
+  const point = (anchor: Element) => show({ entryId: row.entry.id, sentence, anchor });
+  return (
+    <button
+      type="button"
+      data-gap={row.entry.id}
+      aria-label={`Before ${row.song?.title ?? "the next song"}: ${sentence}`}
+      className={`flex h-8 w-full cursor-default items-center gap-2 pr-3 pl-3 text-left font-display text-base hover:bg-grey-100 lg:h-6 lg:pr-[44px] lg:pl-[66px] ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
+      onPointerEnter={(event) => (event.pointerType === "mouse" ? point(event.currentTarget) : null)}
+      onPointerLeave={() => hide(row.entry.id)}
+      onFocus={(event) => point(event.currentTarget)}
+      onBlur={() => hide(row.entry.id)}
+      onClick={(event) => point(event.currentTarget)}
+    >
+      <GapStrokes row={row} gap={gap} />
+      <GapTokens tokens={tokens} />
+      <span className="tabular ml-auto w-12 shrink-0 text-right">
+        {exposed > 0 ? (
+          <span className={gap.exposed >= longDeadAir ? "border-ink border-b-2 font-bold" : ""}>
+            {exposed} s
+          </span>
+        ) : null}
+      </span>
+    </button>
+  );
+});

@@ -1,0 +1,46 @@
+import { usePointAt } from "#app/components/gig/gap-focus.tsx";
+import { Octagon, Warning } from "#app/components/ui/warning.tsx";
+import type { RowWarning } from "#app/domain/gig/warnings.ts";
+
+const short: Record<RowWarning["code"], string> = {
+  "plain-raised": "raised",
+  far: "far",
+  "raised-at-an-end": "drifts",
+  "into-retuned": "not straight in",
+};
+
+/** Things worth a second look, in a word beside the title; the whole sentence on hover, focus or tap. */
+export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: readonly RowWarning[] }) {
+  const { show, hide } = usePointAt();
+  if (warnings.length === 0) return null;
+  const sentence = warnings.map((warning) => warning.message).join(" ");
+  const key = `${entryId}/warnings`;
+  const point = (anchor: Element) => show({ entryId: key, sentence, anchor });
+  return (
+    <button
+      type="button"
+      aria-label={sentence}
+      className="inline-flex min-h-6 min-w-6 shrink-0 items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
+      onPointerEnter={(event) => (event.pointerType === "mouse" ? point(event.currentTarget) : null)}
+      onPointerLeave={() => hide(key)}
+      onFocus={(event) => point(event.currentTarget)}
+      onBlur={() => hide(key)}
+      onClick={(event) => point(event.currentTarget)}
+    >
+      <Octagon size={13} />
+      <span aria-hidden="true">{warnings.map((warning) => short[warning.code]).join(", ")}</span>
+    </button>
+  );
+}
+
+/** What must be mended about a row, a line each. */
+export function RowTroubles({ troubles }: { troubles: readonly string[] }) {
+  if (troubles.length === 0) return null;
+  return (
+    <div className="flex flex-col pr-3 pb-1.5 pl-3 [grid-area:warn] lg:pl-3.5">
+      {troubles.map((message) => (
+        <Warning key={message}>{message}</Warning>
+      ))}
+    </div>
+  );
+}
