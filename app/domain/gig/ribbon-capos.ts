@@ -1,0 +1,70 @@
+import type { RibbonFrame } from "#app/domain/gig/ribbon.ts";
+import type { GuitarStory } from "#app/domain/gig/ribbon-story.ts";
+import { sameCapo } from "#app/domain/music/capo.ts";
+import type { Capo } from "#app/domain/music/neck.ts";
+import type { Guitar } from "#app/domain/repertoire/guitar.ts";
+
+/** A capo on a ribbon: a bar across each run of covered strings, and how far down it stays on. */
+export type CapoBar = {
+  fret: number;
+  runs: { x1: number; x2: number }[];
+  y1: number;
+  y2: number;
+  /** Foot of the last song for which it stays on; null where that is the song it was put on for. */
+  endY: number | null;
+};
+
+/** Share of a row's height that a bar takes. */
+const barShare = 0.42;
+
+/** Neighbouring covered strings as runs from edge to edge, half a string's distance wider on either side. */
+function runsOf(
+  capo: Capo,
+  places: readonly number[],
+  distance: number,
+  count: number,
+): { x1: number; x2: number }[] {
+  const covered = [...capo.strings].sort((a, b) => b - a).map((string) => count - string);
+  const groups: number[][] = [];
+  for (const index of covered) {
+    const group = groups.at(-1);
+    if (group && group.at(-1) === index - 1) group.push(index);
+    else groups.push([index]);
+  }
+  return groups.map((group) => {
+    const xs = group.map((index) => places[index] ?? 0);
+    return { x1: Math.min(...xs) - distance * 0.42, x2: Math.max(...xs) + distance * 0.42 };
+  });
+}
+
+/** Every capo of one guitar down the set, from the song it is put on for to the last it stays on for. */
+export function capoBars(
+  story: GuitarStory,
+  places: readonly number[],
+  distance: number,
+  guitar: Guitar,
+  { tops, heights }: RibbonFrame,
+): CapoBar[] {
+  const bars: CapoBar[] = [];
+  story.uses.forEach(({ row, capos }, use) => {
+    const earlier = story.uses[use - 1]?.capos ?? [];
+    capos.forEach((capo, place) => {
+      if (earlier.some((one) => sameCapo(one, capo))) return;
+      let last = use;
+      while (story.uses[last + 1]?.capos.some((one) => sameCapo(one, capo))) last += 1;
+      const top = tops[row] ?? 0;
+      const height = heights[row] ?? 0;
+      const thick = height * barShare * (capos.length > 1 ? 0.8 : 1);
+      const middle = top + (height * (place + 1)) / (capos.length + 1);
+      const lastRow = story.uses[last]?.row ?? row;
+      bars.push({
+        fret: capo.fret,
+        runs: runsOf(capo, places, distance, guitar.strings),
+        y1: middle - thick / 2,
+        y2: middle + thick / 2,
+        endY: last > use ? (tops[lastRow] ?? 0) + (heights[lastRow] ?? 0) - 2 : null,
+      });
+    });
+  });
+  return bars;
+}
