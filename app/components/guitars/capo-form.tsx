@@ -12,6 +12,7 @@ import { SaveBar } from "#app/components/save-bar.tsx";
 import { TextField } from "#app/components/ui/field.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
 import { UnsavedGuard } from "#app/components/unsaved-guard.tsx";
+import { useUnsaved } from "#app/components/use-unsaved.ts";
 import { allStrings } from "#app/domain/music/capo.ts";
 import {
   type CapoFields,
@@ -49,6 +50,7 @@ export function CapoForm({
   status,
 }: CapoFormProps) {
   const navigation = useNavigation();
+  const { unsaved, watch } = useUnsaved(id);
   const [form, fields] = useForm<CapoFormInput, CapoFields>({
     id,
     lastResult,
@@ -66,8 +68,8 @@ export function CapoForm({
     ariaAttributes: false,
   });
   return (
-    <Form method="post" {...getFormProps(form)} className="pb-20 md:pb-0">
-      <UnsavedGuard unsaved={form.dirty && !saving} />
+    <Form method="post" {...getFormProps(form)} {...watch} className="pb-20 md:pb-0">
+      <UnsavedGuard unsaved={unsaved && !saving} />
       {version === null ? null : <input type="hidden" name="version" value={version} />}
       {restore ? <input type="hidden" name="restore" value="yes" /> : null}
       <div className="flex max-w-md flex-col gap-4 px-4 py-5 md:px-6">
@@ -102,7 +104,7 @@ export function CapoForm({
           className="max-w-24 tabular"
         />
       </div>
-      <SaveBar form={form} saving={saving} label={saveLabel} status={status} />
+      <SaveBar form={form} saving={saving} unsaved={unsaved} label={saveLabel} status={status} />
     </Form>
   );
 }

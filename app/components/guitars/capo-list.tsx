@@ -1,6 +1,7 @@
 import { Link } from "react-router";
 import { CapoPicture } from "#app/components/guitars/capo-picture.tsx";
 import { coverWords } from "#app/components/guitars/capo-words.ts";
+import { guitarColumns } from "#app/components/guitars/guitar-list.tsx";
 import { PostButton } from "#app/components/post-button.tsx";
 import type { ActCapo } from "#app/domain/repertoire/guitar.ts";
 
@@ -10,7 +11,7 @@ export function CapoList({ capos, mayEdit }: { capos: readonly ActCapo[]; mayEdi
     <ul className="border-grey-200 border-t">
       {capos.map((capo) => (
         <li key={capo.id} className="border-grey-200 border-b bg-white hover:bg-ground">
-          <div className="relative grid min-h-13 grid-cols-[5rem_minmax(0,1fr)_auto] items-center gap-x-4 px-4 py-2 md:px-6 lg:grid-cols-[4.5rem_minmax(0,1fr)_12.5rem_8.5rem_6rem]">
+          <div className={`${guitarColumns} relative min-h-13 px-4 py-2 md:px-6`}>
             <CapoPicture strings={capo.strings} count={Math.max(6, ...(capo.strings ?? []))} />
             <p className="truncate">
               {mayEdit ? (
@@ -24,12 +25,12 @@ export function CapoList({ capos, mayEdit }: { capos: readonly ActCapo[]; mayEdi
                 <span className="font-display font-semibold text-lg">{capo.name}</span>
               )}
             </p>
-            <p className="text-sm max-lg:col-start-2 max-lg:row-start-2">{coverWords(capo.strings)}</p>
-            <p className="text-sm max-lg:col-start-3 max-lg:row-start-1">
-              {capo.count === 1 ? "One of them" : `${capo.count} of them`}
-            </p>
+            <div className="flex flex-wrap gap-x-4 text-sm max-lg:col-start-2 lg:contents">
+              <p>{coverWords(capo.strings)}</p>
+              <p>{capo.count === 1 ? "One of them" : `${capo.count} of them`}</p>
+            </div>
             {mayEdit ? (
-              <div className="relative z-10 justify-self-end max-lg:hidden">
+              <div className="relative z-10 col-end-[-1] justify-self-end max-lg:hidden">
                 <PostButton
                   small
                   look="quiet"

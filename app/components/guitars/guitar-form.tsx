@@ -7,6 +7,7 @@ import { GuitarOnStage } from "#app/components/guitars/guitar-on-stage.tsx";
 import { GuitarTuning } from "#app/components/guitars/guitar-tuning.tsx";
 import { SaveBar } from "#app/components/save-bar.tsx";
 import { UnsavedGuard } from "#app/components/unsaved-guard.tsx";
+import { useUnsaved } from "#app/components/use-unsaved.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 import {
@@ -35,6 +36,7 @@ type GuitarFormProps = {
 export function GuitarForm(props: GuitarFormProps) {
   const { id, defaultValue, lastResult, others, naming, version, restore, saveLabel, status } = props;
   const navigation = useNavigation();
+  const { unsaved, watch } = useUnsaved(id);
   const ids = others.map((guitar) => guitar.id);
   const [form, fields] = useForm<GuitarFormInput, GuitarFields>({
     id,
@@ -47,8 +49,8 @@ export function GuitarForm(props: GuitarFormProps) {
   });
   const saving = navigation.state !== "idle" && navigation.formMethod === "POST";
   return (
-    <Form method="post" {...getFormProps(form)} className="pb-20 md:pb-0">
-      <UnsavedGuard unsaved={form.dirty && !saving} />
+    <Form method="post" {...getFormProps(form)} {...watch} className="pb-20 md:pb-0">
+      <UnsavedGuard unsaved={unsaved && !saving} />
       {version === null ? null : <input type="hidden" name="version" value={version} />}
       {restore ? <input type="hidden" name="restore" value="yes" /> : null}
       <div className="grid gap-x-10 gap-y-8 px-4 py-5 md:px-6 lg:grid-cols-[20rem_minmax(0,1fr)]">
@@ -58,7 +60,7 @@ export function GuitarForm(props: GuitarFormProps) {
           <GuitarOnStage fields={fields} others={others} />
         </div>
       </div>
-      <SaveBar form={form} saving={saving} label={saveLabel} status={status} />
+      <SaveBar form={form} saving={saving} unsaved={unsaved} label={saveLabel} status={status} />
     </Form>
   );
 }

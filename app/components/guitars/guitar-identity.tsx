@@ -21,9 +21,10 @@ export function GuitarIdentity({ form, fields }: GuitarIdentityProps) {
     type: "text",
     ariaAttributes: false,
   });
+  const before = (fields.kind.value ?? "acoustic") as InstrumentKind;
+  const stringsBefore = fields.strings.value;
   const bringStrings = (next: InstrumentKind) => {
-    const before = (fields.kind.value ?? "acoustic") as InstrumentKind;
-    if (fields.strings.value === String(usualStringsFor(before))) {
+    if (stringsBefore === String(usualStringsFor(before))) {
       form.update({ name: fields.strings.name, value: String(usualStringsFor(next)) });
     }
   };

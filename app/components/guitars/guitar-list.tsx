@@ -7,10 +7,20 @@ import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 import { reachOf, reachWords } from "#app/domain/repertoire/reach.ts";
 
-const columns =
-  "grid items-center gap-x-4 grid-cols-[5rem_minmax(0,1fr)] lg:grid-cols-[4.5rem_minmax(0,1fr)_12.5rem_8.5rem_8rem_6rem_6.5rem]";
+/** Shared with the capos below, so that both stand in the same columns. */
+export const guitarColumns =
+  "grid items-center gap-x-4 grid-cols-[5rem_minmax(0,1fr)] lg:grid-cols-[4.5rem_minmax(0,1fr)_12.5rem_8.5rem_8rem_6rem_6.5rem] xl:grid-cols-[4.5rem_minmax(12rem,18rem)_12.5rem_8.5rem_9rem_6rem_6.5rem_minmax(0,1fr)]";
 
-const heads = ["Badge", "Guitar", "Usual tuning", "From usual", "In the show", "Channel", "Strings from"];
+const heads = [
+  "Badge",
+  "Guitar",
+  "Usual tuning",
+  "From usual",
+  "In the show",
+  "Channel",
+  "Strings from",
+  "Notes",
+];
 
 /** The act's guitars, one row each. */
 export function GuitarList({ guitars, naming }: { guitars: readonly Guitar[]; naming: Naming }) {
@@ -18,10 +28,12 @@ export function GuitarList({ guitars, naming }: { guitars: readonly Guitar[]; na
     <div>
       <div
         aria-hidden="true"
-        className={`${columns} min-h-9 border-grey-200 border-b px-4 font-display font-medium text-grey-600 text-sm max-lg:hidden md:px-6`}
+        className={`${guitarColumns} min-h-9 border-grey-200 border-b px-4 font-display font-medium text-grey-600 text-sm max-lg:hidden md:px-6`}
       >
         {heads.map((head) => (
-          <span key={head}>{head}</span>
+          <span key={head} className="last:hidden xl:last:inline">
+            {head}
+          </span>
         ))}
       </div>
       <ul>
@@ -46,7 +58,7 @@ function Row({ guitar, naming, spareFor }: { guitar: Guitar; naming: Naming; spa
   ].filter(Boolean);
   return (
     <li className="border-grey-200 border-b bg-white hover:bg-ground">
-      <div className={`${columns} relative min-h-13 gap-y-1 px-4 py-2 md:px-6`}>
+      <div className={`${guitarColumns} relative min-h-13 gap-y-1 px-4 py-2 md:px-6`}>
         <GuitarBadge shortName={guitar.shortName} shape={guitar.badge} />
         <p className="min-w-0 truncate">
           <Link
@@ -57,28 +69,29 @@ function Row({ guitar, naming, spareFor }: { guitar: Guitar; naming: Naming; spa
           </Link>
           <span className="ml-3 text-grey-600 text-sm">{kindWords[guitar.kind]}</span>
         </p>
-        <span className="max-lg:col-start-2 max-lg:-ml-2">
+        <span className="-ml-2 max-lg:col-start-2">
           <TuningCells
             letters={formatTuning(guitar.usual, naming)}
             spoken={spokenTuning(guitar.usual, naming)}
           />
         </span>
-        <p className="text-sm max-lg:col-start-2">
-          <span className="sr-only">Semitones from usual: </span>
-          {reachWords(reachOf(guitar))}
-        </p>
-        <p className="text-sm first-letter:uppercase empty:hidden max-lg:col-start-2 lg:empty:block">
-          {inShow.join(", ")}
-        </p>
-        <p className="text-sm empty:hidden max-lg:col-start-2 lg:empty:block">{guitar.channel}</p>
-        <p className="text-sm empty:hidden max-lg:col-start-2 lg:empty:block">
-          {guitar.strungOn ? (
-            <>
-              <span className="lg:sr-only">Strings fitted on </span>
-              {dayWords(guitar.strungOn)}
-            </>
-          ) : null}
-        </p>
+        <div className="flex flex-wrap gap-x-4 text-sm max-lg:col-start-2 lg:contents">
+          <p>
+            <span className="sr-only">Semitones from usual: </span>
+            {reachWords(reachOf(guitar))}
+          </p>
+          <p className="first-letter:uppercase max-lg:empty:hidden">{inShow.join(", ")}</p>
+          <p className="max-lg:empty:hidden">{guitar.channel}</p>
+          <p className="max-lg:empty:hidden">
+            {guitar.strungOn ? (
+              <>
+                <span className="lg:sr-only">Strings fitted on </span>
+                {dayWords(guitar.strungOn)}
+              </>
+            ) : null}
+          </p>
+          <p className="truncate text-grey-600 max-xl:hidden">{guitar.notes}</p>
+        </div>
       </div>
     </li>
   );

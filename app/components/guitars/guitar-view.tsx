@@ -1,6 +1,7 @@
 import type { ReactNode } from "react";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
 import { dayWords, kindWords } from "#app/components/guitars/kind-words.ts";
+import { flats, sharps } from "#app/components/guitars/reach-table.tsx";
 import { PitchNote } from "#app/components/tuning/string-note.tsx";
 import { fifthsOfTuning, type Naming } from "#app/domain/music/note-names.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
@@ -32,9 +33,9 @@ export function GuitarView({ guitar, spareFor, naming }: GuitarViewProps) {
 function Pitches({ guitar, naming }: { guitar: Guitar; naming: Naming }) {
   const fifths = fifthsOfTuning(guitar.usual);
   const rows = [
-    { label: "Usual", pitches: guitar.usual, className: "text-xl leading-9" },
-    { label: "Highest", pitches: guitar.highest, className: "text-grey-800" },
-    { label: "Lowest", pitches: guitar.lowest, className: "text-grey-800" },
+    { label: "Usual", pitches: guitar.usual, signature: fifths, className: "text-xl leading-9" },
+    { label: "Highest", pitches: guitar.highest, signature: sharps, className: "text-grey-800" },
+    { label: "Lowest", pitches: guitar.lowest, signature: flats, className: "text-grey-800" },
   ];
   return (
     <table className="border-collapse text-center font-display tabular">
@@ -51,13 +52,13 @@ function Pitches({ guitar, naming }: { guitar: Guitar; naming: Naming }) {
         </tr>
       </thead>
       <tbody>
-        {rows.map(({ label, pitches, className }) => (
+        {rows.map(({ label, pitches, signature, className }) => (
           <tr key={label}>
             <RowHead>{label}</RowHead>
             {pitches.map((midi, index) => (
               // biome-ignore lint/suspicious/noArrayIndexKey: a string is known by its place
               <td key={index} className={`font-semibold ${className}`}>
-                <PitchNote midi={midi} naming={naming} fifths={fifths} />
+                <PitchNote midi={midi} naming={naming} fifths={signature} />
               </td>
             ))}
           </tr>

@@ -14,12 +14,16 @@ export type ReachInputs = {
 
 type ReachTableProps = { usual: readonly number[]; below: ReachInputs; above: ReachInputs; naming: Naming };
 
+/** Signatures that spell what a string is raised to in sharps, and what it is let down to in flats. */
+export const sharps = 5;
+export const flats = -5;
+
 /** Each string's usual pitch and how far it may go from it, typed as semitones and told as notes. */
 export function ReachTable({ usual, below, above, naming }: ReachTableProps) {
   const fifths = fifthsOfTuning(usual);
   const count = usual.length;
-  const note = (midi: number | null) =>
-    midi === null ? null : <PitchNote midi={midi} naming={naming} fifths={fifths} />;
+  const note = (midi: number | null, signature = fifths) =>
+    midi === null ? null : <PitchNote midi={midi} naming={naming} fifths={signature} />;
   const errors = [...new Set([below, above].flatMap((inputs) => Object.values(inputs.errors).flat()))];
   return (
     <div className="flex flex-col gap-2">
@@ -42,18 +46,20 @@ export function ReachTable({ usual, below, above, naming }: ReachTableProps) {
             </tr>
           </thead>
           <tbody>
-            <Notes label="Usual" notes={usual.map(note)} className="text-xl leading-9" />
+            <Notes label="Usual" notes={usual.map((midi) => note(midi))} className="text-xl leading-9" />
             <Inputs label="Up by" what="up" count={count} inputs={above} fallback={defaultReach.above} />
             <Notes
               label="Highest"
-              notes={usual.map((midi, index) => note(moved(midi, above.typed[index], defaultReach.above, 1)))}
+              notes={usual.map((midi, index) =>
+                note(moved(midi, above.typed[index], defaultReach.above, 1), sharps),
+              )}
               className="text-grey-800"
             />
             <Inputs label="Down by" what="down" count={count} inputs={below} fallback={defaultReach.below} />
             <Notes
               label="Lowest"
               notes={usual.map((midi, index) =>
-                note(moved(midi, below.typed[index], defaultReach.below, -1)),
+                note(moved(midi, below.typed[index], defaultReach.below, -1), flats),
               )}
               className="text-grey-800"
             />

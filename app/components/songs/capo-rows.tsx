@@ -8,10 +8,12 @@ type CapoRowsProps = {
   strings: number;
   onChange: (capos: Capo[]) => void;
   most: number;
+  /** Which way of playing the song these belong to, for those who hear the page. */
+  within: string;
 };
 
 /** The capos of a neck to be set by hand: fret by fret and string by string. Writes what the capo field then says. */
-export function CapoRows({ capos, strings, onChange, most }: CapoRowsProps) {
+export function CapoRows({ capos, strings, onChange, most, within }: CapoRowsProps) {
   const replace = (index: number, capo: Capo) => {
     const others = capos.filter((_, place) => place !== index);
     if (!others.some((other) => sameCapo(other, capo))) onChange(capos.with(index, capo));
@@ -25,6 +27,7 @@ export function CapoRows({ capos, strings, onChange, most }: CapoRowsProps) {
           key={index}
           capo={capo}
           strings={strings}
+          within={within}
           onChange={(changed) => replace(index, changed)}
           onRemove={() => onChange(capos.toSpliced(index, 1))}
         />
@@ -47,11 +50,12 @@ export function CapoRows({ capos, strings, onChange, most }: CapoRowsProps) {
 type CapoRowProps = {
   capo: Capo;
   strings: number;
+  within: string;
   onChange: (capo: Capo) => void;
   onRemove: () => void;
 };
 
-function CapoRow({ capo, strings, onChange, onRemove }: CapoRowProps) {
+function CapoRow({ capo, strings, within, onChange, onRemove }: CapoRowProps) {
   const toggle = (string: number) => {
     const covered = capo.strings.includes(string)
       ? capo.strings.filter((other) => other !== string)
@@ -59,8 +63,8 @@ function CapoRow({ capo, strings, onChange, onRemove }: CapoRowProps) {
     if (covered.length > 0) onChange({ ...capo, strings: covered });
   };
   return (
-    <fieldset className="flex flex-wrap items-center gap-x-3 gap-y-2">
-      <legend className="sr-only">{`Capo ${capo.fret}`}</legend>
+    <fieldset className="flex flex-wrap items-center gap-x-2 gap-y-2">
+      <legend className="sr-only">{`${within}, capo ${capo.fret}`}</legend>
       <div className="flex items-center">
         <Step
           label={`Capo ${capo.fret}: one fret lower`}
@@ -69,7 +73,7 @@ function CapoRow({ capo, strings, onChange, onRemove }: CapoRowProps) {
         >
           <Minus size={14} aria-hidden="true" />
         </Step>
-        <span className="flex h-8 w-9 items-center justify-center bg-brass font-display font-semibold text-white tabular">
+        <span className="flex h-8 w-9 items-center pointer-coarse:h-11 justify-center bg-brass font-display font-semibold text-white tabular">
           {capo.fret}
         </span>
         <Step
@@ -90,7 +94,7 @@ function CapoRow({ capo, strings, onChange, onRemove }: CapoRowProps) {
               aria-pressed={covered}
               aria-label={`Capo ${capo.fret} over string ${string}`}
               onClick={() => toggle(string)}
-              className={`-ml-px h-8 border font-display font-semibold text-sm tabular first:ml-0 ${strings > 8 ? "w-6" : "w-8"} ${
+              className={`-ml-px h-8 border pointer-coarse:h-11 font-display font-semibold text-sm tabular first:ml-0 ${strings > 8 ? "w-6" : "w-8"} ${
                 covered
                   ? "border-brass bg-brass text-white"
                   : "border-grey-400 bg-white text-grey-800 hover:bg-grey-100"
@@ -128,7 +132,7 @@ function Step({
       type="button"
       aria-label={label}
       title={label}
-      className="flex size-8 items-center justify-center border border-grey-400 bg-white hover:bg-grey-100 disabled:opacity-40"
+      className="flex h-8 w-7 items-center pointer-coarse:h-11 pointer-coarse:w-9 justify-center border border-grey-400 bg-white hover:bg-grey-100 disabled:opacity-40"
       {...rest}
     />
   );

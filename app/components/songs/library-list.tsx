@@ -20,7 +20,7 @@ type LibraryListProps = {
 };
 
 const columns =
-  "grid items-center gap-x-4 md:grid-cols-[minmax(0,1fr)_12.5rem_6.5rem_4.5rem_3.5rem_4.5rem] grid-cols-[minmax(0,1fr)_auto]";
+  "grid items-center gap-x-4 grid-cols-[minmax(0,1fr)_auto] md:grid-cols-[minmax(0,1fr)_12.5rem_6.5rem_4.5rem_3.5rem_4.5rem] xl:grid-cols-[minmax(14rem,24rem)_12.5rem_8rem_5rem_3.5rem_minmax(0,1fr)_4.5rem]";
 
 const heads: { sort: LibrarySort | null; label: string; className?: string }[] = [
   { sort: "title", label: "Title" },
@@ -28,30 +28,34 @@ const heads: { sort: LibrarySort | null; label: string; className?: string }[] =
   { sort: null, label: "Capo" },
   { sort: "key", label: "Key" },
   { sort: "length", label: "Length", className: "justify-self-end" },
+  { sort: null, label: "Credit", className: "max-xl:hidden xl:pl-4" },
 ];
 
 /** The songs of the library, one row each. On a phone the heads become a line of ways to sort. */
 export function LibraryList({ rows, naming, mayEdit, sort, descending, sortUrl }: LibraryListProps) {
+  const credits = rows.some((row) => row.credit !== "");
   return (
     <div>
       <div
         className={`${columns} max-md:flex max-md:gap-x-5 border-grey-200 border-b px-4 md:px-6 font-display font-medium text-grey-600 text-sm`}
       >
-        {heads.map((head) =>
-          head.sort ? (
-            <SortLink
-              key={head.label}
-              label={head.label}
-              className={head.className}
-              state={head.sort !== sort ? null : descending ? "down" : "up"}
-              to={sortUrl(head.sort, head.sort === sort && !descending)}
-            />
-          ) : (
-            <span key={head.label} className="max-md:hidden">
-              {head.label}
-            </span>
-          ),
-        )}
+        {heads
+          .filter((head) => head.label !== "Credit" || credits)
+          .map((head) =>
+            head.sort ? (
+              <SortLink
+                key={head.label}
+                label={head.label}
+                className={head.className}
+                state={head.sort !== sort ? null : descending ? "down" : "up"}
+                to={sortUrl(head.sort, head.sort === sort && !descending)}
+              />
+            ) : (
+              <span key={head.label} className={`max-md:hidden ${head.className ?? ""}`}>
+                {head.label}
+              </span>
+            ),
+          )}
       </div>
       <ul>
         {rows.map((row) => (
@@ -105,9 +109,11 @@ function Row({ row, naming, mayEdit }: { row: LibraryRow; naming: Naming; mayEdi
           >
             {row.title}
           </Link>
-          {row.credit ? <span className="ml-3 text-grey-600 text-sm max-md:hidden">{row.credit}</span> : null}
+          {row.credit ? (
+            <span className="ml-3 text-grey-600 text-sm max-md:hidden xl:hidden">{row.credit}</span>
+          ) : null}
         </p>
-        <p className="flex items-baseline gap-2 max-md:col-start-1 max-md:row-start-2 max-md:-ml-2">
+        <p className="flex items-baseline gap-2 -ml-2 max-md:col-start-1 max-md:row-start-2">
           {neck ? (
             <TuningCells
               letters={formatTuning(neck.open, naming, fifths)}
@@ -137,8 +143,9 @@ function Row({ row, naming, mayEdit }: { row: LibraryRow; naming: Naming; mayEdi
         <p className="tabular justify-self-end text-grey-800 max-md:col-start-2 max-md:row-start-1">
           {formatDuration(row.seconds)}
         </p>
+        <p className="truncate pl-4 text-grey-600 text-sm max-xl:hidden">{row.credit}</p>
         {mayEdit ? (
-          <div className="relative z-10 flex justify-end max-md:hidden">
+          <div className="relative z-10 flex justify-end opacity-60 focus-within:opacity-100 group-hover:opacity-100 max-md:hidden">
             <PostButton
               small
               look="quiet"

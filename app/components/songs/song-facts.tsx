@@ -12,7 +12,7 @@ type SongFactsProps = {
 /** A song's title and what there is to know of it beside how it is played. */
 export function SongFacts({ fields }: SongFactsProps) {
   return (
-    <div className="grid grid-cols-6 gap-x-3 gap-y-4">
+    <div className="grid grid-cols-6 content-start gap-x-3 gap-y-4">
       <Line
         field={fields.title}
         label="Title"

@@ -9,6 +9,7 @@ import { WayFields } from "#app/components/songs/way-fields.tsx";
 import { Button } from "#app/components/ui/button.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
 import { UnsavedGuard } from "#app/components/unsaved-guard.tsx";
+import { useUnsaved } from "#app/components/use-unsaved.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { FormGuitar } from "#app/domain/repertoire/form-guitar.ts";
 import {
@@ -49,6 +50,7 @@ export function SongForm({
   status,
 }: SongFormProps) {
   const navigation = useNavigation();
+  const { unsaved, watch } = useUnsaved(id);
   const [form, fields] = useForm<SongFormInput, SongFields>({
     id,
     lastResult,
@@ -62,8 +64,10 @@ export function SongForm({
   const saving = navigation.state !== "idle" && navigation.formMethod === "POST";
   return (
     <FormProvider context={form.context}>
-      <UnsavedGuard unsaved={form.dirty && !saving} />
-      <Form method="post" {...getFormProps(form)} className="pb-20 md:pb-0">
+      <UnsavedGuard unsaved={unsaved && !saving} />
+      <Form method="post" {...getFormProps(form)} {...watch} className="pb-20 md:pb-0">
+        {/* The first button of a form is the one that Enter in a field presses: it must save, not move or remove. */}
+        <button type="submit" className="hidden" tabIndex={-1} aria-hidden="true" />
         {version === null ? null : <input type="hidden" name="version" value={version} />}
         {restore ? <input type="hidden" name="restore" value="yes" /> : null}
         <div className="grid gap-x-10 gap-y-8 px-4 py-5 md:px-6 lg:grid-cols-[20rem_minmax(0,1fr)]">
@@ -91,6 +95,7 @@ export function SongForm({
               <Button
                 small
                 className="self-start"
+                type="submit"
                 {...form.insert.getButtonProps({
                   name: fields.ways.name,
                   defaultValue: emptyWay(choices),
@@ -102,7 +107,7 @@ export function SongForm({
             ) : null}
           </div>
         </div>
-        <SaveBar form={form} saving={saving} label={saveLabel} status={status} />
+        <SaveBar form={form} saving={saving} unsaved={unsaved} label={saveLabel} status={status} />
       </Form>
     </FormProvider>
   );

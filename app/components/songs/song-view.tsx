@@ -50,7 +50,7 @@ function Fact({ label, children }: { label: string; children: ReactNode }) {
 type WayProps = { neck: SongNeck; index: number } & SongViewProps;
 
 function Way({ neck, index, song, guitars, naming }: WayProps) {
-  const usual = usualFor(neck.open, usualChoices(guitars.filter((guitar) => !guitar.deleted)));
+  const usual = usualFor(neck.open, usualChoices(guitars.filter((guitar) => !guitar.deleted)), neck.guitars);
   const fifths = spellingFifths(song.key, neck.open);
   const strings = neck.open.map((midi, place) => ({
     string: neck.open.length - place,

@@ -1,11 +1,10 @@
 import { type FieldMetadata, type FormMetadata, getInputProps, getSelectProps } from "@conform-to/react";
-import { ChevronDown, ChevronUp, X } from "lucide-react";
 import { CapoRows } from "#app/components/songs/capo-rows.tsx";
 import { GuitarTicks } from "#app/components/songs/guitar-ticks.tsx";
+import { WayHead } from "#app/components/songs/way-head.tsx";
 import { WayReading } from "#app/components/songs/way-reading.tsx";
 import { choiceName, instrumentLabel } from "#app/components/songs/way-words.ts";
 import { TuningField } from "#app/components/tuning/tuning-field.tsx";
-import { Button } from "#app/components/ui/button.tsx";
 import { SelectField, TextField } from "#app/components/ui/field.tsx";
 import { caposWords } from "#app/domain/music/capo.ts";
 import { readKey, spellingFifths } from "#app/domain/music/key.ts";
@@ -67,44 +66,10 @@ export function WayFields({
       className="flex flex-col gap-4 border-grey-200 border-b pb-6"
     >
       <input key={idKey} {...id} />
-      <header className="flex min-h-9 items-center gap-1">
-        <h3 id={`${way.id}-title`} className="mr-2 font-semibold text-xl">
-          {name}
-        </h3>
-        <TuningName reading={reading} usual={usual} naming={naming} />
-        <span className="ml-auto flex">
-          {index > 0 ? (
-            <MoveButton
-              form={form}
-              list={list}
-              from={index}
-              to={index - 1}
-              label={`Prefer ${name.toLowerCase()} more`}
-            />
-          ) : null}
-          {index < count - 1 ? (
-            <MoveButton
-              form={form}
-              list={list}
-              from={index}
-              to={index + 1}
-              label={`Prefer ${name.toLowerCase()} less`}
-            />
-          ) : null}
-          {count > 1 ? (
-            <Button
-              small
-              look="quiet"
-              aria-label={`Remove ${name.toLowerCase()}`}
-              title="Remove"
-              {...form.remove.getButtonProps({ name: list.name, index })}
-            >
-              <X size={16} aria-hidden="true" />
-            </Button>
-          ) : null}
-        </span>
-      </header>
-      <div className="grid gap-x-8 gap-y-4 xl:grid-cols-[minmax(0,20rem)_minmax(0,1fr)]">
+      <WayHead form={form} list={list} titleId={`${way.id}-title`} index={index} count={count}>
+        {reading?.ok ? nameTuning(reading.open, usual, naming) : null}
+      </WayHead>
+      <div className="grid gap-x-8 gap-y-4 xl:grid-cols-[22rem_minmax(0,1fr)]">
         <div className="flex flex-col gap-4">
           <Instrument field={fields.usual} choices={choices} usual={usual} naming={naming} />
           <TuningField
@@ -135,30 +100,37 @@ export function WayFields({
                 capos={capos.capos}
                 strings={usual.length}
                 most={songLimits.caposPerWay}
+                within={name}
                 onChange={(changed) =>
                   write("capos", changed.length === 0 ? "" : caposWords(changed, usual.length))
                 }
               />
             </div>
           ) : null}
+        </div>
+        <div className="xl:col-start-2 xl:row-span-2 xl:row-start-1">
+          {reading?.ok ? (
+            <WayReading
+              strings={reading.notes}
+              capos={capos.ok ? capos.capos : []}
+              only={only.length > 0 ? only : null}
+              guitars={guitars}
+              naming={naming}
+              fifths={signature(typedKey, naming, reading)}
+              caption={`${name}, string by string`}
+            />
+          ) : (
+            <p className="text-grey-600" aria-live="polite">
+              {reading
+                ? !fields.tuning.errors && reading.message
+                : "What is understood of the tuning shows here."}
+            </p>
+          )}
+        </div>
+        <div className="flex flex-col gap-4">
           {sameStrings.length > 0 ? <GuitarTicks field={fields.guitars} guitars={sameStrings} /> : null}
           <Penalty field={fields.penalty} first={index === 0} />
         </div>
-        {reading?.ok ? (
-          <WayReading
-            strings={reading.notes}
-            capos={capos.ok ? capos.capos : []}
-            only={only.length > 0 ? only : null}
-            guitars={guitars}
-            naming={naming}
-            fifths={signature(typedKey, naming, reading)}
-            caption={`${name}, string by string`}
-          />
-        ) : (
-          <p className="text-grey-600" aria-live="polite">
-            {reading ? reading.message : "What is understood of the tuning shows here, string by string."}
-          </p>
-        )}
       </div>
     </section>
   );
@@ -167,40 +139,6 @@ export function WayFields({
 function signature(typedKey: string, naming: Naming, reading: Extract<TuningReading, { ok: true }>): number {
   const key = readKey(typedKey, naming);
   return spellingFifths(key.ok ? key.key : "", reading.open);
-}
-
-function TuningName({
-  reading,
-  usual,
-  naming,
-}: {
-  reading: TuningReading | null;
-  usual: readonly number[];
-  naming: Naming;
-}) {
-  const name = reading?.ok ? nameTuning(reading.open, usual, naming) : null;
-  return name ? <span className="text-grey-600">{name}</span> : null;
-}
-
-type MoveButtonProps = Pick<WayFieldsProps, "form" | "list"> & {
-  from: number;
-  to: number;
-  label: string;
-};
-
-function MoveButton({ form, list, from, to, label }: MoveButtonProps) {
-  const Chevron = to < from ? ChevronUp : ChevronDown;
-  return (
-    <Button
-      small
-      look="quiet"
-      aria-label={label}
-      title={to < from ? "Prefer more" : "Prefer less"}
-      {...form.reorder.getButtonProps({ name: list.name, from, to })}
-    >
-      <Chevron size={18} aria-hidden="true" />
-    </Button>
-  );
 }
 
 type InstrumentProps = {

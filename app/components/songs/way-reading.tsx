@@ -1,3 +1,4 @@
+import { stringRange } from "#app/components/capo-mark.tsx";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
 import { NeckTable } from "#app/components/tuning/neck-table.tsx";
 import { Octagon, Warning } from "#app/components/ui/warning.tsx";
@@ -59,9 +60,7 @@ function PlayedOn({ way, guitars, naming }: PlayedOnProps) {
   }
   const { can, cannot } = playableOn(way, live, naming);
   const told = cannot.filter(({ guitar }) => way.guitars === null || way.guitars.includes(guitar.id));
-  const raised = can.flatMap((guitar) =>
-    raisedStrings(way.open, guitar.usual, naming).map(({ message }) => `On ${guitar.name}, ${message}.`),
-  );
+  const raised = raisedOn(way.open, can);
   return (
     <div className="flex flex-col gap-2 text-sm">
       {can.length > 0 ? (
@@ -103,5 +102,23 @@ function PlayedOn({ way, guitars, naming }: PlayedOnProps) {
         </div>
       ) : null}
     </div>
+  );
+}
+
+/** Which strings stand above their usual pitch on which guitars, one sentence for all guitars that are alike in it. */
+function raisedOn(open: readonly number[], guitars: readonly FormGuitar[]): string[] {
+  const names = new Map<string, string[]>();
+  for (const guitar of guitars) {
+    const raised = raisedStrings(open, guitar.usual);
+    if (raised.length === 0) continue;
+    const sizes = [...new Set(raised.map(({ semitones }) => semitones))];
+    const words = sizes.map((size) => {
+      const strings = raised.filter(({ semitones }) => semitones === size).map(({ string }) => string);
+      return `${strings.length === 1 ? "string" : "strings"} ${stringRange(strings)} up ${size}`;
+    });
+    names.set(words.join(", "), [...(names.get(words.join(", ")) ?? []), guitar.name]);
+  }
+  return [...names].map(
+    ([strings, on]) => `On ${on.join(", ")}: ${strings} from usual. A raised string may break.`,
   );
 }

@@ -1,7 +1,6 @@
 import type { FieldMetadata } from "@conform-to/react";
 import { getInputProps } from "@conform-to/react";
 import type { ReactNode } from "react";
-import { Button } from "#app/components/ui/button.tsx";
 import { TextField } from "#app/components/ui/field.tsx";
 import { type Naming, stringNameWithOctave } from "#app/domain/music/note-names.ts";
 import type { TuningReading } from "#app/domain/music/tuning.ts";
@@ -107,14 +106,15 @@ function OctaveQuestion({
       const taken = stringNameWithOctave(midi, naming);
       const instead = stringNameWithOctave(other, naming);
       return (
-        <p
-          key={string}
-          className="flex flex-wrap items-center gap-x-3 border-grey-300 border-l-2 pl-3 text-sm"
-        >
-          <span>{`String ${string}: taken as ${taken}; ${instead} is as near to its usual pitch.`}</span>
-          <Button small look="plain" onClick={() => onRewrite(rewritten)}>
+        <p key={string} className="text-grey-600 text-sm">
+          {`String ${string} is taken as ${taken}; ${instead} is as near to usual. `}
+          <button
+            type="button"
+            onClick={() => onRewrite(rewritten)}
+            className="font-semibold text-ink underline underline-offset-4 noscript:hidden"
+          >
             {`Take ${instead}`}
-          </Button>
+          </button>
         </p>
       );
     }),

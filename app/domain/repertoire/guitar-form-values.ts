@@ -7,13 +7,15 @@ import { reachOf } from "#app/domain/repertoire/reach.ts";
 import { tuningText } from "#app/domain/repertoire/tuning-text.ts";
 
 /** What a new guitar's form begins with. */
-export const newGuitarValues = {
+export const newGuitarValues: GuitarFormInput = {
   name: "",
   shortName: "",
   badge: "round",
   kind: "acoustic",
   strings: "6",
-} as const satisfies GuitarFormInput;
+  below: ["6", "6", "6", "6", "6", "6"],
+  above: ["2", "2", "2", "2", "2", "2"],
+};
 
 /**
  * A guitar as its form shows it: what `guitarFormSchema` in the same naming reads back to the same guitar.

@@ -39,10 +39,10 @@ export function folded(text: string): string {
  */
 export function libraryRow(song: Song, choices: readonly UsualChoice[], naming: Naming): LibraryRow {
   const [first] = song.necks;
-  const usual = first ? usualFor(first.open, choices) : [];
-  const tunings = song.necks.flatMap(({ open }) => [
+  const usual = first ? usualFor(first.open, choices, first.guitars) : [];
+  const tunings = song.necks.flatMap(({ open, guitars }) => [
     compactTuning(open, naming, spellingFifths(song.key, open)),
-    nameTuning(open, usualFor(open, choices), naming) ?? "",
+    nameTuning(open, usualFor(open, choices, guitars), naming) ?? "",
   ]);
   const capos = song.necks.flatMap((neck) => neck.capos.map((capo) => `capo ${capo.fret}`));
   const words = [song.title, song.credit, song.firstLine, nameKey(song.key, naming), ...tunings, ...capos];

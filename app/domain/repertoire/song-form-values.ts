@@ -19,7 +19,7 @@ export function emptyWay(choices: readonly UsualChoice[]): WayInput {
 }
 
 function wayValues(neck: SongNeck, key: string, choices: readonly UsualChoice[], naming: Naming): WayInput {
-  const usual = usualFor(neck.open, choices);
+  const usual = usualFor(neck.open, choices, neck.guitars);
   const { text, bareB } = tuningText(neck.open, usual, naming, spellingFifths(key, neck.open));
   return {
     id: neck.id,

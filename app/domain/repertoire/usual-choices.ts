@@ -27,19 +27,28 @@ export function usualChoices(guitars: readonly Pick<Guitar, "id" | "name" | "usu
   return all.toSorted((one, other) => other.guitars.length - one.guitars.length);
 }
 
+/** Within half an octave either way a string is taken for retuned; beyond, for another kind of string. */
+const nearEnough = 6;
+
 /**
- * The usual tuning that a tuning is told against: of those with as many strings the nearest, the first of equals.
+ * The usual tuning that a tuning is told against, of those with as many strings: that of the guitars it is kept to;
+ * else the first (most guitars have it) from which no string is more than half an octave away; else the nearest.
  * Where no guitar of the act has as many strings, a guitar's with that many.
  * @throws RangeError where no choice fits and the tuning has not 4 to 12 strings
  * @example usualFor([38, 45, 50, 55, 57, 62], usualChoices([])) // [40, 45, 50, 55, 59, 64]
  */
-export function usualFor(open: readonly Midi[], choices: readonly UsualChoice[]): readonly Midi[] {
-  const distance = ({ usual }: UsualChoice) =>
-    usual.reduce((sum, midi, index) => sum + Math.abs(midi - open[index]!), 0);
-  const [nearest] = choices
-    .filter(({ usual }) => usual.length === open.length)
-    .toSorted((one, other) => distance(one) - distance(other));
-  return nearest?.usual ?? usualTuningFor("other", open.length);
+export function usualFor(
+  open: readonly Midi[],
+  choices: readonly UsualChoice[],
+  keptTo: readonly string[] | null = null,
+): readonly Midi[] {
+  const distances = ({ usual }: UsualChoice) => usual.map((midi, index) => Math.abs(midi - open[index]!));
+  const total = (choice: UsualChoice) => distances(choice).reduce((sum, distance) => sum + distance, 0);
+  const fitting = choices.filter(({ usual }) => usual.length === open.length);
+  const kept = fitting.find(({ guitars }) => guitars.some(({ id }) => keptTo?.includes(id)));
+  const near = fitting.find((choice) => Math.max(...distances(choice)) <= nearEnough);
+  const [nearest] = fitting.toSorted((one, other) => total(one) - total(other));
+  return (kept ?? near ?? nearest)?.usual ?? usualTuningFor("other", open.length);
 }
 
 /**

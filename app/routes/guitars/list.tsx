@@ -1,3 +1,4 @@
+import { BottomActions } from "#app/components/bottom-actions.tsx";
 import { CapoList } from "#app/components/guitars/capo-list.tsx";
 import { GuitarList } from "#app/components/guitars/guitar-list.tsx";
 import { ButtonLink } from "#app/components/ui/button.tsx";
@@ -38,9 +39,7 @@ async function noteOf(url: URL, member: { actId: string }): Promise<{ text: stri
 }
 
 function told(thing: { name: string; deleted: boolean }, restore: string): { text: string; undo?: string } {
-  return thing.deleted
-    ? { text: `${thing.name} deleted.`, undo: restore }
-    : { text: `${thing.name} is kept.` };
+  return thing.deleted ? { text: `${thing.name} deleted.`, undo: restore } : { text: `${thing.name} saved.` };
 }
 
 export default function Guitars({ loaderData }: Route.ComponentProps) {
@@ -49,12 +48,17 @@ export default function Guitars({ loaderData }: Route.ComponentProps) {
     <>
       {note ? <UndoBar undo={mayEdit ? note.undo : undefined}>{note.text}</UndoBar> : null}
       <PageHead title="Guitars">
-        {mayEdit ? (
-          <ButtonLink to="/guitars/new" look="primary">
-            Add guitar
-          </ButtonLink>
+        {mayEdit && guitars.length > 0 ? (
+          <span className="hidden md:flex">
+            <AddGuitar />
+          </span>
         ) : null}
       </PageHead>
+      {mayEdit && guitars.length > 0 ? (
+        <BottomActions>
+          <AddGuitar />
+        </BottomActions>
+      ) : null}
       {guitars.length > 0 ? (
         <GuitarList guitars={guitars} naming={naming} />
       ) : (
@@ -64,6 +68,7 @@ export default function Guitars({ loaderData }: Route.ComponentProps) {
               ? "Add the guitars you bring, with their usual tunings and how far each string may be tuned. Other stringed instruments work the same way."
               : "When somebody adds the act's guitars, they stand here."}
           </p>
+          {mayEdit ? <AddGuitar /> : null}
         </EmptyState>
       )}
       <section aria-labelledby="capos-title" className="mt-8">
@@ -82,5 +87,13 @@ export default function Guitars({ loaderData }: Route.ComponentProps) {
         )}
       </section>
     </>
+  );
+}
+
+function AddGuitar() {
+  return (
+    <ButtonLink to="/guitars/new" look="primary">
+      Add guitar
+    </ButtonLink>
   );
 }

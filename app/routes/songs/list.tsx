@@ -1,5 +1,6 @@
 import { useDeferredValue, useMemo, useState } from "react";
 import { Form, href } from "react-router";
+import { BottomActions } from "#app/components/bottom-actions.tsx";
 import { LibraryList } from "#app/components/songs/library-list.tsx";
 import { Button, ButtonLink } from "#app/components/ui/button.tsx";
 import { EmptyState, PageHead } from "#app/components/ui/page.tsx";
@@ -80,14 +81,16 @@ export default function Songs({ loaderData }: Route.ComponentProps) {
       {note ? <UndoBar undo={mayEdit ? note.undo : undefined}>{note.text}</UndoBar> : null}
       <PageHead title="Songs" sub={rows.length > 0 ? counted(rows.length, shown.length) : undefined}>
         {mayEdit && rows.length > 0 ? (
-          <>
-            <ButtonLink to="/songs/paste">Paste a list</ButtonLink>
-            <ButtonLink to="/songs/new" look="primary">
-              Add song
-            </ButtonLink>
-          </>
+          <span className="hidden gap-2 md:flex">
+            <Actions />
+          </span>
         ) : null}
       </PageHead>
+      {mayEdit && rows.length > 0 ? (
+        <BottomActions>
+          <Actions />
+        </BottomActions>
+      ) : null}
       {rows.length === 0 ? (
         <NoSongs mayEdit={mayEdit} />
       ) : (
@@ -104,7 +107,7 @@ export default function Songs({ loaderData }: Route.ComponentProps) {
               value={query}
               onChange={(event) => search(event.target.value)}
               placeholder="Title, credit, first line, tuning or key"
-              className="min-h-11 w-full max-w-md rounded-sm border border-grey-400 bg-white px-3"
+              className="min-h-11 w-full max-w-md rounded-sm border border-grey-400 bg-white px-3 [&::-webkit-search-cancel-button]:grayscale"
             />
             {sort !== "title" ? <input type="hidden" name="sort" value={sort} /> : null}
             {descending ? <input type="hidden" name="dir" value="down" /> : null}
@@ -129,6 +132,17 @@ export default function Songs({ loaderData }: Route.ComponentProps) {
           )}
         </>
       )}
+    </>
+  );
+}
+
+function Actions() {
+  return (
+    <>
+      <ButtonLink to="/songs/paste">Paste a list</ButtonLink>
+      <ButtonLink to="/songs/new" look="primary">
+        Add song
+      </ButtonLink>
     </>
   );
 }
