@@ -1,7 +1,7 @@
 import type { ReactNode } from "react";
-import { isRouteErrorResponse, Links, Meta, Outlet, Scripts, ScrollRestoration } from "react-router";
+import { Links, Meta, Outlet, Scripts, ScrollRestoration } from "react-router";
 import "./app.css";
-import { ButtonLink } from "#app/components/ui/button.tsx";
+import { ErrorPage } from "#app/components/error-page.tsx";
 import { useNonce } from "#app/components/nonce.tsx";
 import { csrfMiddleware } from "#app/services/csrf.server.ts";
 import { memberMiddleware } from "#app/services/member-middleware.server.ts";
@@ -16,7 +16,9 @@ export function loader() {
 
 export const meta: Route.MetaFunction = () => [{ title: "Stillpeg" }];
 
-export const links: Route.LinksFunction = () => [{ rel: "icon", href: "/favicon.svg", type: "image/svg+xml" }];
+export const links: Route.LinksFunction = () => [
+  { rel: "icon", href: "/favicon.svg", type: "image/svg+xml" },
+];
 
 export function Layout({ children }: { children: ReactNode }) {
   const nonce = useNonce();
@@ -42,23 +44,6 @@ export default function App() {
   return <Outlet />;
 }
 
-/** What a person sees where a page cannot be shown: what happened and where to go. Never a stack trace. */
 export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
-  const known = isRouteErrorResponse(error);
-  const message =
-    known && typeof error.data === "object" && error.data && "message" in error.data
-      ? String(error.data.message)
-      : known && error.status === 404
-        ? "There is nothing at this address."
-        : "Something went wrong on our side, and it has been written to the log. Nothing you saved is lost. Try again in a moment.";
-  const title = known && error.status === 404 ? "Not here" : known && error.status === 403 ? "Not yours to change" : "This did not work";
-  return (
-    <main className="mx-auto flex max-w-xl flex-col items-start gap-4 px-6 py-20">
-      <h1 className="font-bold text-4xl">{title}</h1>
-      <p>{message}</p>
-      <ButtonLink to="/" look="primary">
-        Go to your gigs
-      </ButtonLink>
-    </main>
-  );
+  return <ErrorPage error={error} />;
 }
