@@ -38,7 +38,7 @@ export function GigTimesFields({ form, times, crew }: GigTimesFieldsProps) {
             <legend className="pb-1 font-semibold text-base">{title}</legend>
             {keys.map((key) => (
               <Seconds
-                key={fields[key].key}
+                key={`${key} ${fields[key].key}`}
                 label={timeNames[key]}
                 usual={defaultTimes[crew][key]}
                 field={fields[key]}
