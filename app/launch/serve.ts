@@ -12,6 +12,7 @@ import { log } from "#app/services/log.server.ts";
 import { nonceContext } from "#app/services/nonce.server.ts";
 import { closePasswordPool } from "#app/services/password.server.ts";
 import { closePlannerPool } from "#app/services/planner-pool.server.ts";
+import { closeSheetPool } from "#app/services/stage-sheet.server.ts";
 import { nonceOf, securityHeaders } from "./security.ts";
 
 const finishMilliseconds = 1_500;
@@ -86,7 +87,7 @@ function serve(): void {
     await closed;
     clearTimeout(cut);
     setTimeout(() => process.exit(0), closeMilliseconds);
-    await Promise.allSettled([closePlannerPool(), closePasswordPool(), closeDb()]);
+    await Promise.allSettled([closePlannerPool(), closePasswordPool(), closeSheetPool(), closeDb()]);
     process.exit(0);
   }
 

@@ -1,34 +1,13 @@
 import { createHmac } from "node:crypto";
-import { Piscina } from "piscina";
 import { getEnv } from "#app/services/env.server.ts";
+import { workerPool } from "#app/services/worker-pool.server.ts";
 import type { PasswordJob } from "#app/workers/password.node.ts";
 
-let pool: Piscina | null = null;
-
-/** Run from its source while developing and testing, from beside the server once built. */
-function openPool(): Piscina {
-  const fromSource = import.meta.url.endsWith(".ts");
-  return new Piscina({
-    filename: new URL(fromSource ? "../workers/password.node.ts" : "./password.node.js", import.meta.url)
-      .href,
-    execArgv: fromSource ? ["--import", "tsx"] : [],
-    minThreads: 0,
-    maxThreads: 2,
-    idleTimeout: 30_000,
-    maxQueue: 200,
-  });
-}
-
 /** A password off the main thread, so that a page does not wait for somebody else's sign-in. */
-function run(job: PasswordJob): Promise<string | boolean> {
-  pool ??= openPool();
-  return pool.run(job);
-}
+const pool = workerPool<PasswordJob, string | boolean>("password", () => ({ maxThreads: 2, maxQueue: 200 }));
 
-export async function closePasswordPool(): Promise<void> {
-  const open = pool;
-  pool = null;
-  await open?.destroy();
+export function closePasswordPool(): Promise<void> {
+  return pool.close();
 }
 
 /**
@@ -40,7 +19,7 @@ function secretOf(password: string): string {
 }
 
 export async function hashPassword(password: string): Promise<string> {
-  return String(await run({ secret: secretOf(password), cost: getEnv().PASSWORD_COST }));
+  return String(await pool.run({ secret: secretOf(password), cost: getEnv().PASSWORD_COST }));
 }
 
 let nobodys: Promise<string> | null = null;
@@ -57,6 +36,6 @@ function nobodysHash(): Promise<string> {
 /** Whether a password is right. Without a hash it takes as long and says no: the time tells nobody who has an account. */
 export async function isPassword(password: string, hash: string | null): Promise<boolean> {
   const spare = await nobodysHash();
-  const same = await run({ secret: secretOf(password), hash: hash ?? spare });
+  const same = await pool.run({ secret: secretOf(password), hash: hash ?? spare });
   return hash !== null && same === true;
 }

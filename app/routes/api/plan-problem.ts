@@ -18,7 +18,7 @@ export async function loader({ params, context, url }: Route.LoaderArgs) {
     const message = `This gig has no set ${asked}. Its sets are numbered 1 to ${sets.length}.`;
     return Response.json({ message }, { status: 404 });
   }
-  const { problem } = setProblem(gig, set.id, await loadRepertoire(getDb(), member), { pinnedOnly: true });
+  const { problem } = setProblem(gig, set.id, await loadRepertoire(getDb(), member));
   return Response.json(problem);
 }
 

@@ -2,8 +2,9 @@ import { type BadProblem, bad } from "#app/domain/planning/bad-problem.ts";
 import { parseProblem } from "#app/domain/planning/problem.ts";
 import { methodNotAllowed } from "#app/services/api-replies.server.ts";
 import { requireApiMember } from "#app/services/member.server.ts";
-import { QueueFull, solveInPool } from "#app/services/planner-pool.server.ts";
+import { solveInPool } from "#app/services/planner-pool.server.ts";
 import { readJsonBody } from "#app/services/request-body.server.ts";
+import { QueueFull } from "#app/services/worker-pool.server.ts";
 import type { Route } from "./+types/plan";
 
 /** What the search may do where the request does not say: enough for a set of an evening. */
