@@ -28,7 +28,8 @@ module.exports = {
     ...oneWay,
     {
       name: "domain-is-pure",
-      comment: "The domain imports tonal, zod and fractional-indexing alone: no I/O, clock, randomness or React.",
+      comment:
+        "The domain imports tonal, zod and fractional-indexing alone: no I/O, clock, randomness or React.",
       severity: "error",
       from: { path: "^app/domain/" },
       to: {
@@ -62,6 +63,9 @@ module.exports = {
     doNotFollow: { path: "node_modules" },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: "tsconfig.json" },
-    enhancedResolveOptions: { extensions: [".ts", ".tsx", ".mjs", ".js", ".json"], conditionNames: ["import", "node", "default"] },
+    enhancedResolveOptions: {
+      extensions: [".ts", ".tsx", ".mjs", ".js", ".json"],
+      conditionNames: ["import", "node", "default"],
+    },
   },
 };

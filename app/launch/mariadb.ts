@@ -81,18 +81,31 @@ async function prepare(folder: string, programs: MariaDbPrograms): Promise<Remem
   remember(folder, made);
   const unfinished = `${folder}/data.new`;
   rmSync(unfinished, { recursive: true, force: true });
-  const { code, output } = await run(programs.install, [
+  const args = [
     "--no-defaults",
     ...asRoot(),
     `--datadir=${unfinished}`,
     "--auth-root-authentication-method=normal",
     "--skip-test-db",
     "--skip-name-resolve",
-  ]);
-  if (code !== 0)
-    throw new PlainError(`MariaDB could not make its data folder ${folder}/data: ${lastLine(output)}`);
+  ];
+  const env = { ...process.env, TMPDIR: temporary(folder) };
+  const { code, output } = await run(programs.install, args, { env });
+  if (code !== 0) {
+    throw new PlainError(`MariaDB could not make its data folder ${folder}/data: ${firstError(output)}`);
+  }
   renameSync(unfinished, `${folder}/data`);
   return made;
+}
+
+/**
+ * A server that starts clears its folder for temporary tables. In a shared one, such as /tmp, it would take away those
+ * of a server that is at work.
+ */
+function temporary(folder: string): string {
+  const own = `${folder}/tmp`;
+  mkdirSync(own, { recursive: true, mode: 0o700 });
+  return own;
 }
 
 /** As root, MariaDB must be told to stay root; as anybody else it must not. */
@@ -118,6 +131,7 @@ async function launch(
       `--datadir=${folder}/data`,
       "--bind-address=127.0.0.1",
       `--port=${known.port}`,
+      `--tmpdir=${temporary(folder)}`,
       `--socket=${socket.path}`,
       `--pid-file=${folder}/server.pid`,
       `--init-file=${first}`,
@@ -146,13 +160,16 @@ async function launch(
   while (!(await answers(urlOf("stillpeg")))) {
     if (over || Date.now() > deadline) {
       child.kill("SIGKILL");
-      throw new PlainError(`MariaDB did not start: ${lastError(log)} (all it said is in ${log})`);
+      throw new PlainError(
+        `MariaDB did not start: ${firstError(readFileSync(log, "utf8"))} (all it said is in ${log})`,
+      );
     }
     await pause(40);
   }
   rmSync(first);
   const mark = markOf(child.pid!);
-  if (!mark) throw new PlainError(`MariaDB ended as soon as it had started: ${lastError(log)}`);
+  if (!mark)
+    throw new PlainError(`MariaDB ended as soon as it had started: ${firstError(readFileSync(log, "utf8"))}`);
   return { url: urlOf("stillpeg"), urlOf, mark, ended, stop: () => endProcess(mark, stopMilliseconds) };
 }
 
@@ -218,14 +235,7 @@ function remember(folder: string, known: Remembered): void {
   renameSync(`${file}.new`, file);
 }
 
-function lastError(log: string): string {
-  const lines = readFileSync(log, "utf8").split("\n");
-  const wrong = lines
-    .filter((line) => line.includes("[ERROR]"))
-    .map((line) => line.replace(/^.*\[ERROR\]\s*/, ""));
-  return wrong.find((line) => !line.startsWith("Aborting")) ?? "it said nothing";
-}
-
-function lastLine(output: string): string {
-  return output.trim().split("\n").at(-1) ?? "";
+function firstError(output: string): string {
+  const wrong = output.split("\n").filter((line) => /\bERROR\b/.test(line) && !line.includes("Aborting"));
+  return wrong[0]?.replace(/^.*\[ERROR\]\s*/, "") ?? "it said nothing of use";
 }
