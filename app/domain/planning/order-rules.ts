@@ -172,12 +172,32 @@ function placeFixed(draft: Draft, at: [number, number][]): void {
   }
 }
 
+/** Positions that a fixed song holds are no others', so windows that begin or end there shrink. */
+function stepOverFixed(draft: Draft): boolean {
+  const { earliest, latest } = draft;
+  const holder = new Map<number, number>();
+  for (const [song, first] of earliest.entries()) if (first === latest[song]) holder.set(first, song);
+  const taken = (position: number, song: number) => holder.has(position) && holder.get(position) !== song;
+  let changed = false;
+  for (let song = 0; song < earliest.length; song += 1) {
+    while (earliest[song]! < latest[song]! && taken(earliest[song]!, song)) {
+      earliest[song]! += 1;
+      changed = true;
+    }
+    while (latest[song]! > earliest[song]! && taken(latest[song]!, song)) {
+      latest[song]! -= 1;
+      changed = true;
+    }
+  }
+  return changed;
+}
+
 /** Positions narrowed by neighbours in a chain and by how many songs must come before and after. */
 function propagateWindows(draft: Draft): void {
   const { earliest, latest, next, predecessors, after } = draft;
   const count = after.length;
   for (let changed = true; changed; ) {
-    changed = false;
+    changed = stepOverFixed(draft);
     for (let song = 0; song < count; song += 1) {
       const before = predecessors[song]!;
       const soonest = Math.max(before.length, ...before.map((other) => earliest[other]! + 1));

@@ -1,5 +1,6 @@
 import type { Answer, FoundAnswer } from "#app/domain/planning/answer.ts";
 import { answerOf, type NumberedPlan } from "#app/domain/planning/answer-of.ts";
+import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { modelOf } from "#app/domain/planning/model.ts";
 import { compileRules } from "#app/domain/planning/order-rules.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
@@ -33,7 +34,7 @@ export function* search(
   const small = model.songs <= SMALL_SET || (problem.maxMoved === 0 && !model.tech);
   const effort = small ? Math.max(asked, UNLIMITED) : asked;
 
-  const space = setSpace(model, compiled.rules, () => () => 0);
+  const space = setSpace(model, compiled.rules, (layout) => partitionBound(model, compiled.rules, layout));
   const room = Math.floor(STATE_MEMORY / (60 + 6 * space.width));
   let best: NumberedPlan | null = null;
   let answer: FoundAnswer | null = null;
