@@ -1,5 +1,5 @@
 import { memo } from "react";
-import { usePointAt } from "#app/components/gig/gap-focus.tsx";
+import { useIsPointed, usePointer } from "#app/components/gig/gap-focus.tsx";
 import { GapStrokes } from "#app/components/gig/gap-strokes.tsx";
 import { GapTokens } from "#app/components/gig/gap-tokens.tsx";
 import { usePageTools } from "#app/components/gig/page-context.tsx";
@@ -15,22 +15,18 @@ const longDeadAir = 20;
  */
 export const GapRow = memo(function GapRow({ row, gap }: { row: Row; gap: Gap }) {
   const { naming } = usePageTools();
-  const { show, hide } = usePointAt();
   const sentence = gapSentence(row, naming);
   const tokens = gapTokens(row, naming);
   const exposed = Math.round(gap.exposed);
-  const point = (anchor: Element) => show({ entryId: row.entry.id, sentence, anchor });
+  const pointer = usePointer(row.entry.id, sentence);
+  const pointed = useIsPointed(row.entry.id);
   return (
     <button
       type="button"
       data-gap={row.entry.id}
       aria-label={`Before ${row.song?.title ?? "the next song"}: ${sentence}`}
-      className={`flex h-8 w-full cursor-default items-center gap-2 pr-3 pl-3 text-left font-display text-base hover:bg-grey-100 lg:h-6 lg:pr-[44px] lg:pl-[66px] ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
-      onPointerEnter={(event) => (event.pointerType === "mouse" ? point(event.currentTarget) : null)}
-      onPointerLeave={() => hide(row.entry.id)}
-      onFocus={(event) => point(event.currentTarget)}
-      onBlur={() => hide(row.entry.id)}
-      onClick={(event) => point(event.currentTarget)}
+      className={`flex h-8 w-full cursor-default items-center gap-2 pr-3 pl-3 text-left font-display text-base lg:h-6 lg:pr-[44px] lg:pl-[66px] ${pointed ? "bg-grey-100" : ""} ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
+      {...pointer}
     >
       <GapStrokes row={row} gap={gap} />
       <GapTokens tokens={tokens} />

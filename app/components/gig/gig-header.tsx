@@ -24,75 +24,79 @@ type GigHeaderProps = {
   onSuggestions: () => void;
 };
 
-/** Name, what the order costs, undo, and the sheets. Stays in view while the sets scroll under it. */
+/**
+ * Name, what the order costs, undo, and the sheets. On a laptop all of it stays in view while the sets scroll under it;
+ * on a phone the figures do.
+ */
 export function GigHeader(props: GigHeaderProps) {
   const { gig, plan, before, warnings, paper, save, history, onDetails, onSuggestions } = props;
-  const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
+  const { clock } = plan;
   return (
-    <>
-      <div className="on-ebony flex items-center gap-3 bg-ebony px-4 pt-1 pb-3 text-white lg:hidden">
-        <Name gig={gig} songs={songs} onDetails={onDetails} />
-        {history ? <HistoryButtons {...history} small /> : null}
+    <div className="contents lg:sticky lg:top-0 lg:z-20 lg:flex lg:flex-wrap lg:items-center lg:gap-x-7 lg:gap-y-2 lg:border-grey-200 lg:border-b lg:bg-ground lg:px-6 lg:py-2 min-[1360px]:flex-nowrap">
+      <div className="max-lg:on-ebony flex items-start gap-1 bg-ebony px-4 pt-1 pb-3 text-white lg:w-full lg:min-w-0 lg:bg-transparent lg:p-0 lg:text-ink min-[1360px]:w-auto min-[1360px]:flex-1">
+        <Name gig={gig} save={history ? save : null} />
+        <div className="flex text-current lg:hidden">
+          {history ? <HistoryButtons {...history} small /> : null}
+        </div>
+        {onDetails ? <DetailsButton onDetails={onDetails} /> : null}
       </div>
-      <header className="sticky top-0 z-20 flex flex-wrap items-center gap-x-8 gap-y-2 border-grey-200 border-b bg-ground px-4 py-2 lg:px-6 lg:py-2.5">
-        <div className="hidden min-w-48 max-w-[24rem] lg:block">
-          <Name gig={gig} songs={songs} onDetails={onDetails} />
-        </div>
-        <div className="min-w-0 flex-1 lg:flex-none">
-          <TotalsBar
-            totals={plan.totals}
-            clock={{
-              seconds: plan.clock.seconds,
-              slot: gig.slot,
-              over: plan.clock.overSlot > 0 || plan.clock.overCurfew > 0,
-            }}
-            before={before}
-          />
-        </div>
-        <div className="hidden flex-1 items-center justify-end gap-3 lg:flex">
-          {history ? (
-            <>
-              <SaveState status={save.status} pending={save.pending} />
-              <HistoryButtons {...history} />
-            </>
-          ) : null}
-          <Button className="min-[1360px]:hidden" onClick={onSuggestions}>
-            Less retuning
-          </Button>
-          <SheetsMenu gigId={gig.id} paper={paper} pending={save.pending} />
-        </div>
-        {warnings.length > 0 ? (
-          <div className="flex w-full flex-wrap gap-x-6 gap-y-1">
-            {warnings.map((words) => (
-              <Warning key={words}>{words}</Warning>
-            ))}
-          </div>
+      <div className="sticky top-0 z-20 border-grey-200 border-b bg-ground px-4 py-2 lg:static lg:border-0 lg:p-0">
+        <TotalsBar
+          totals={plan.totals}
+          clock={{ seconds: clock.seconds, slot: gig.slot, over: clock.overSlot > 0 || clock.overCurfew > 0 }}
+          before={before}
+        />
+      </div>
+      <div className="hidden items-center justify-end gap-2 lg:ml-auto lg:flex">
+        {history ? (
+          <>
+            <SaveState {...save} />
+            <HistoryButtons {...history} />
+          </>
         ) : null}
-      </header>
-    </>
+        <Button className="mr-1 min-[1360px]:hidden" onClick={onSuggestions}>
+          Less retuning
+        </Button>
+        <SheetsMenu gigId={gig.id} paper={paper} pending={save.pending} />
+      </div>
+      {warnings.length > 0 ? (
+        <div className="flex flex-col gap-1 px-4 py-2 lg:w-full lg:flex-row lg:flex-wrap lg:gap-x-6 lg:p-0">
+          {warnings.map((words) => (
+            <Warning key={words}>{words}</Warning>
+          ))}
+        </div>
+      ) : null}
+    </div>
   );
 }
 
-function Name({ gig, songs, onDetails }: { gig: Gig; songs: number[]; onDetails: (() => void) | null }) {
+function Name({ gig, save }: { gig: Gig; save: GigHeaderProps["save"] | null }) {
+  const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
   return (
-    <div className="flex min-w-0 flex-1 items-start gap-2">
-      <div className="min-w-0 flex-1">
-        <h1 className="truncate font-semibold text-2xl leading-tight lg:text-[28px]" title={gig.name}>
-          {gig.name}
-        </h1>
-        <p className="text-grey-300 text-sm leading-tight lg:text-grey-600">{subLine(gig, songs)}</p>
-      </div>
-      {onDetails ? (
-        <button
-          type="button"
-          aria-label="Gig details"
-          title="Name, date, slot, curfew, tech and times"
-          onClick={onDetails}
-          className={`${buttonClass("quiet", true)} size-11 shrink-0 px-0 text-current hover:bg-transparent lg:size-8 lg:min-h-8 lg:hover:bg-grey-100`}
-        >
-          <Settings2 size={18} aria-hidden="true" />
-        </button>
+    <div className="min-w-0 flex-1">
+      <h1 className="truncate font-semibold text-2xl leading-tight lg:text-[28px]" title={gig.name}>
+        {gig.name}
+      </h1>
+      <p className="text-grey-300 text-sm leading-tight lg:text-grey-600">{subLine(gig, songs)}</p>
+      {save ? (
+        <p className="pt-0.5 text-grey-300 text-sm lg:hidden">
+          <SaveState {...save} />
+        </p>
       ) : null}
     </div>
+  );
+}
+
+function DetailsButton({ onDetails }: { onDetails: () => void }) {
+  return (
+    <button
+      type="button"
+      aria-label="Gig details"
+      title="Name, date, slot, curfew, tech and times"
+      onClick={onDetails}
+      className={`${buttonClass("quiet", true)} size-11 shrink-0 px-0 text-current hover:bg-transparent lg:size-9 lg:hover:bg-grey-100`}
+    >
+      <Settings2 size={18} aria-hidden="true" />
+    </button>
   );
 }

@@ -1,4 +1,4 @@
-import { usePointAt } from "#app/components/gig/gap-focus.tsx";
+import { usePointer } from "#app/components/gig/gap-focus.tsx";
 import { Octagon, Warning } from "#app/components/ui/warning.tsx";
 import type { RowWarning } from "#app/domain/gig/warnings.ts";
 
@@ -11,21 +11,15 @@ const short: Record<RowWarning["code"], string> = {
 
 /** Things worth a second look, in a word beside the title; the whole sentence on hover, focus or tap. */
 export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: readonly RowWarning[] }) {
-  const { show, hide } = usePointAt();
-  if (warnings.length === 0) return null;
   const sentence = warnings.map((warning) => warning.message).join(" ");
-  const key = `${entryId}/warnings`;
-  const point = (anchor: Element) => show({ entryId: key, sentence, anchor });
+  const pointer = usePointer(`${entryId}/warnings`, sentence);
+  if (warnings.length === 0) return null;
   return (
     <button
       type="button"
       aria-label={sentence}
       className="inline-flex min-h-6 min-w-6 shrink-0 items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
-      onPointerEnter={(event) => (event.pointerType === "mouse" ? point(event.currentTarget) : null)}
-      onPointerLeave={() => hide(key)}
-      onFocus={(event) => point(event.currentTarget)}
-      onBlur={() => hide(key)}
-      onClick={(event) => point(event.currentTarget)}
+      {...pointer}
     >
       <Octagon size={13} />
       <span aria-hidden="true">{warnings.map((warning) => short[warning.code]).join(", ")}</span>

@@ -13,7 +13,7 @@ type TotalsBarProps = {
 export const TotalsBar = memo(function TotalsBar({ totals, clock, before }: TotalsBarProps) {
   const against = (key: keyof Totals) => (before ? totals[key] - before[key] : null);
   return (
-    <dl className="grid grid-cols-6 gap-x-2 lg:flex lg:gap-x-7">
+    <dl className="grid grid-cols-6 gap-x-2 lg:flex lg:gap-x-6">
       <Figure value={totals.exposed} unit="s" change={against("exposed")} label="dead air" strong />
       <Figure
         value={totals.longestGap}
@@ -58,7 +58,7 @@ function signed(change: number): string {
 function Figure({ value, unit, change, label, short, strong, alarm }: FigureProps) {
   return (
     <div className="flex min-w-0 flex-col-reverse justify-end">
-      <dt className="truncate font-display font-medium text-grey-600 text-sm lg:text-base lg:leading-tight">
+      <dt className="truncate font-display font-medium text-grey-600 text-sm lg:text-[15px] lg:leading-tight">
         {short ? (
           <>
             <span className="lg:hidden">{short}</span>
