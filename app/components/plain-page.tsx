@@ -14,13 +14,12 @@ export function PlainPage({
 }) {
   return (
     <div className="mx-auto flex min-h-dvh max-w-md flex-col gap-8 px-4 py-6 sm:py-12">
-      <Link
-        to="/"
-        className="inline-flex min-h-11 items-center gap-2.5 self-start font-bold font-display text-2xl"
-      >
-        <Mark size={32} />
-        Stillpeg
-      </Link>
+      <header>
+        <Link to="/" className="inline-flex min-h-11 items-center gap-2.5 font-bold font-display text-2xl">
+          <Mark size={32} />
+          Stillpeg
+        </Link>
+      </header>
       <main className="flex flex-col gap-6">
         <div>
           <h1 className="font-bold text-3xl leading-tight">{title}</h1>

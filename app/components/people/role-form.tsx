@@ -1,4 +1,4 @@
-import { useEffect, useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { useFetcher } from "react-router";
 import { Button } from "#app/components/ui/button.tsx";
 import { FormErrors } from "#app/components/ui/form-errors.tsx";
@@ -15,18 +15,26 @@ type RoleFormProps = {
 export function RoleForm({ person, refused }: RoleFormProps) {
   const fetcher = useFetcher<{ refused: string } | null>();
   const [chosen, setChosen] = useState(person.role);
+  const [before] = useState(person.role);
+  const select = useRef<HTMLSelectElement>(null);
   const [scripted, setScripted] = useState(false);
   useEffect(() => setScripted(true), []);
   useEffect(() => setChosen(person.role), [person.role]);
   const wrong = fetcher.data?.refused ?? refused;
   const id = `role-${person.personId}`;
   return (
-    <fetcher.Form method="post" action={`/people/${person.personId}/role`} className="flex flex-col gap-1">
+    <fetcher.Form
+      method="post"
+      action={`/people/${person.personId}/role`}
+      onSubmit={() => select.current?.focus()}
+      className="flex flex-col gap-1"
+    >
       <div className="flex items-center gap-2">
         <label htmlFor={id} className="sr-only">
           Role of {person.displayName}
         </label>
         <select
+          ref={select}
           id={id}
           name="role"
           value={chosen}
@@ -46,6 +54,11 @@ export function RoleForm({ person, refused }: RoleFormProps) {
           </Button>
         ) : null}
       </div>
+      <p role="status" className="sr-only">
+        {person.role === before
+          ? ""
+          : `${person.displayName} is now ${roleWords[person.role].label.toLowerCase()}`}
+      </p>
       <FormErrors id={`${id}-error`} errors={wrong ? [wrong] : undefined} />
     </fetcher.Form>
   );
