@@ -77,7 +77,7 @@ function Way({ neck, index, song, guitars, naming }: WayProps) {
         only={neck.guitars}
         guitars={guitars}
         naming={naming}
-        fifths={fifths}
+        songKey={song.key}
         caption={`${choiceName(index)}, string by string`}
       />
       {only.length > 0 ? (

@@ -7,10 +7,10 @@ import { choiceName, instrumentLabel } from "#app/components/songs/way-words.ts"
 import { TuningField } from "#app/components/tuning/tuning-field.tsx";
 import { SelectField, TextField } from "#app/components/ui/field.tsx";
 import { caposWords } from "#app/domain/music/capo.ts";
-import { readKey, spellingFifths } from "#app/domain/music/key.ts";
+import { readKey } from "#app/domain/music/key.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import { readCapos } from "#app/domain/music/read-capos.ts";
-import { readTuning, type TuningReading } from "#app/domain/music/tuning.ts";
+import { readTuning } from "#app/domain/music/tuning.ts";
 import { nameTuning } from "#app/domain/music/tuning-names.ts";
 import type { FormGuitar } from "#app/domain/repertoire/form-guitar.ts";
 import { type SongFormInput, songLimits } from "#app/domain/repertoire/song-form.ts";
@@ -116,7 +116,7 @@ export function WayFields({
               only={only.length > 0 ? only : null}
               guitars={guitars}
               naming={naming}
-              fifths={signature(typedKey, naming, reading)}
+              songKey={keptKey(typedKey, naming)}
               caption={`${name}, string by string`}
             />
           ) : (
@@ -136,9 +136,9 @@ export function WayFields({
   );
 }
 
-function signature(typedKey: string, naming: Naming, reading: Extract<TuningReading, { ok: true }>): number {
-  const key = readKey(typedKey, naming);
-  return spellingFifths(key.ok ? key.key : "", reading.open);
+function keptKey(typed: string, naming: Naming): string {
+  const reading = readKey(typed, naming);
+  return reading.ok ? reading.key : "";
 }
 
 type InstrumentProps = {

@@ -2,7 +2,8 @@ import { stringRange } from "#app/components/capo-mark.tsx";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
 import { NeckTable } from "#app/components/tuning/neck-table.tsx";
 import { Octagon, Warning } from "#app/components/ui/warning.tsx";
-import { capoWords, shadowedCapos } from "#app/domain/music/capo.ts";
+import { capoWords, shadowedCapos, sounding } from "#app/domain/music/capo.ts";
+import { spellingFifths } from "#app/domain/music/key.ts";
 import type { Capo } from "#app/domain/music/neck.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import { raisedStrings } from "#app/domain/music/range.ts";
@@ -16,12 +17,13 @@ type WayReadingProps = {
   only: string[] | null;
   guitars: readonly FormGuitar[];
   naming: Naming;
-  fifths: number;
+  /** The song's key, "" where unknown: what sounds is spelled in it. */
+  songKey: string;
   caption: string;
 };
 
 /** What one way to play a song comes to: the neck string by string, its warnings, and the guitars it can be had on. */
-export function WayReading({ strings, capos, only, guitars, naming, fifths, caption }: WayReadingProps) {
+export function WayReading({ strings, capos, only, guitars, naming, songKey, caption }: WayReadingProps) {
   const way = {
     open: strings.map(({ midi }) => midi),
     capos: [...capos],
@@ -31,7 +33,13 @@ export function WayReading({ strings, capos, only, guitars, naming, fifths, capt
   return (
     <div className="flex flex-col gap-4">
       <div className="overflow-x-auto">
-        <NeckTable strings={strings} capos={capos} naming={naming} fifths={fifths} caption={caption} />
+        <NeckTable
+          strings={strings}
+          capos={capos}
+          naming={naming}
+          fifths={spellingFifths(songKey, sounding(way))}
+          caption={caption}
+        />
       </div>
       {useless.map(({ capo }) => (
         <Warning key={capoWords(capo, strings.length)}>

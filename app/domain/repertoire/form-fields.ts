@@ -47,3 +47,11 @@ export function tick() {
 
 /** Which of the two notes a bare B was meant to be, where a person was asked. */
 export const bareBAnswer = z.enum(["natural", "flat"]).optional();
+
+/**
+ * The version that a form was read at, as it comes back with the form; 0, which nothing has, for what is no version.
+ * @example readVersion("3") // 3
+ */
+export function readVersion(sent: unknown): number {
+  return typeof sent === "string" && /^\d{1,9}$/.test(sent) ? Number(sent) : 0;
+}

@@ -7,6 +7,7 @@ import { PageHead } from "#app/components/ui/page.tsx";
 import { can } from "#app/domain/permissions.ts";
 import { capoFormSchema } from "#app/domain/repertoire/capo-form.ts";
 import { differences } from "#app/domain/repertoire/form-differences.ts";
+import { readVersion } from "#app/domain/repertoire/form-fields.ts";
 import { capoFieldLabels, capoFormValues } from "#app/domain/repertoire/guitar-form-values.ts";
 import { findCapo, updateCapo } from "#app/models/capos.server.ts";
 import { listGuitars } from "#app/models/guitars.server.ts";
@@ -36,7 +37,7 @@ export async function action({ request, params, context, url }: Route.ActionArgs
     const status = submission.status === "error" ? 400 : 200;
     return data({ result: submission.reply(), conflict: null }, { status });
   }
-  const version = Number(form.get("version"));
+  const version = readVersion(form.get("version"));
   const fields = submission.value;
   const saved = await updateCapo(getDb(), member, params.capoId, version, fields, form.has("restore"));
   if (saved.outcome === "gone") notFound("capo");

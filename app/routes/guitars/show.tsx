@@ -8,6 +8,7 @@ import { PageHead } from "#app/components/ui/page.tsx";
 import { UndoBar } from "#app/components/undo-bar.tsx";
 import { can } from "#app/domain/permissions.ts";
 import { differences } from "#app/domain/repertoire/form-differences.ts";
+import { readVersion } from "#app/domain/repertoire/form-fields.ts";
 import { guitarFormSchema } from "#app/domain/repertoire/guitar-form.ts";
 import {
   comparableGuitar,
@@ -47,7 +48,7 @@ export async function action({ request, params, context, url }: Route.ActionArgs
     const status = submission.status === "error" ? 400 : 200;
     return data({ result: submission.reply(), conflict: null }, { status });
   }
-  const version = Number(form.get("version"));
+  const version = readVersion(form.get("version"));
   const fields = submission.value;
   const saved = await transact(getDb(), (trx) =>
     updateGuitar(trx, member, guitar.id, version, fields, form.has("restore")),

@@ -8,6 +8,7 @@ import { PageHead } from "#app/components/ui/page.tsx";
 import { UndoBar } from "#app/components/undo-bar.tsx";
 import { can } from "#app/domain/permissions.ts";
 import { differences } from "#app/domain/repertoire/form-differences.ts";
+import { readVersion } from "#app/domain/repertoire/form-fields.ts";
 import { songFormSchema } from "#app/domain/repertoire/song-form.ts";
 import { comparableSong, songFieldLabels, songFormValues } from "#app/domain/repertoire/song-form-values.ts";
 import { usualChoices } from "#app/domain/repertoire/usual-choices.ts";
@@ -49,7 +50,7 @@ export async function action({ request, params, context, url }: Route.ActionArgs
     getDb(),
     member,
     song.id,
-    Number(form.get("version")),
+    readVersion(form.get("version")),
     submission.value,
     restore,
   );
