@@ -3,6 +3,8 @@ import { useIsPointed, usePointer } from "#app/components/gig/gap-focus.tsx";
 import { GapStrokes } from "#app/components/gig/gap-strokes.tsx";
 import { GapTokens } from "#app/components/gig/gap-tokens.tsx";
 import { usePageTools } from "#app/components/gig/page-context.tsx";
+import { warningWords } from "#app/components/gig/row-warnings.tsx";
+import { Octagon } from "#app/components/ui/warning.tsx";
 import { gapSentence, gapTokens } from "#app/domain/gig/gap-words.ts";
 import type { Gap, Row } from "#app/domain/gig/plan.ts";
 
@@ -15,7 +17,7 @@ const longDeadAir = 20;
  */
 export const GapRow = memo(function GapRow({ row, gap }: { row: Row; gap: Gap }) {
   const { naming } = usePageTools();
-  const sentence = gapSentence(row, naming);
+  const sentence = [gapSentence(row, naming), ...row.warnings.map((warning) => warning.message)].join(" ");
   const tokens = gapTokens(row, naming);
   const exposed = Math.round(gap.exposed);
   const pointer = usePointer(row.entry.id, sentence);
@@ -25,11 +27,17 @@ export const GapRow = memo(function GapRow({ row, gap }: { row: Row; gap: Gap })
       type="button"
       data-gap={row.entry.id}
       aria-label={`Before ${row.song?.title ?? "the next song"}: ${sentence}`}
-      className={`flex h-8 w-full cursor-default items-center gap-2 pr-3 pl-3 text-left font-display text-base lg:h-6 lg:pr-[44px] lg:pl-[66px] ${pointed ? "bg-grey-100" : ""} ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
+      className={`flex h-8 w-full cursor-default items-center gap-2.5 pr-3 pl-[58px] text-left font-display text-base lg:h-6 lg:pr-[36px] lg:pl-[66px] ${pointed ? "bg-grey-100" : ""} ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
       {...pointer}
     >
       <GapStrokes row={row} gap={gap} />
       <GapTokens tokens={tokens} />
+      {row.warnings.length > 0 ? (
+        <span className="inline-flex min-w-4 items-center gap-1 pl-1 text-warning">
+          <Octagon size={13} />
+          <span className="truncate font-medium max-lg:hidden">{warningWords(row.warnings)}</span>
+        </span>
+      ) : null}
       <span className="tabular ml-auto w-12 shrink-0 text-right">
         {exposed > 0 ? (
           <span className={gap.exposed >= longDeadAir ? "border-ink border-b-2 font-bold" : ""}>

@@ -46,7 +46,7 @@ export function GapTokens({ tokens }: { tokens: GapToken[] }) {
   if (tokens.length === 0) return <span className="text-grey-600">nothing to do</span>;
   return (
     <span
-      className="flex min-w-0 items-baseline gap-x-2 overflow-hidden whitespace-nowrap"
+      className="flex min-w-0 items-baseline gap-x-1.5 overflow-hidden whitespace-nowrap"
       aria-hidden="true"
     >
       {tokens.map((token, index) => {

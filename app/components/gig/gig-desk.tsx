@@ -73,7 +73,7 @@ export function GigDesk(props: GigDeskProps) {
           onDetails={tools.may.plan ? () => setDialog({ kind: "details" }) : null}
           onSuggestions={() => setDialog({ kind: "suggestions" })}
         />
-        <div className="min-[1360px]:grid min-[1360px]:grid-cols-[minmax(0,1fr)_264px]">
+        <div className="min-[85rem]:grid min-[85rem]:grid-cols-[minmax(0,1fr)_264px]">
           <div ref={list} className="min-w-0 pb-28 lg:px-6 lg:pb-10">
             {plan.sets.map((setPlan, index) => (
               <SetBlock
@@ -91,7 +91,7 @@ export function GigDesk(props: GigDeskProps) {
           </div>
           <aside
             aria-label="Less retuning"
-            className="hidden border-grey-200 border-l bg-white px-5 py-5 min-[1360px]:block"
+            className="sticky top-[81px] hidden h-[calc(100dvh-81px)] overflow-y-auto border-grey-200 border-l bg-white px-5 py-5 min-[85rem]:block"
           >
             <SuggestionsPanel {...panel} />
           </aside>

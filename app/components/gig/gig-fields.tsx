@@ -26,7 +26,7 @@ export function GigFields({ form, fields, zones, children }: GigFieldsProps) {
     <>
       <Line field={fields.name} label="Name" required maxLength={gigFieldLimits.name} />
       <Line field={fields.venue} label="Venue" maxLength={gigFieldLimits.venue} />
-      <div className="grid gap-4 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)_minmax(0,4fr)]">
+      <div className="grid gap-4 sm:grid-cols-[minmax(0,10fr)_minmax(0,9fr)_minmax(0,12fr)]">
         <Line field={fields.date} label="Date" type="date" required />
         <Line field={fields.time} label="Starts at" type="time" required />
         <ZoneField field={fields.zone} zones={zones} />
@@ -49,7 +49,7 @@ export function GigFields({ form, fields, zones, children }: GigFieldsProps) {
         defaultValue={fields.notes.initialValue}
         errors={fields.notes.errors}
         label="Notes"
-        rows={3}
+        rows={2}
         maxLength={gigFieldLimits.notes}
       />
     </>
@@ -110,7 +110,7 @@ function CrewField({ field }: { field: GigFormFields["crew"] }) {
   return (
     <fieldset className="flex flex-col gap-1">
       <legend className="pb-1 font-semibold text-base">Who changes guitars</legend>
-      <div className="grid gap-2 sm:grid-cols-2">
+      <div className="grid gap-x-4 gap-y-2 sm:grid-cols-2">
         {crews.map(({ value, label, hint }) => (
           <label
             key={`${field.key}-${value}`}

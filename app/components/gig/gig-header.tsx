@@ -4,7 +4,7 @@ import { HistoryButtons } from "#app/components/gig/history-buttons.tsx";
 import { SaveState, type SaveStatus } from "#app/components/gig/save-state.tsx";
 import { SheetsMenu } from "#app/components/gig/sheets-menu.tsx";
 import { TotalsBar } from "#app/components/gig/totals-bar.tsx";
-import { Button, buttonClass } from "#app/components/ui/button.tsx";
+import { Button } from "#app/components/ui/button.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { entriesOf, setsOf } from "#app/domain/gig/order.ts";
@@ -31,14 +31,34 @@ type GigHeaderProps = {
 export function GigHeader(props: GigHeaderProps) {
   const { gig, plan, before, warnings, paper, save, history, onDetails, onSuggestions } = props;
   const { clock } = plan;
+  const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
   return (
-    <div className="contents lg:sticky lg:top-0 lg:z-20 lg:flex lg:flex-wrap lg:items-center lg:gap-x-7 lg:gap-y-2 lg:border-grey-200 lg:border-b lg:bg-ground lg:px-6 lg:py-2 min-[1360px]:flex-nowrap">
-      <div className="max-lg:on-ebony flex items-start gap-1 bg-ebony px-4 pt-1 pb-3 text-white lg:w-full lg:min-w-0 lg:bg-transparent lg:p-0 lg:text-ink min-[1360px]:w-auto min-[1360px]:flex-1">
-        <Name gig={gig} save={history ? save : null} />
-        <div className="flex text-current lg:hidden">
-          {history ? <HistoryButtons {...history} small /> : null}
+    <div className="contents lg:sticky lg:top-0 lg:z-20 lg:flex lg:flex-wrap lg:items-center lg:gap-x-7 lg:gap-y-2 lg:border-grey-200 lg:border-b lg:bg-ground lg:px-6 lg:py-2 min-[85rem]:flex-nowrap">
+      <div className="on-ebony flex flex-col bg-ebony px-4 pb-2 text-white lg:min-w-0 lg:bg-transparent lg:p-0 lg:text-ink max-[84.99rem]:lg:w-full">
+        <div className="flex min-h-11 items-center gap-1 lg:min-h-0">
+          <h1
+            className="min-w-0 truncate font-semibold text-2xl leading-tight lg:text-[28px]"
+            title={gig.name}
+          >
+            {gig.name}
+          </h1>
+          {onDetails ? <DetailsButton onDetails={onDetails} /> : null}
         </div>
-        {onDetails ? <DetailsButton onDetails={onDetails} /> : null}
+        <div className="flex items-center gap-3">
+          <div className="min-w-0 flex-1 text-grey-300 text-sm leading-tight lg:text-grey-600">
+            <p>{subLine(gig, songs)}</p>
+            {history ? (
+              <p className="pt-0.5 lg:hidden">
+                <SaveState {...save} />
+              </p>
+            ) : null}
+          </div>
+          {history ? (
+            <div className="lg:hidden">
+              <HistoryButtons {...history} small />
+            </div>
+          ) : null}
+        </div>
       </div>
       <div className="sticky top-0 z-20 border-grey-200 border-b bg-ground px-4 py-2 lg:static lg:border-0 lg:p-0">
         <TotalsBar
@@ -50,11 +70,13 @@ export function GigHeader(props: GigHeaderProps) {
       <div className="hidden items-center justify-end gap-2 lg:ml-auto lg:flex">
         {history ? (
           <>
-            <SaveState {...save} />
+            <span className="mr-2 text-grey-600">
+              <SaveState {...save} />
+            </span>
             <HistoryButtons {...history} />
           </>
         ) : null}
-        <Button className="mr-1 min-[1360px]:hidden" onClick={onSuggestions}>
+        <Button className="mr-1 min-[85rem]:hidden" onClick={onSuggestions}>
           Less retuning
         </Button>
         <SheetsMenu gigId={gig.id} paper={paper} pending={save.pending} />
@@ -70,23 +92,6 @@ export function GigHeader(props: GigHeaderProps) {
   );
 }
 
-function Name({ gig, save }: { gig: Gig; save: GigHeaderProps["save"] | null }) {
-  const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
-  return (
-    <div className="min-w-0 flex-1">
-      <h1 className="truncate font-semibold text-2xl leading-tight lg:text-[28px]" title={gig.name}>
-        {gig.name}
-      </h1>
-      <p className="text-grey-300 text-sm leading-tight lg:text-grey-600">{subLine(gig, songs)}</p>
-      {save ? (
-        <p className="pt-0.5 text-grey-300 text-sm lg:hidden">
-          <SaveState {...save} />
-        </p>
-      ) : null}
-    </div>
-  );
-}
-
 function DetailsButton({ onDetails }: { onDetails: () => void }) {
   return (
     <button
@@ -94,7 +99,7 @@ function DetailsButton({ onDetails }: { onDetails: () => void }) {
       aria-label="Gig details"
       title="Name, date, slot, curfew, tech and times"
       onClick={onDetails}
-      className={`${buttonClass("quiet", true)} size-11 shrink-0 px-0 text-current hover:bg-transparent lg:size-9 lg:hover:bg-grey-100`}
+      className="inline-flex size-11 shrink-0 items-center justify-center rounded-sm text-grey-300 lg:size-8 lg:text-grey-600 lg:hover:bg-grey-100 lg:hover:text-ink"
     >
       <Settings2 size={18} aria-hidden="true" />
     </button>

@@ -1,4 +1,5 @@
 import type { FieldMetadata, FormMetadata } from "@conform-to/react";
+import { ChevronRight } from "lucide-react";
 import { Button } from "#app/components/ui/button.tsx";
 import { describedBy, fieldIds } from "#app/components/ui/field.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
@@ -24,8 +25,9 @@ export function GigTimesFields({ form, times, crew }: GigTimesFieldsProps) {
   const wrong = timeKeys.some((key) => fields[key].errors?.length);
   const words = own === 0 ? "usual" : own === 1 ? "1 of your own" : `${own} of your own`;
   return (
-    <details className="border-grey-200 border-y" open={wrong || undefined}>
-      <summary className="flex min-h-11 flex-wrap items-center gap-x-3 font-display font-semibold">
+    <details className="group border-grey-200 border-y" open={wrong || undefined}>
+      <summary className="flex min-h-11 flex-wrap items-center gap-x-2 font-display font-semibold">
+        <ChevronRight size={16} aria-hidden="true" className="shrink-0 group-open:rotate-90" />
         Times
         <span className="font-normal font-sans text-grey-600 text-sm">{words}</span>
       </summary>

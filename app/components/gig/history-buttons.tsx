@@ -1,6 +1,6 @@
 import { Redo2, Undo2 } from "lucide-react";
 import { useEffect } from "react";
-import { Button } from "#app/components/ui/button.tsx";
+import { buttonClass } from "#app/components/ui/button.tsx";
 
 type HistoryButtonsProps = {
   /** What undo and redo would take back or do again; null where there is nothing. */
@@ -46,15 +46,18 @@ export function HistoryButtons({ undoLabel, redoLabel, undo, redo, small = false
   );
 }
 
+const smallStep =
+  "inline-flex size-11 items-center justify-center rounded-sm text-white disabled:text-grey-600";
+
 type StepProps = { words: "Undo" | "Redo"; what: string | null; act: () => void; small: boolean };
 
 function Step({ words, what, act, small }: StepProps) {
   const Icon = words === "Undo" ? Undo2 : Redo2;
   const said = what === null ? words : `${words}: ${what}`;
   return (
-    <Button
-      look="quiet"
-      className={small ? "w-11 px-0 text-current hover:bg-transparent" : "px-2.5 lg:min-h-9"}
+    <button
+      type="button"
+      className={small ? smallStep : `${buttonClass("quiet")} px-2.5 lg:min-h-9`}
       disabled={what === null}
       onClick={act}
       aria-label={said}
@@ -62,6 +65,6 @@ function Step({ words, what, act, small }: StepProps) {
     >
       <Icon size={18} aria-hidden="true" />
       {small ? null : words}
-    </Button>
+    </button>
   );
 }

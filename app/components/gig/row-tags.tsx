@@ -30,7 +30,8 @@ type RowTagsProps = {
   holdLast: boolean;
 };
 
-const tag = "inline-flex min-h-6 items-center gap-1 font-display text-[15px] text-grey-600 whitespace-nowrap";
+const tag =
+  "inline-flex min-h-6 shrink-0 items-center gap-1 font-display text-[15px] text-grey-600 whitespace-nowrap";
 
 /** Opener, closer and rules beside a title. A press on a held end frees it; a press on a rule opens the rules. */
 export function RowTags(props: RowTagsProps) {
@@ -79,7 +80,7 @@ function HoldTag({
 }) {
   const { may, edit } = usePageTools();
   const Icon = held ? Lock : LockOpen;
-  if (!may.plan) return held ? <span className={tag}>held {end}</span> : null;
+  if (!may.plan) return held ? <span className={tag}>held</span> : null;
   const field = end === "first" ? "holdFirst" : "holdLast";
   return (
     <button
@@ -100,7 +101,7 @@ function HoldTag({
       }
     >
       <Icon size={12} aria-hidden="true" />
-      <span aria-hidden="true">{held ? `held ${end}` : "free"}</span>
+      <span aria-hidden="true">{held ? "held" : "free"}</span>
     </button>
   );
 }

@@ -3,13 +3,21 @@ import { Octagon, Warning } from "#app/components/ui/warning.tsx";
 import type { RowWarning } from "#app/domain/gig/warnings.ts";
 
 const short: Record<RowWarning["code"], string> = {
-  "plain-raised": "raised",
-  far: "far",
-  "raised-at-an-end": "drifts",
-  "into-retuned": "not straight in",
+  "plain-raised": "above usual pitch",
+  far: "wide turn",
+  "raised-at-an-end": "may drift",
+  "into-retuned": "stops to retune",
 };
 
-/** Things worth a second look, in a word beside the title; the whole sentence on hover, focus or tap. */
+/** Things worth a second look, a word or two each. @example warningWords([{ code: "far", … }]) // "wide turn" */
+export function warningWords(warnings: readonly RowWarning[]): string {
+  return warnings.map((warning) => short[warning.code]).join(", ");
+}
+
+/**
+ * Things worth a second look about a song that no gap leads into; where one does, its line says them. In a word beside
+ * the title; the whole sentence on hover, focus or tap.
+ */
 export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: readonly RowWarning[] }) {
   const sentence = warnings.map((warning) => warning.message).join(" ");
   const pointer = usePointer(`${entryId}/warnings`, sentence);
@@ -18,11 +26,15 @@ export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: 
     <button
       type="button"
       aria-label={sentence}
-      className="inline-flex min-h-6 min-w-6 shrink-0 items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
+      className="inline-flex min-h-6 min-w-6 shrink items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
       {...pointer}
     >
-      <Octagon size={13} />
-      <span aria-hidden="true">{warnings.map((warning) => short[warning.code]).join(", ")}</span>
+      <span className="shrink-0">
+        <Octagon size={13} />
+      </span>
+      <span aria-hidden="true" className="truncate">
+        {warningWords(warnings)}
+      </span>
     </button>
   );
 }

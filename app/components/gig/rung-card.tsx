@@ -65,12 +65,6 @@ function Opened({ gig, plan, repertoire, described }: Omit<RungCardProps, "open"
   const mayUse = rung === "same-order" ? may.prepare : may.plan;
   return (
     <div className="flex flex-col gap-3 py-2">
-      <ul className="flex list-disc flex-col gap-0.5 pl-4 text-grey-800 leading-snug">
-        {[...said.moves, ...said.changes].map((words) => (
-          <li key={words}>{words}</li>
-        ))}
-      </ul>
-      {after ? <RibbonThumbnails before={plan} after={after} guitars={repertoire.guitars} /> : null}
       {mayUse ? (
         <Button
           look="primary"
@@ -79,6 +73,40 @@ function Opened({ gig, plan, repertoire, described }: Omit<RungCardProps, "open"
         >
           {uses[rung]}
         </Button>
+      ) : null}
+      {after ? <RibbonThumbnails before={plan} after={after} guitars={repertoire.guitars} /> : null}
+      <Changes changes={[...said.moves, ...said.changes]} />
+    </div>
+  );
+}
+
+/** So many changes stand there at once; the rest is asked for. */
+const shownAtOnce = 5;
+
+function Changes({ changes }: { changes: string[] }) {
+  const more = changes.slice(shownAtOnce);
+  return (
+    <div className="text-grey-800 text-sm leading-snug">
+      <ul className="flex flex-col gap-0.5">
+        {changes.slice(0, shownAtOnce).map((words) => (
+          <li key={words} className="pl-3 -indent-3">
+            {words}
+          </li>
+        ))}
+      </ul>
+      {more.length > 0 ? (
+        <details className="pt-0.5">
+          <summary className="w-fit underline underline-offset-2">
+            {more.length === 1 ? "1 more change" : `${more.length} more changes`}
+          </summary>
+          <ul className="flex flex-col gap-0.5 pt-0.5">
+            {more.map((words) => (
+              <li key={words} className="pl-3 -indent-3">
+                {words}
+              </li>
+            ))}
+          </ul>
+        </details>
       ) : null}
     </div>
   );

@@ -1,5 +1,7 @@
 import { useId, useMemo, useRef } from "react";
+import { AddLine } from "#app/components/gig/add-line.tsx";
 import type { Part } from "#app/components/gig/moves.ts";
+import { usePageTools } from "#app/components/gig/page-context.tsx";
 import { RibbonColumn } from "#app/components/gig/ribbon-column.tsx";
 import { rowTroubles } from "#app/components/gig/row-troubles.ts";
 import { IntervalLine, SetHeading } from "#app/components/gig/set-heading.tsx";
@@ -23,6 +25,7 @@ type SetBlockProps = {
 
 /** One set: its songs with their gaps, and beside them a ribbon for each guitar. */
 export function SetBlock({ gig, plan, first, parts, repertoire, standing, onAdd }: SetBlockProps) {
+  const { may } = usePageTools();
   const headingId = useId();
   const column = useRef<HTMLDivElement>(null);
   const troubles = useMemo(() => rowTroubles(plan), [plan]);
@@ -32,7 +35,7 @@ export function SetBlock({ gig, plan, first, parts, repertoire, standing, onAdd 
   return (
     <section aria-labelledby={headingId}>
       {first ? null : <IntervalLine seconds={plan.set.interval} />}
-      <div className="min-[1180px]:grid min-[1180px]:grid-cols-[minmax(0,1fr)_auto] min-[1180px]:gap-x-6">
+      <div className="min-[74rem]:grid min-[74rem]:grid-cols-[minmax(0,1fr)_auto] min-[74rem]:gap-x-6">
         <div ref={column} className="relative min-w-0">
           <SetHeading
             id={headingId}
@@ -50,14 +53,19 @@ export function SetBlock({ gig, plan, first, parts, repertoire, standing, onAdd 
               firstId={firstId}
               lastId={lastId}
               troubles={troubles}
-              songs={repertoire.songs}
-              standing={standing}
-              onAdd={(song) => onAdd([song], part)}
             />
           ))}
+          {may.plan ? (
+            <AddLine
+              parts={parts}
+              songs={repertoire.songs}
+              standing={standing}
+              onAdd={(song, part) => onAdd([song], part)}
+            />
+          ) : null}
         </div>
         {plan.rows.length > 0 ? (
-          <div className="hidden min-[1180px]:block">
+          <div className="hidden min-[74rem]:block">
             <RibbonColumn plan={plan} guitars={repertoire.guitars} boxes={boxes} />
           </div>
         ) : null}

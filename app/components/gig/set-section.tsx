@@ -1,11 +1,9 @@
-import { AddSong } from "#app/components/gig/add-song.tsx";
 import type { Part } from "#app/components/gig/moves.ts";
 import { partName } from "#app/components/gig/moves.ts";
 import { usePageTools } from "#app/components/gig/page-context.tsx";
 import { SongItem } from "#app/components/gig/song-item.tsx";
 import type { GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
-import type { Song } from "#app/domain/repertoire/song.ts";
 
 const none: readonly string[] = [];
 
@@ -17,14 +15,11 @@ type SetSectionProps = {
   firstId: string | undefined;
   lastId: string | undefined;
   troubles: ReadonlyMap<string, string[]>;
-  songs: Song[];
-  standing: ReadonlySet<string>;
-  onAdd: (song: Song, part: Part) => void;
 };
 
-/** The songs of one section in their order, and the line that adds another. */
+/** The songs of one section in their order, with their gaps. */
 export function SetSection(props: SetSectionProps) {
-  const { part, set, rows, firstId, lastId, troubles, songs, standing, onAdd } = props;
+  const { part, set, rows, firstId, lastId, troubles } = props;
   const { may } = usePageTools();
   return (
     <>
@@ -57,16 +52,6 @@ export function SetSection(props: SetSectionProps) {
           {may.plan ? "No songs yet. Add some below, or paste a list." : "No songs yet."}
         </p>
       )}
-      {may.plan ? (
-        <div className="hidden pl-[38px] lg:block">
-          <AddSong
-            songs={songs}
-            standing={standing}
-            where={partName(part)}
-            onAdd={(song) => onAdd(song, part)}
-          />
-        </div>
-      ) : null}
     </>
   );
 }

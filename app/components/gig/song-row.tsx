@@ -34,7 +34,7 @@ type SongRowProps = {
 };
 
 const areas =
-  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_84px_auto_104px_48px_48px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
+  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_44px_46px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
 
 /** One song of a set. */
 export function SongRow({ row, set, first, last, troubles, number, plain = false }: SongRowProps) {
@@ -46,8 +46,11 @@ export function SongRow({ row, set, first, last, troubles, number, plain = false
       <div className="flex h-full items-center justify-center self-stretch border-grey-200 border-r [grid-area:num]">
         {number}
       </div>
-      <div className="flex min-w-0 items-baseline gap-x-2 self-end pt-1.5 pl-3 [grid-area:title] lg:self-center lg:pt-0 lg:pl-3.5">
-        <span className="truncate font-display font-semibold text-lg leading-6 lg:text-xl" title={title}>
+      <div className="flex min-w-0 items-baseline gap-x-2 self-end pt-1.5 pr-2 pl-3 [grid-area:title] lg:self-center lg:pt-0 lg:pl-3.5">
+        <span
+          className="min-w-16 truncate font-display font-semibold text-lg leading-6 lg:text-xl"
+          title={title}
+        >
           {title}
         </span>
         {plain ? null : (
@@ -62,12 +65,12 @@ export function SongRow({ row, set, first, last, troubles, number, plain = false
             holdLast={set.holdLast}
           />
         )}
-        {plain ? null : <RowWarnings entryId={entry.id} warnings={row.warnings} />}
+        {plain || row.gap ? null : <RowWarnings entryId={entry.id} warnings={row.warnings} />}
       </div>
       <div className="flex justify-end pr-1 [grid-area:badge] lg:justify-start">
         <ChooserButton row={row} title={title} plain={plain || !may.prepare} />
       </div>
-      <div className="min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:min-w-[156px] lg:self-center lg:p-0">
+      <div className="-ml-1 min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:ml-0 lg:min-w-[156px] lg:self-center lg:p-0">
         {neck ? (
           <NeckCells neck={neck} songKey={song?.key ?? ""} naming={naming} changed={row.retuned} />
         ) : null}
