@@ -19,10 +19,6 @@ function refusal(song: PastedSong): string | null {
   if (song.seconds !== null && (song.seconds < 1 || song.seconds > songLimits.longestSeconds)) {
     return "A song is between 1 second and 3 hours long. Correct the length.";
   }
-  const { least, most } = songLimits.tempo;
-  if (song.tempo !== null && (song.tempo < least || song.tempo > most)) {
-    return `A tempo is ${least} to ${most} beats a minute. Correct it or leave it out.`;
-  }
   return null;
 }
 

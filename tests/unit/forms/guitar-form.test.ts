@@ -144,7 +144,7 @@ describe("a kept guitar in its form", () => {
         expect(read.error?.issues).toBeUndefined();
         expect(read.data).toEqual(fields);
       }),
-      { numRuns: 400 },
+      { numRuns: 120 },
     );
   });
 });

@@ -219,7 +219,7 @@ describe("a kept song in its form", () => {
           expect(read.data).toEqual(fields);
         },
       ),
-      { numRuns: 400 },
+      { numRuns: 120 },
     );
   });
 
