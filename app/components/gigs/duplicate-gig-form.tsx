@@ -40,7 +40,7 @@ export function DuplicateGigForm({ zone, defaultValue, lastResult }: DuplicateGi
           Sets, songs, guitars, rules and times are copied. Rules about songs that are gone are left behind.
         </p>
       </div>
-      <SaveBar form={form} saving={saving} label="Duplicate gig" />
+      <SaveBar form={form} saving={saving} unsaved label="Duplicate gig" />
     </Form>
   );
 }

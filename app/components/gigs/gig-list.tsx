@@ -53,14 +53,14 @@ function Row({ gig, mayPlan }: { gig: GigLine; mayPlan: boolean }) {
               to={`/gigs/${gig.id}/duplicate`}
               aria-label={`Duplicate ${gig.name}`}
               title="Duplicate"
-              className={`${buttonClass("quiet")} size-11 px-0`}
+              className={`${buttonClass("quiet")} size-11 px-0!`}
             >
               <Copy size={18} aria-hidden="true" />
             </Link>
             <PostButton
               action={`/gigs/${gig.id}/delete`}
               look="quiet"
-              className="size-11 px-0"
+              className="size-11 px-0!"
               aria-label={`Delete ${gig.name}`}
               title="Delete"
             >

@@ -6,6 +6,7 @@ import { GigFields, Line } from "#app/components/gig/gig-fields.tsx";
 import { zoneHere } from "#app/components/gig/zones.ts";
 import { SaveBar } from "#app/components/save-bar.tsx";
 import { UnsavedGuard } from "#app/components/unsaved-guard.tsx";
+import { useUnsaved } from "#app/components/use-unsaved.ts";
 import {
   type NewGigFields,
   type NewGigFormInput,
@@ -31,17 +32,17 @@ export function NewGigForm({ zone, zones, lastResult }: NewGigFormProps) {
     shouldRevalidate: "onInput",
     onValidate: ({ formData }) => parseWithZod(formData, { schema: newGigFormSchema }),
   });
+  const { unsaved, watch } = useUnsaved("new-gig");
   const saving = navigation.state !== "idle" && navigation.formMethod === "POST";
-  const { update } = form;
-  const zoneName = fields.zone.name;
+  const zoneId = fields.zone.id;
   useEffect(() => {
-    if (zone === null && zones.includes(zoneHere())) {
-      update({ name: zoneName, value: zoneHere(), validated: false });
-    }
-  }, [zone, zones, zoneName, update]);
+    const select = document.getElementById(zoneId);
+    // Set past the form, which would take it for something typed.
+    if (zone === null && select instanceof HTMLSelectElement) select.value = zoneHere();
+  }, [zone, zoneId]);
   return (
-    <Form method="post" {...getFormProps(form)} className="pb-20 md:pb-0">
-      <UnsavedGuard unsaved={form.dirty && !saving} />
+    <Form method="post" {...getFormProps(form)} {...watch} className="pb-20 md:pb-0">
+      <UnsavedGuard unsaved={unsaved && !saving} />
       <div className="flex max-w-2xl flex-col gap-4 px-4 py-5 md:px-6">
         <GigFields form={form} fields={fields} zones={zones}>
           <div className="grid gap-4 sm:grid-cols-2">
@@ -50,7 +51,7 @@ export function NewGigForm({ zone, zones, lastResult }: NewGigFormProps) {
           </div>
         </GigFields>
       </div>
-      <SaveBar form={form} saving={saving} label="Add gig" />
+      <SaveBar form={form} saving={saving} unsaved={unsaved} label="Add gig" />
     </Form>
   );
 }
