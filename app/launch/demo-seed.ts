@@ -37,7 +37,7 @@ async function seedGuitars(trx: Knex.Transaction, actId: string): Promise<Map<st
       { actId },
       {
         ...guitar,
-        ...defaultRange(open),
+        ...(guitar.keeps ? { lowest: open, highest: open } : defaultRange(open)),
         shortName: guitar.name,
         strings: open.length,
         usual: open,

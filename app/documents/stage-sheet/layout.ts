@@ -199,11 +199,12 @@ export function layoutStageSheet(sheet: StageSheet, options: SheetOptions): Shee
       const air = Math.min((frame.bottom - frame.top - used) / page.rows.length, found.size * 0.7);
       const marks = head(sheet, set, frame, index > 0);
       let top = frame.top;
-      for (const layout of page.layouts) {
+      page.layouts.forEach((layout, place) => {
         marks.push(...layout.marks(top + air / 2));
         top += layout.height + air;
-        marks.push({ kind: "rule", x: margin, y: top, width: frame.width - 2 * margin, thickness: 0.7 });
-      }
+        const thickness = page.rows[place + 1]?.encore ? 3 : 0.7;
+        marks.push({ kind: "rule", x: margin, y: top, width: frame.width - 2 * margin, thickness });
+      });
       const distance = distanceWords(smallest);
       marks.push(
         ...foot(

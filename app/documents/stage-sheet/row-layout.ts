@@ -85,7 +85,7 @@ export function layoutRow(row: SheetRow, columns: Columns): RowLayout {
   const action = row.action === "" ? { lines: [], size } : below ? fitBelow : fitBeside;
   const firstAction = below ? 1 : 0;
   const above = Math.max(
-    row.guitar ? 1 : 0,
+    row.guitar || row.encore ? 1 : 0,
     action.lines.length > 0 ? firstAction + action.lines.length : 0,
     row.capos.length - 1,
   );

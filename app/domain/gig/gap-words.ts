@@ -45,12 +45,21 @@ function coverage(strings: readonly number[], count: number): string {
   return free.length <= strings.length ? `, leave ${stringsInWords(free)}` : ` on ${stringsInWords(strings)}`;
 }
 
-/** A capo's change in words: "capo off", "capo on 3, leave 6", "capo to 5". */
-function capoWord(change: CapoWork, count: number, several: boolean): string {
-  const which = coverage(change.strings, count);
+/**
+ * A capo's change in words: "capo off", "capo on 3, leave 6", "capo to 5". `told`: the strings stand elsewhere.
+ */
+function capoWord(change: CapoWork, count: number, several: boolean, told = false): string {
+  const which = told ? "" : coverage(change.strings, count);
   if (change.action === "off") return several ? `capo off ${change.from}` : "capo off";
   if (change.action === "on") return `capo on ${change.to}${which}`;
   return several ? `capo ${change.from} to ${change.to}` : `capo to ${change.to}`;
+}
+
+/** Whether more than one capo was on the neck before, so that its fret must tell which is meant. */
+function hadSeveral(row: GapRow, changes: readonly CapoWork[]): boolean {
+  const put = changes.filter((change) => change.action !== "off").length;
+  const taken = changes.filter((change) => change.action !== "on").length;
+  return (row.neck?.capos.length ?? 0) - put + taken > 1;
 }
 
 /** Changes in the order in which hands work: capos off first, strings down, strings up, then capos on or moved. */
@@ -76,7 +85,7 @@ export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
   const { off, down, up, on } = inOrder(change.strings, change.capos);
   const fifths = fifthsOf(row);
   for (const capo of off)
-    tokens.push({ kind: "capo", words: capoWord(capo, count, change.capos.length > 1) });
+    tokens.push({ kind: "capo", words: capoWord(capo, count, hadSeveral(row, change.capos)) });
   for (const { string, from, to } of [...down, ...up]) {
     tokens.push({
       kind: "string",
@@ -86,7 +95,8 @@ export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
       to: stringName(to, naming, fifths),
     });
   }
-  for (const capo of on) tokens.push({ kind: "capo", words: capoWord(capo, count, change.capos.length > 1) });
+  for (const capo of on)
+    tokens.push({ kind: "capo", words: capoWord(capo, count, hadSeveral(row, change.capos)) });
   if (change.atSide)
     tokens.push({ kind: "tech", words: change.onStage ? "late at the side" : "at the side" });
   return tokens;
@@ -136,8 +146,8 @@ export function gapSentence(row: GapRow, naming: Naming): string {
 }
 
 /**
- * What hands must do before a song, for the stage sheet: guitar changes stand beside it, so the words begin with the
- * capo. Only what the player does: a guitar that the tech hands over is ready.
+ * What hands must do before a song, for the stage sheet: the guitar and the strings of a capo stand beside it, so the
+ * words begin with the capo and name only its fret. Only what the player does: a guitar that the tech hands over is ready.
  * @example stageWords(row, "english") // "capo off, 2 down, 1 up"
  */
 export function stageWords(row: GapRow, naming: Naming): string {
@@ -145,10 +155,10 @@ export function stageWords(row: GapRow, naming: Naming): string {
   if (!change || !row.guitar || !row.neck || !change.onStage) return "";
   const count = row.guitar.strings;
   const { off, down, up, on } = inOrder(change.strings, change.capos);
-  const words = off.map((capo) => capoWord(capo, count, change.capos.length > 1));
+  const words = off.map((capo) => capoWord(capo, count, hadSeveral(row, change.capos), true));
   if (down.length > 0) words.push(`${down.length} down`);
   if (up.length > 0) words.push(`${up.length} up`);
-  words.push(...on.map((capo) => capoWord(capo, count, change.capos.length > 1)));
+  words.push(...on.map((capo) => capoWord(capo, count, hadSeveral(row, change.capos), true)));
   return [...words, ...tunerWords(row, change, naming)].join(", ");
 }
 

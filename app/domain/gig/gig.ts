@@ -14,8 +14,30 @@ export type GigTimes = {
 
 /** Defaults without and with a tech; common practice, no source. */
 export const defaultTimes: Record<Crew, GigTimes> = {
-  alone: { string: 8, semitone: 1, capoOn: 5, capoOff: 3, capoMove: 6, check: 5, swap: 15, cover: 12, encoreCover: 40, intoCover: 0 },
-  tech: { string: 8, semitone: 1, capoOn: 5, capoOff: 3, capoMove: 6, check: 5, swap: 8, cover: 12, encoreCover: 40, intoCover: 0 },
+  alone: {
+    string: 8,
+    semitone: 1,
+    capoOn: 5,
+    capoOff: 3,
+    capoMove: 6,
+    check: 5,
+    swap: 15,
+    cover: 12,
+    encoreCover: 40,
+    intoCover: 0,
+  },
+  tech: {
+    string: 8,
+    semitone: 1,
+    capoOn: 5,
+    capoOff: 3,
+    capoMove: 6,
+    check: 5,
+    swap: 8,
+    cover: 12,
+    encoreCover: 40,
+    intoCover: 0,
+  },
 };
 
 export type Crew = "alone" | "tech";

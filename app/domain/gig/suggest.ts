@@ -1,5 +1,6 @@
 import type { Edit } from "#app/domain/gig/edit.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
+import { leastChange } from "#app/domain/gig/least-change.ts";
 import { longestRising } from "#app/domain/gig/longest-rising.ts";
 import { reorderEdits } from "#app/domain/gig/order.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
@@ -22,7 +23,8 @@ export function rungProblem(problem: Problem, rung: Rung): Problem {
  * The edits that make a set what an answer says: songs outside a longest common run get a new place, and songs whose
  * guitar or way changes get these. What is pinned was fixed in the problem, so it never changes.
  */
-export function suggestionEdits(gig: Gig, plan: SetPlan, answer: FoundAnswer): Edit[] {
+export function suggestionEdits(gig: Gig, plan: SetPlan, found: FoundAnswer): Edit[] {
+  const answer = leastChange(plan.problem, plan.plays, found);
   const entries = new Map(gig.entries.map((entry) => [entry.id, entry]));
   const choices = answer.plays.flatMap(({ song, guitar, neck }): Edit[] => {
     const entry = entries.get(song);
@@ -47,7 +49,7 @@ export type Suggested = {
   totals: Totals;
   /** "Night Ploughing before Glasshouse" */
   moves: string[];
-  /** "Salt on the Sill to Birch", "Low Meadow in DADGAD, no capo" */
+  /** "To Birch: Salt on the Step, Stonecrop", "Low Meadow in DADGAD, no capo" */
   changes: string[];
   proven: boolean;
   /** How sure this is: proven least, or how much less may still be possible. */
@@ -68,6 +70,7 @@ function movesOf(
   });
 }
 
+/** What each song takes up instead: one line a guitar, one a song that is played another way. */
 function changesOf(
   plan: SetPlan,
   answer: FoundAnswer,
@@ -76,20 +79,19 @@ function changesOf(
   naming: Naming,
 ): string[] {
   const now = new Map(plan.plays.map((play) => [play.song, play]));
-  const guitars = new Map(repertoire.guitars.map((guitar) => [guitar.id, guitar]));
-  return answer.plays.flatMap(({ song, guitar, neck }) => {
-    const before = now.get(song);
-    const words: string[] = [];
-    if (before?.guitar !== guitar)
-      words.push(`${title(song)} to ${guitars.get(guitar)?.shortName ?? "another guitar"}`);
-    const way = plan.necks.get(song)?.[neck];
-    if (before?.neck !== neck && way) {
-      words.push(
-        `${title(song)} in ${compactTuning(way.open, naming)}, ${caposWords(way.capos, way.open.length)}`,
-      );
-    }
-    return words;
+  const changed = answer.plays.filter(({ song, guitar }) => now.get(song)?.guitar !== guitar);
+  const toGuitars = repertoire.guitars.flatMap((guitar) => {
+    const songs = changed.filter((play) => play.guitar === guitar.id).map((play) => title(play.song));
+    return songs.length > 0 ? [`To ${guitar.shortName}: ${songs.join(", ")}`] : [];
   });
+  const ways = answer.plays.flatMap(({ song, neck }) => {
+    const way = plan.necks.get(song)?.[neck];
+    if (now.get(song)?.neck === neck || !way) return [];
+    return [
+      `${title(song)} in ${compactTuning(way.open, naming)}, ${caposWords(way.capos, way.open.length)}`,
+    ];
+  });
+  return [...toGuitars, ...ways];
 }
 
 function certaintyOf(plan: SetPlan, answer: FoundAnswer, rung: Rung): string {
@@ -108,13 +110,14 @@ export function describeSuggestion(
   gig: Gig,
   plan: SetPlan,
   {
-    answer,
+    answer: found,
     rung,
     repertoire,
     naming,
   }: { answer: FoundAnswer; rung: Rung; repertoire: Repertoire; naming: Naming },
 ): Suggested {
   const title = titlesOf(gig, repertoire);
+  const answer = leastChange(plan.problem, plan.plays, found);
   const tolerance = 1e-6 * Math.max(1, plan.evaluation.total);
   return {
     gains: plan.evaluation.breaches.length > 0 || answer.total < plan.evaluation.total - tolerance,

@@ -1,0 +1,181 @@
+import { describe, expect, test } from "vitest";
+import { gapSentence, gapTokens, stageWords } from "#app/domain/gig/gap-words.ts";
+import { defaultTimes } from "#app/domain/gig/gig.ts";
+import { planGig, type Row } from "#app/domain/gig/plan.ts";
+import { gigOf, guitar, repertoireOf, song } from "./build-gig.ts";
+
+const alder = guitar("alder", { shortName: "Alder" });
+const birch = guitar("birch", { shortName: "Birch" });
+
+/** The last of a few songs, each on a guitar, as its row stands. */
+function rowOf(ways: [string, "alder" | "birch"][], changes: Parameters<typeof gigOf>[1] = {}): Row {
+  const songs = ways.map(([way], index) => song(`s${index}`, way));
+  const gig = gigOf([ways.map(([, on], index) => ({ song: `s${index}`, guitar: on }))], changes);
+  return planGig(gig, repertoireOf(songs, [alder, birch])).sets[0]!.rows.at(-1)!;
+}
+
+const capoOffOneDown = rowOf([
+  ["EADGBE capo 2", "alder"],
+  ["DADGBE", "alder"],
+]);
+
+describe("a gap in words", () => {
+  test("for hover, focus and screen readers", () => {
+    // By hand: off 3, string 8 + 2 × 1, check 5 = 18; talk covers 12.
+    expect(gapSentence(capoOffOneDown, "english")).toBe(
+      "Capo off. String 6 down 2, to D. About 18 s, 6 s longer than the talk covers.",
+    );
+  });
+
+  test("covered by the talk, no talk at all, and nothing to do", () => {
+    expect(
+      gapSentence(
+        rowOf([
+          ["EADGBE", "alder"],
+          ["EADGBE capo 2", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("Capo on 2. About 10 s, covered by the talk.");
+    const silent = { times: { ...defaultTimes.alone, cover: 0 } };
+    expect(
+      gapSentence(
+        rowOf(
+          [
+            ["EADGBE", "alder"],
+            ["DADGBE", "alder"],
+          ],
+          silent,
+        ),
+        "english",
+      ),
+    ).toBe("String 6 down 2, to D. About 15 s of dead air.");
+    expect(
+      gapSentence(
+        rowOf([
+          ["EADGBE", "alder"],
+          ["EADGBE", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("Nothing to do.");
+  });
+
+  test("a change of guitar comes first", () => {
+    const row = rowOf([
+      ["EADGBE", "alder"],
+      ["DADGAD", "birch"],
+      ["DADGBE", "alder"],
+    ]);
+    expect(gapSentence(row, "english")).toBe(
+      "Change to Alder. String 6 down 2, to D. About 30 s, 18 s longer than the talk covers.",
+    );
+    expect(gapTokens(row, "english").map((token) => token.kind)).toEqual(["swap", "string"]);
+  });
+
+  test("in the order in which hands work: capo off, strings down, strings up, capo on", () => {
+    const row = rowOf([
+      ["DADGBE capo 2", "alder"],
+      ["EADGBD capo 3 leave 6", "alder"],
+    ]);
+    expect(
+      gapTokens(row, "english").map((token) =>
+        token.kind === "string"
+          ? `${token.string} ${token.direction}`
+          : token.kind === "capo"
+            ? token.words
+            : "",
+      ),
+    ).toEqual(["capo off", "1 down", "6 up", "capo on 3, leave 6"]);
+  });
+
+  test("a capo that moves", () => {
+    expect(
+      gapTokens(
+        rowOf([
+          ["EADGBE capo 2", "alder"],
+          ["EADGBE capo 5", "alder"],
+        ]),
+        "english",
+      ),
+    ).toEqual([{ kind: "capo", words: "capo to 5" }]);
+  });
+
+  test("notes follow the reader's naming", () => {
+    const row = rowOf([
+      ["EADGBE", "alder"],
+      ["EADGA#E", "alder"],
+    ]);
+    const to = (naming: "english" | "german" | "fixed-do") =>
+      gapTokens(row, naming).map((token) => token.kind === "string" && token.to);
+    expect(to("english")).toEqual(["B♭"]);
+    expect(to("german")).toEqual(["B"]);
+    expect(to("fixed-do")).toEqual(["Si♭"]);
+  });
+
+  test("work at the side is the tech's", () => {
+    const row = rowOf(
+      [
+        ["EADGBE", "alder"],
+        ["DADGAD", "birch"],
+        ["DADGBE", "alder"],
+      ],
+      { crew: "tech", times: defaultTimes.tech },
+    );
+    expect(gapSentence(row, "english")).toBe(
+      "Change to Alder. String 6 down 2, to D. The tech does this at the side. About 8 s, covered by the talk.",
+    );
+    expect(stageWords(row, "english")).toBe("");
+  });
+});
+
+describe("what the stage sheet says", () => {
+  test("counts of strings, since the letters to tune to stand beside them", () => {
+    expect(stageWords(capoOffOneDown, "english")).toBe("capo off, 1 down");
+    expect(
+      stageWords(
+        rowOf([
+          ["DGDGBD", "alder"],
+          ["DADGAD", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("1 down, 1 up");
+  });
+
+  test("a capo's strings stand beside its number, so the words name the fret alone", () => {
+    expect(
+      stageWords(
+        rowOf([
+          ["CGCFFC", "alder"],
+          ["CGCFFC capo 3 leave 6", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("capo on 3");
+  });
+
+  test("what the tuner reads where a string is retuned under a capo that stays", () => {
+    expect(
+      stageWords(
+        rowOf([
+          ["EADGBE capo 2", "alder"],
+          ["DADGBE capo 2", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("1 down, 6 reads E");
+  });
+
+  test("a string that a partial capo leaves reads as itself", () => {
+    expect(
+      stageWords(
+        rowOf([
+          ["EADGBE capo 3 leave 6", "alder"],
+          ["DADGBE capo 3 leave 6", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("1 down");
+  });
+});
