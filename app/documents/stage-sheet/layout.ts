@@ -68,22 +68,17 @@ function quietBreak(rows: SheetRow[], start: number, end: number): number {
   return candidates.find((row) => rows[row]?.encore) ?? candidates.find(quiet) ?? end;
 }
 
-/** The cut into no more than so many pages whose smallest type is largest. */
-function largest(rows: SheetRow[], frame: Frame, pages: number): Cut | null {
-  let best: Cut | null = null;
-  for (let size = largestSize; size >= Math.max(smallestSize, best?.smallest ?? 0); size -= 0.5) {
-    const found = cut(rows, size, frame);
-    if (found && found.pages.length <= pages && found.smallest > (best?.smallest ?? 0)) best = found;
-  }
-  return best;
-}
-
+/** The cut into the fewest pages, and of these the one whose smallest type is largest. */
 function cutSet(rows: SheetRow[], frame: Frame): Cut {
-  for (let pages = 1; pages <= rows.length; pages += 1) {
-    const found = largest(rows, frame, pages);
-    if (found) return found;
+  let best: Cut | null = null;
+  for (let size = largestSize; size >= smallestSize; size -= 0.5) {
+    const found = cut(rows, size, frame);
+    if (!found) continue;
+    const pages = found.pages.length - (best?.pages.length ?? Number.POSITIVE_INFINITY);
+    if (pages < 0 || (pages === 0 && found.smallest > (best?.smallest ?? 0))) best = found;
   }
-  throw new Error("A song does not fit on a page of its own.");
+  if (!best) throw new Error("A song does not fit on a page of its own.");
+  return best;
 }
 
 /** How far a page reads, in words: rounded down to 10 cm. */
