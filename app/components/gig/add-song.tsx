@@ -72,7 +72,7 @@ export function AddSong({ songs, standing, where, onAdd, autoFocus }: AddSongPro
           aria-label={`Add a song to ${where}`}
           placeholder={`Add a song to ${where}`}
           autoFocus={autoFocus}
-          className="min-h-9 w-full min-w-0 bg-transparent font-display font-medium text-base text-ink placeholder:text-grey-600"
+          className="min-h-9 w-full min-w-0 bg-transparent px-1.5 focus-visible:-outline-offset-2 font-display font-medium text-base text-ink placeholder:text-grey-600"
         />
       </div>
       <span role="status" className="sr-only">

@@ -1,5 +1,5 @@
 import { Tooltip } from "@base-ui/react/tooltip";
-import { createContext, type ReactNode, use, useState, useSyncExternalStore } from "react";
+import { createContext, type ReactNode, use, useEffect, useState, useSyncExternalStore } from "react";
 
 /** What is pointed at: its key (for a gap the entry it leads into), the sentence that tells it, and where. */
 export type Pointed = { key: string; sentence: string; anchor: Element };
@@ -87,13 +87,25 @@ export function GapFocus({ children }: { children: ReactNode }) {
   );
 }
 
+/** How long one points before the bubble opens, so that it does not flicker after a pointer that only passes. */
+const openAfterMilliseconds = 200;
+
 function Bubble() {
   const store = use(StoreContext);
   const pointed = useSyncExternalStore(store.subscribe, store.current, () => null);
+  const [open, setOpen] = useState(false);
+  useEffect(() => {
+    if (!pointed) {
+      setOpen(false);
+      return;
+    }
+    const timer = setTimeout(() => setOpen(true), openAfterMilliseconds);
+    return () => clearTimeout(timer);
+  }, [pointed]);
   return (
     <Tooltip.Root
-      open={pointed !== null}
-      onOpenChange={(open) => (open || !pointed ? null : store.hide(pointed.key))}
+      open={open && pointed !== null}
+      onOpenChange={(next) => (next || !pointed ? null : store.hide(pointed.key))}
     >
       <Tooltip.Portal>
         <Tooltip.Positioner
@@ -103,7 +115,7 @@ function Bubble() {
           alignOffset={12}
           sideOffset={4}
           collisionPadding={8}
-          className="z-40"
+          className="pointer-events-none z-40"
         >
           <Tooltip.Popup className="max-w-[min(26rem,92vw)] rounded-sm bg-ink px-3 py-2 text-base text-white">
             {pointed?.sentence}

@@ -49,3 +49,12 @@ export function placeBeside(parts: readonly Part[], entryId: string, step: -1 | 
 export function partName(part: Pick<Part, "setName" | "section">): string {
   return part.section === 0 ? part.setName : `Encore of ${part.setName}`;
 }
+
+/**
+ * Where a section is, for the middle of a sentence.
+ * @example toPart({ setName: "Set 1", section: 1 }, 2) // "the encore of Set 1"
+ */
+export function toPart(part: Pick<Part, "setName" | "section">, sets: number): string {
+  if (part.section === 0) return part.setName;
+  return sets === 1 ? "the encore" : `the encore of ${part.setName}`;
+}

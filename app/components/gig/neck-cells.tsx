@@ -34,7 +34,7 @@ export const NeckCells = memo(function NeckCells({ neck, songKey, naming, change
           // biome-ignore lint/suspicious/noArrayIndexKey: a string is known by its place
           key={index}
           aria-hidden="true"
-          className={`inline-flex h-5 items-center justify-center lg:h-7 ${many ? "w-4 text-sm" : "w-[18px] text-base lg:w-[26px] lg:text-lg"} ${letter.length > 2 ? "text-xs lg:text-sm" : ""} ${changed[index] ? "bg-ink text-white" : ""}`}
+          className={`inline-flex h-5 items-center justify-center lg:h-7 ${many ? "w-4 text-sm" : "w-[18px] text-base lg:w-6 lg:text-lg"} ${letter.length > 2 ? "text-xs lg:text-sm" : ""} ${changed[index] ? "bg-ink text-white" : ""}`}
         >
           {letter}
         </span>

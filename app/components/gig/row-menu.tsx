@@ -1,5 +1,5 @@
 import { Menu } from "@base-ui/react/menu";
-import { type Part, partName, placeBeside, placeOf } from "#app/components/gig/moves.ts";
+import { type Part, placeBeside, placeOf, toPart } from "#app/components/gig/moves.ts";
 import { type EntryPayload, usePageTools } from "#app/components/gig/page-context.tsx";
 import { MenuItem, MenuLine, MenuLink, MenuPopup } from "#app/components/ui/menu.tsx";
 import type { Entry, Gig } from "#app/domain/gig/gig.ts";
@@ -110,7 +110,7 @@ function ElsewhereItems({ entry, gig, parts }: { entry: Entry; gig: Gig; parts: 
         key={`${target.setId}/${target.section}`}
         onClick={() => move(entry.id, { ...target, index: there?.entryIds.length ?? 0 })}
       >
-        Move to {gig.sets.length === 1 && target.section === 1 ? "the encore" : partName(target)}
+        Move to {toPart(target, gig.sets.length)}
       </MenuItem>
     );
   });

@@ -26,7 +26,7 @@ export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: 
     <button
       type="button"
       aria-label={sentence}
-      className="inline-flex min-h-6 min-w-6 shrink items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
+      className="inline-flex min-h-6 min-w-6 shrink-999 items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
       {...pointer}
     >
       <span className="shrink-0">

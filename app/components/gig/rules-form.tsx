@@ -26,23 +26,24 @@ export function RulesForm({ entry, gig, parts, titleOf }: RulesFormProps) {
     <>
       {rules.length === 0 ? (
         <p className="text-grey-600">No rules: this song may go anywhere in its section.</p>
-      ) : null}
-      <ul className="flex flex-col">
-        {rules.map((rule) => (
-          <li
-            key={rule.id}
-            className="flex min-h-11 items-center justify-between gap-3 border-grey-200 border-b"
-          >
-            <span>{ruleWords(rule, entry.section, titleOf)}</span>
-            <Button
-              small
-              onClick={() => edit([{ kind: "rule.remove", ruleId: rule.id }], `Remove a rule of ${title}`)}
+      ) : (
+        <ul className="flex flex-col">
+          {rules.map((rule) => (
+            <li
+              key={rule.id}
+              className="flex min-h-11 items-center justify-between gap-3 border-grey-200 border-b"
             >
-              Remove rule
-            </Button>
-          </li>
-        ))}
-      </ul>
+              <span>{ruleWords(rule, entry.section, titleOf)}</span>
+              <Button
+                small
+                onClick={() => edit([{ kind: "rule.remove", ruleId: rule.id }], `Remove a rule of ${title}`)}
+              >
+                Remove rule
+              </Button>
+            </li>
+          ))}
+        </ul>
+      )}
       <div className="flex flex-col gap-2">
         <h3 className="font-semibold text-lg">Its place</h3>
         <div className="flex flex-wrap gap-2">

@@ -34,7 +34,7 @@ type SongRowProps = {
 };
 
 const areas =
-  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_44px_46px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
+  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_40px_46px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
 
 /** One song of a set. */
 export function SongRow({ row, set, first, last, troubles, number, plain = false }: SongRowProps) {
@@ -70,7 +70,7 @@ export function SongRow({ row, set, first, last, troubles, number, plain = false
       <div className="flex justify-end pr-1 [grid-area:badge] lg:justify-start">
         <ChooserButton row={row} title={title} plain={plain || !may.prepare} />
       </div>
-      <div className="-ml-1 min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:ml-0 lg:min-w-[156px] lg:self-center lg:p-0">
+      <div className="-ml-1 min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:ml-0 lg:min-w-36 lg:self-center lg:p-0">
         {neck ? (
           <NeckCells neck={neck} songKey={song?.key ?? ""} naming={naming} changed={row.retuned} />
         ) : null}

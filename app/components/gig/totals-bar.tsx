@@ -74,7 +74,9 @@ function Figure({ value, unit, change, label, short, strong, alarm }: FigureProp
         {shown(value)}
         {unit ? <span className="font-medium"> {unit}</span> : null}
         {change !== null ? (
-          <span className="ml-1 font-medium text-base text-grey-600">{signed(change)}</span>
+          <span className="absolute bottom-0 left-full pl-1 font-medium text-base text-grey-600 leading-6">
+            {signed(change)}
+          </span>
         ) : null}
       </dd>
     </div>

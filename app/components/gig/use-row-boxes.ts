@@ -5,7 +5,7 @@ import type { Row } from "#app/domain/gig/plan.ts";
 export type RowBoxes = { tops: number[]; heights: number[]; bottom: number };
 
 /** Heights in CSS pixels on a laptop, as the rows are styled: for the server's drawing, before anything is measured. */
-const usual = { heading: 36, row: 41, gap: 24, encore: 33, trouble: 20, below: 6 } as const;
+const usual = { heading: 36, row: 40, gap: 24, encore: 33, trouble: 20, below: 6, overlap: 1 } as const;
 
 /**
  * Where rows will stand, reckoned from what they hold. The browser measures it again at once; without JavaScript it is
@@ -17,7 +17,7 @@ export function expectedBoxes(rows: readonly Row[], troubles: ReadonlyMap<string
   let y: number = usual.heading;
   rows.forEach((row, index) => {
     if (index > 0 && rows[index - 1]!.section !== row.section) y += usual.encore;
-    if (row.gap) y += usual.gap;
+    if (row.gap) y += usual.gap - usual.overlap;
     const lines = troubles.get(row.entry.id)?.length ?? 0;
     const height = usual.row + (lines > 0 ? usual.trouble * lines + usual.below : 0);
     tops.push(y);
