@@ -18,7 +18,10 @@ export function CapoMark({ capo, strings }: { capo: Capo; strings: number }) {
   const words = partial ? `Capo ${capo.fret} over strings ${stringRange(capo.strings)}` : `Capo ${capo.fret}`;
   return (
     <span className="inline-flex items-center gap-1 font-display font-semibold" role="img" aria-label={words}>
-      <span aria-hidden="true" className="inline-flex h-5 min-w-5 items-center justify-center rounded-sm bg-brass px-1 text-sm text-white">
+      <span
+        aria-hidden="true"
+        className="inline-flex h-5 min-w-5 items-center justify-center rounded-sm bg-brass px-1 text-sm text-white"
+      >
         {capo.fret}
       </span>
       {partial ? (

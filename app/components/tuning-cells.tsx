@@ -9,14 +9,19 @@ type TuningCellsProps = {
 
 /** The letters of a tuning in cells of one width, so that the same string stands in the same column on each row. */
 export function TuningCells({ letters, changed, spoken }: TuningCellsProps) {
+  const cell = letters.length > 8 ? "min-w-4 text-sm" : letters.length > 6 ? "w-6" : "w-7";
   return (
-    <span className="inline-flex font-display font-semibold tabular" role="img" aria-label={spoken ?? letters.join(" ")}>
+    <span
+      className="inline-flex font-display font-semibold tabular"
+      role="img"
+      aria-label={spoken ?? letters.join(" ")}
+    >
       {letters.map((letter, index) => (
         <span
           // biome-ignore lint/suspicious/noArrayIndexKey: a string is known by its place
           key={index}
           aria-hidden="true"
-          className={`inline-flex h-7 w-7 items-center justify-center ${letter.length > 2 ? "text-xs" : ""} ${changed?.[index] ? "bg-ink text-white" : ""}`}
+          className={`inline-flex h-7 items-center justify-center ${cell} ${letter.length > 2 ? "text-xs" : ""} ${changed?.[index] ? "bg-ink text-white" : ""}`}
         >
           {letter}
         </span>

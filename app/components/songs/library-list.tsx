@@ -1,4 +1,5 @@
 import { Copy, Trash2 } from "lucide-react";
+import { memo } from "react";
 import { Link } from "react-router";
 import { CapoMark } from "#app/components/capo-mark.tsx";
 import { PostButton } from "#app/components/post-button.tsx";
@@ -96,7 +97,10 @@ function SortLink({ label, to, state, className = "" }: SortLinkProps) {
   );
 }
 
-function Row({ row, naming, mayEdit }: { row: LibraryRow; naming: Naming; mayEdit: boolean }) {
+type RowProps = { row: LibraryRow; naming: Naming; mayEdit: boolean };
+
+/** Drawn once: a search that leaves a row where it is does not draw it again. */
+const Row = memo(function Row({ row, naming, mayEdit }: RowProps) {
   const { neck } = row;
   const fifths = neck ? spellingFifths(row.key, neck.open) : 0;
   return (
@@ -109,6 +113,7 @@ function Row({ row, naming, mayEdit }: { row: LibraryRow; naming: Naming; mayEdi
           >
             {row.title}
           </Link>
+          {row.ways > 1 ? <span className="ml-3 text-grey-600 text-sm">{`${row.ways} ways`}</span> : null}
           {row.credit ? (
             <span className="ml-3 text-grey-600 text-sm max-md:hidden xl:hidden">{row.credit}</span>
           ) : null}
@@ -125,12 +130,6 @@ function Row({ row, naming, mayEdit }: { row: LibraryRow; naming: Naming; mayEdi
           {neck?.capos.map((capo) => (
             <CapoMark key={`${capo.fret}-${capo.strings.join()}`} capo={capo} strings={neck.open.length} />
           ))}
-          {row.ways > 1 ? (
-            <span className="text-grey-600 text-sm" title={`${row.ways} ways to play it`}>
-              {`+${row.ways - 1}`}
-              <span className="sr-only"> more ways to play it</span>
-            </span>
-          ) : null}
         </p>
         <p className="font-display font-semibold text-base max-md:hidden">
           {row.key ? (
@@ -169,4 +168,4 @@ function Row({ row, naming, mayEdit }: { row: LibraryRow; naming: Naming; mayEdi
       </div>
     </li>
   );
-}
+});

@@ -67,7 +67,11 @@ function PlayedOn({ way, guitars, naming }: PlayedOnProps) {
     );
   }
   const { can, cannot } = playableOn(way, live, naming);
-  const told = cannot.filter(({ guitar }) => way.guitars === null || way.guitars.includes(guitar.id));
+  const told = cannot.filter(({ guitar }) =>
+    way.guitars === null
+      ? can.length === 0 || guitar.strings === way.open.length
+      : way.guitars.includes(guitar.id),
+  );
   const raised = raisedOn(way.open, can);
   return (
     <div className="flex flex-col gap-2 text-sm">

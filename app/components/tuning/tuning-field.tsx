@@ -3,6 +3,7 @@ import { getInputProps } from "@conform-to/react";
 import type { ReactNode } from "react";
 import { TextField } from "#app/components/ui/field.tsx";
 import { type Naming, stringNameWithOctave } from "#app/domain/music/note-names.ts";
+import { pitchClassOf } from "#app/domain/music/pitch.ts";
 import type { TuningReading } from "#app/domain/music/tuning.ts";
 
 type TuningFieldProps = {
@@ -68,6 +69,8 @@ function BareBQuestion({
   naming: Naming;
 }) {
   if (reading.ambiguous.length === 0 && !field.value) return null;
+  const taken =
+    reading.ambiguous[0] && pitchClassOf(reading.ambiguous[0].options[0]!) === 11 ? "natural" : "flat";
   const [flat, natural] = naming === "german" ? ["B", "H"] : ["B♭", "B"];
   return (
     <fieldset className="flex flex-wrap items-center gap-x-4 border-grey-300 border-l-2 pl-3">
@@ -78,7 +81,7 @@ function BareBQuestion({
             type="radio"
             name={field.name}
             value={meaning}
-            defaultChecked={field.initialValue === meaning}
+            defaultChecked={(field.initialValue ?? taken) === meaning}
             className="size-4 accent-ink"
           />
           {meaning === "flat" ? `${flat} (B flat)` : `${natural} (B natural)`}
