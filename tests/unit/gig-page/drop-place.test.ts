@@ -7,7 +7,7 @@ import {
   slotCount,
   slotOf,
   slotTop,
-} from "#app/components/gig/drop-place.ts";
+} from "#app/components/gig/drag/drop-place.ts";
 
 const gap = 24;
 const row = 40;

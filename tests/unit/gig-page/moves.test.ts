@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { partName, partsOf, placeBeside, placeOf } from "#app/components/gig/moves.ts";
+import { partName, partsOf, placeBeside, placeOf } from "#app/components/gig/sets/moves.ts";
 import { gigOf } from "./gig-of.ts";
 
 describe("moving without dragging", () => {

@@ -1,0 +1,86 @@
+import { useMemo } from "react";
+import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
+import { ribbonWords, StringLine } from "#app/components/gig/ribbons/ribbon.tsx";
+import type { SetPlan } from "#app/domain/gig/plan.ts";
+import { type RibbonLane, ribbonLanes } from "#app/domain/gig/ribbon.ts";
+import type { Guitar } from "#app/domain/repertoire/guitar.ts";
+
+type RibbonThumbnailsProps = { before: SetPlan; after: SetPlan; guitars: Guitar[] };
+
+const width = 104;
+const row = 6;
+const gap = 6;
+const foldedWidth = 12;
+
+/** How the ribbons look now and how they would: a calm set is a page of straight lines. */
+export function RibbonThumbnails({ before, after, guitars }: RibbonThumbnailsProps) {
+  return (
+    <div className="flex gap-4">
+      <Thumbnail plan={before} guitars={guitars} label="Now" />
+      <Thumbnail plan={after} guitars={guitars} label="Then" />
+    </div>
+  );
+}
+
+function Thumbnail({ plan, guitars, label }: { plan: SetPlan; guitars: Guitar[]; label: string }) {
+  const { hand } = usePageTools();
+  const height = plan.rows.length * (row + gap) - gap;
+  const lanes = useMemo(() => {
+    const folded = plan.before.filter(({ guitar }) => guitar.keeps).length;
+    const open = Math.max(1, plan.before.length - folded);
+    return ribbonLanes(plan.rows, guitars, {
+      tops: plan.rows.map((_, index) => index * (row + gap)),
+      heights: plan.rows.map(() => row),
+      bottom: height,
+      laneWidth: Math.max(20, (width - folded * foldedWidth) / open),
+      foldedWidth,
+      hand,
+      labelWidth: 6,
+      labelHeight: 4,
+    });
+  }, [plan, guitars, hand, height]);
+  return (
+    <figure className="flex flex-col gap-1">
+      <figcaption className="font-display font-medium text-grey-600 text-sm">
+        {label}, {Math.round(plan.totals.exposed)} s
+      </figcaption>
+      <svg
+        width={width}
+        height={height}
+        viewBox={`0 0 ${width} ${height}`}
+        role="img"
+        aria-label={`${label}: ${lanes.map(ribbonWords).join(". ")}`}
+      >
+        {lanes.map((lane) => (
+          <Sketch key={lane.guitar.id} lane={lane} />
+        ))}
+      </svg>
+    </figure>
+  );
+}
+
+function Sketch({ lane }: { lane: RibbonLane }) {
+  return (
+    <g transform={`translate(${lane.x} 0)`}>
+      {lane.strings.map((string) => (
+        <StringLine
+          key={string.string}
+          string={{ ...string, weight: string.weight * 0.6 }}
+          folded={lane.folded}
+        />
+      ))}
+      {lane.capos.flatMap((capo) =>
+        capo.runs.map(({ x1, x2 }) => (
+          <rect
+            key={`${capo.y1}/${x1}`}
+            x={x1}
+            y={capo.y1 - 1}
+            width={x2 - x1}
+            height={4}
+            className="fill-brass"
+          />
+        )),
+      )}
+    </g>
+  );
+}
