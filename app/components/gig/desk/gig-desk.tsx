@@ -22,6 +22,7 @@ import { partsOf } from "#app/components/gig/sets/moves.ts";
 import { SetBlock } from "#app/components/gig/sets/set-block.tsx";
 import { SuggestionsDialog, SuggestionsPanel } from "#app/components/gig/suggestions/suggestions-panel.tsx";
 import { useSuggestions } from "#app/components/gig/suggestions/use-suggestions.ts";
+import { Warning } from "#app/components/ui/warning.tsx";
 
 /** Silences dnd-kit's own announcements: what happens is said in our words below. */
 const unsaid = {
@@ -66,15 +67,15 @@ export function GigDesk(props: GigDeskProps) {
           gig={gig}
           plan={plan}
           before={drag ? kept.totals : null}
-          warnings={planWarnings(gig, plan)}
           paper={reader.paper}
           save={save}
           history={tools.may.prepare ? history : null}
           onDetails={tools.may.plan ? () => setDialog({ kind: "details" }) : null}
           onSuggestions={() => setDialog({ kind: "suggestions" })}
         />
-        <div className="min-[85rem]:grid min-[85rem]:grid-cols-[minmax(0,1fr)_264px]">
+        <div className="min-[85rem]:grid min-[85rem]:grid-cols-[minmax(0,1fr)_240px] min-[90rem]:grid-cols-[minmax(0,1fr)_264px]">
           <div ref={list} className="min-w-0 pb-28 lg:px-6 lg:pb-10">
+            <PlanWarnings warnings={planWarnings(gig, plan)} />
             {plan.sets.map((setPlan, index) => (
               <SetBlock
                 key={setPlan.set.id}
@@ -91,7 +92,7 @@ export function GigDesk(props: GigDeskProps) {
           </div>
           <aside
             aria-label="Less retuning"
-            className="sticky top-[81px] hidden h-[calc(100dvh-81px)] overflow-y-auto border-grey-200 border-l bg-white px-5 py-5 min-[85rem]:block"
+            className="sticky top-[81px] hidden h-[calc(100dvh-81px)] overflow-y-auto border-grey-200 border-l bg-white py-5 pr-4 pl-5 min-[85rem]:block"
           >
             <SuggestionsPanel {...panel} />
           </aside>
@@ -128,5 +129,16 @@ export function GigDesk(props: GigDeskProps) {
         {said}
       </p>
     </PageToolsProvider>
+  );
+}
+
+function PlanWarnings({ warnings }: { warnings: string[] }) {
+  if (warnings.length === 0) return null;
+  return (
+    <div className="flex flex-col gap-1 px-4 py-2 lg:flex-row lg:flex-wrap lg:gap-x-6 lg:px-0">
+      {warnings.map((words) => (
+        <Warning key={words}>{words}</Warning>
+      ))}
+    </div>
   );
 }

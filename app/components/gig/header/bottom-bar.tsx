@@ -12,7 +12,7 @@ type BottomBarProps = {
 /** What the thumb reaches on a phone. */
 export function BottomBar({ gigId, paper, pending, onAdd, onSuggestions }: BottomBarProps) {
   return (
-    <div className="fixed inset-x-0 bottom-0 z-30 flex gap-2.5 border-grey-200 border-t bg-white px-3.5 pt-3 pb-[max(0.75rem,env(safe-area-inset-bottom))] lg:hidden print:hidden">
+    <div className="fixed right-0 bottom-0 left-0 md:left-[72px] z-30 flex gap-2.5 border-grey-200 border-t bg-white px-3.5 pt-3 pb-[max(0.75rem,env(safe-area-inset-bottom))] lg:hidden print:hidden">
       {onAdd ? (
         <Button className="min-h-12 flex-1 px-2 text-lg" onClick={onAdd}>
           Add song

@@ -5,7 +5,6 @@ import { SaveState, type SaveStatus } from "#app/components/gig/header/save-stat
 import { SheetsMenu } from "#app/components/gig/header/sheets-menu.tsx";
 import { TotalsBar } from "#app/components/gig/header/totals-bar.tsx";
 import { Button } from "#app/components/ui/button.tsx";
-import { Warning } from "#app/components/ui/warning.tsx";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { entriesOf, setsOf } from "#app/domain/gig/order.ts";
 import type { GigPlan, Totals } from "#app/domain/gig/plan.ts";
@@ -15,7 +14,6 @@ type GigHeaderProps = {
   plan: GigPlan;
   /** Totals before the drag that is going on; null while nothing is dragged. */
   before: Totals | null;
-  warnings: string[];
   paper: "a4" | "letter";
   save: { status: SaveStatus; pending: number };
   /** Undo and redo; null for a reader who may change nothing. */
@@ -29,12 +27,12 @@ type GigHeaderProps = {
  * on a phone the figures do.
  */
 export function GigHeader(props: GigHeaderProps) {
-  const { gig, plan, before, warnings, paper, save, history, onDetails, onSuggestions } = props;
+  const { gig, plan, before, paper, save, history, onDetails, onSuggestions } = props;
   const { clock } = plan;
   const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
   return (
-    <div className="contents lg:sticky lg:top-0 lg:z-20 lg:flex lg:flex-wrap lg:items-center lg:gap-x-7 lg:gap-y-2 lg:border-grey-200 lg:border-b lg:bg-ground lg:px-6 lg:py-2 min-[85rem]:flex-nowrap">
-      <div className="on-ebony flex flex-col bg-ebony px-4 pb-2 text-white lg:min-w-0 lg:bg-transparent lg:p-0 lg:text-ink max-[84.99rem]:lg:w-full">
+    <div className="contents lg:sticky lg:top-0 lg:z-20 lg:flex lg:flex-wrap lg:items-center lg:gap-x-7 lg:gap-y-2 lg:border-grey-200 lg:border-b lg:bg-ground lg:px-6 lg:py-2 min-[85rem]:min-h-[81px] min-[85rem]:flex-nowrap">
+      <div className="on-ebony flex flex-col bg-ebony px-4 pb-2 text-white lg:min-w-0 lg:bg-transparent lg:p-0 lg:text-ink max-[84.99rem]:lg:flex-1">
         <div className="flex min-h-11 items-center gap-1 lg:min-h-0">
           <h1
             className="min-w-0 truncate font-semibold text-2xl leading-tight lg:text-[28px]"
@@ -60,14 +58,14 @@ export function GigHeader(props: GigHeaderProps) {
           ) : null}
         </div>
       </div>
-      <div className="sticky top-0 z-20 border-grey-200 border-b bg-ground px-4 py-2 lg:static lg:border-0 lg:p-0">
+      <div className="sticky top-0 z-20 border-grey-200 border-b bg-ground px-4 py-2 lg:static lg:order-3 lg:w-full lg:border-0 lg:p-0 min-[85rem]:order-2 min-[85rem]:w-auto">
         <TotalsBar
           totals={plan.totals}
           clock={{ seconds: clock.seconds, slot: gig.slot, over: clock.overSlot > 0 || clock.overCurfew > 0 }}
           before={before}
         />
       </div>
-      <div className="hidden items-center justify-end gap-2 lg:ml-auto lg:flex">
+      <div className="order-2 hidden items-center justify-end gap-2 lg:ml-auto lg:flex min-[85rem]:order-3">
         {history ? (
           <>
             <span className="mr-2 text-grey-600">
@@ -81,13 +79,6 @@ export function GigHeader(props: GigHeaderProps) {
         </Button>
         <SheetsMenu gigId={gig.id} paper={paper} pending={save.pending} />
       </div>
-      {warnings.length > 0 ? (
-        <div className="flex flex-col gap-1 px-4 py-2 lg:w-full lg:flex-row lg:flex-wrap lg:gap-x-6 lg:p-0">
-          {warnings.map((words) => (
-            <Warning key={words}>{words}</Warning>
-          ))}
-        </div>
-      ) : null}
     </div>
   );
 }

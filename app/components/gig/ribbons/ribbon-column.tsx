@@ -12,7 +12,7 @@ import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 type RibbonColumnProps = { plan: SetPlan; guitars: Guitar[]; boxes: RowBoxes };
 
 /** Room for all ribbons of a set side by side, and what one takes at least and at most, in CSS pixels. */
-const room = 340;
+const room = 322;
 const narrowest = 104;
 const widest = 176;
 const foldedWidth = 66;

@@ -91,12 +91,12 @@ export function AddSong({ songs, standing, where, onAdd, autoFocus }: AddSongPro
                 <Combobox.Item
                   key={song.id}
                   value={song}
-                  className="flex min-h-11 cursor-default select-none items-baseline gap-3 px-3 py-2 data-[highlighted]:bg-grey-100 lg:min-h-9"
+                  className="grid min-h-11 cursor-default select-none grid-cols-[minmax(0,1fr)_auto] items-baseline gap-x-3 px-3 py-2 data-[highlighted]:bg-grey-100 sm:grid-cols-[minmax(0,1fr)_auto_auto] lg:min-h-9"
                 >
-                  <span className="min-w-0 flex-1 truncate font-display font-semibold text-lg leading-tight">
+                  <span className="min-w-0 truncate font-display font-semibold text-lg leading-tight">
                     {song.title}
                   </span>
-                  <span className="shrink-0 font-display text-base text-grey-600">
+                  <span className="font-display text-base text-grey-600 max-sm:order-last">
                     {standing.has(song.id) ? "in this gig, " : ""}
                     {neckWords(song, naming)}
                   </span>

@@ -22,6 +22,7 @@ type SetSuggestionsProps = {
   alone: boolean;
   repertoire: Repertoire;
   rungs: RungState[];
+  begun: boolean;
 };
 
 /** A rung with what it would change and gain. */
@@ -34,7 +35,7 @@ function heldWords({ set, rows }: SetPlan): string {
 }
 
 /** Suggestions for one set. Folded to one line where nothing is gained. */
-export function SetSuggestionsBlock({ gig, plan, alone, repertoire, rungs }: SetSuggestionsProps) {
+export function SetSuggestionsBlock({ gig, plan, alone, repertoire, rungs, begun }: SetSuggestionsProps) {
   const { naming } = usePageTools();
   const [opened, setOpened] = useState<Rung | "none" | null>(null);
   const found: Described[] = rungs.flatMap(({ rung, answer, done }) =>
@@ -68,7 +69,7 @@ export function SetSuggestionsBlock({ gig, plan, alone, repertoire, rungs }: Set
           onOpen={() => setOpened(open === rung.rung ? "none" : rung.rung)}
         />
       ))}
-      {working ? (
+      {working && begun ? (
         <p className="border-grey-200 border-t py-2 text-grey-600">Looking for less retuning</p>
       ) : null}
       {!working && gaining.length === 0 && reasons.length === 0 ? <NothingLess found={found} /> : null}

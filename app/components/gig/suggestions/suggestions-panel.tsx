@@ -15,7 +15,7 @@ type SuggestionsPanelProps = {
 
 /** Orders and guitars that need less retuning, set by set. */
 export function SuggestionsPanel({ gig, plan, repertoire, suggestions }: SuggestionsPanelProps) {
-  const { sets, failed } = suggestions;
+  const { sets, begun, failed } = suggestions;
   return (
     <div className="flex flex-col gap-5">
       {failed ? <Warning>{failed}</Warning> : null}
@@ -37,6 +37,7 @@ export function SuggestionsPanel({ gig, plan, repertoire, suggestions }: Suggest
             alone={plan.sets.length === 1}
             repertoire={repertoire}
             rungs={found.rungs}
+            begun={begun && failed === null}
           />
         ) : null;
       })}

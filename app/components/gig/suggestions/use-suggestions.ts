@@ -13,6 +13,8 @@ export type SetSuggestions = { setId: string; rungs: RungState[] };
 
 export type Suggestions = {
   sets: SetSuggestions[];
+  /** The search has begun: not on the server, nor without JavaScript. */
+  begun: boolean;
   /** What went wrong with the planner itself, in words; null where nothing did. */
   failed: string | null;
 };
@@ -64,6 +66,7 @@ function usePlanner(onTold: (told: PlannerTold) => void, onFail: () => void) {
 export function useSuggestions(plan: GigPlan): Suggestions {
   const jobs = useMemo(() => jobsOf(plan), [plan]);
   const [known, setKnown] = useState<Known>(new Map());
+  const [begun, setBegun] = useState(false);
   const [failed, setFailed] = useState<string | null>(null);
   const run = useRef(0);
   const knownNow = useRef(known);
@@ -84,6 +87,7 @@ export function useSuggestions(plan: GigPlan): Suggestions {
   // biome-ignore lint/correctness/useExhaustiveDependencies: the search begins anew when the problems change, not their objects
   useEffect(() => {
     run.current += 1;
+    setBegun(true);
     const stop: PlannerAsk = { run: run.current, jobs: [], effort };
     worker.current?.postMessage(stop);
     const timer = setTimeout(() => {
@@ -98,7 +102,7 @@ export function useSuggestions(plan: GigPlan): Suggestions {
     return () => clearTimeout(timer);
   }, [asked, worker]);
   const sets = useMemo(() => suggestionsOf(jobs, known), [jobs, known]);
-  return { sets, failed };
+  return { sets, begun, failed };
 }
 
 function suggestionsOf(jobs: readonly Job[], known: Known): SetSuggestions[] {
