@@ -10,7 +10,7 @@ export function lockClaims(locks: LockManager): Claims {
     claim: (name) =>
       new Promise((resolve, reject) => {
         locks
-          .request(name, { ifAvailable: true }, (lock) => {
+          .request(`stillpeg.${name}`, { ifAvailable: true }, (lock) => {
             if (!lock) {
               resolve(null);
               return;
