@@ -1,0 +1,15 @@
+import { pageBench } from "./page-bench.ts";
+import { planBench } from "./plan-bench.ts";
+import { sheetBench } from "./sheet-bench.ts";
+import { table } from "./timing.ts";
+
+/** `npm run bench`: figures with a ratio each, in one run on one machine. Every second column is a multiple of the table's × 1.00. */
+async function bench(): Promise<void> {
+  const { pages, drag } = await pageBench();
+  console.log(table("\nPages, from request to last byte", pages));
+  console.log(table("\nRe-scoring while dragging", drag));
+  console.log(table("\nStage sheet as PDF", await sheetBench()));
+  for (const { title, rows } of await planBench()) console.log(table(`\n${title}`, rows));
+}
+
+await bench();
