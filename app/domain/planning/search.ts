@@ -1,60 +1,142 @@
-import type { Answer, FoundAnswer } from "#app/domain/planning/answer.ts";
+import type { Answer, FoundAnswer, Reason } from "#app/domain/planning/answer.ts";
 import { answerOf, type NumberedPlan } from "#app/domain/planning/answer-of.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
-import { modelOf } from "#app/domain/planning/model.ts";
-import { compileRules } from "#app/domain/planning/order-rules.ts";
+import { fixedOrderSpace, planInOrder } from "#app/domain/planning/fixed-order.ts";
+import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
+import { improve } from "#app/domain/planning/local-search.ts";
+import { type Model, modelOf } from "#app/domain/planning/model.ts";
+import { orderTest } from "#app/domain/planning/order-holds.ts";
+import { compileRules, type OrderRules } from "#app/domain/planning/order-rules.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
+import { orderThatHolds, ruleConflict } from "#app/domain/planning/rule-conflict.ts";
 import { beam } from "#app/domain/planning/search/beam.ts";
 import { BestFirst } from "#app/domain/planning/search/best-first.ts";
-import { setSpace } from "#app/domain/planning/set-space.ts";
-import { songsWithoutGuitar } from "#app/domain/planning/why-infeasible.ts";
+import { seededRandom } from "#app/domain/planning/search/random.ts";
+import { type SetSpace, setSpace } from "#app/domain/planning/set-space.ts";
+import { reasonsAtOnce } from "#app/domain/planning/why-infeasible.ts";
 
 /** The best answer so far (`null`: none yet), what no plan can undercut, and the effort spent. */
 export type Progress = { answer: FoundAnswer | null; bound: number; effort: number };
 
-/** Enough for a set of an evening: about a second. */
+/** Enough for a set of an evening: about a second. Counted in states looked at; twenty small changes count as one. */
 export const usualEffort = 200_000;
 
-/** Sets that are always solved to the end, whatever effort is asked. */
+/** Sets up to this size, and sets whose order stays and that have no tech, are solved to the end at any effort. */
 const SMALL_SET = 9;
-const UNLIMITED = 20_000_000;
-const PORTION = 2_000;
-const STATE_MEMORY = 200_000_000;
+const TO_THE_END = 50_000_000;
 
-/** Searches for the plan with the least total and yields what it knows from time to time. The last word is returned. */
+const PORTION = 1_000;
+const STATE_MEMORY = 180_000_000;
+const CHANGES_PER_EFFORT = 20;
+const ORDER_EFFORT = 20_000;
+const CONFLICT_EFFORT = 5_000;
+
+type Run = {
+  problem: Problem;
+  model: Model;
+  rules: OrderRules;
+  space: SetSpace;
+  best: FoundAnswer | null;
+  plan: NumberedPlan | null;
+  floor: number;
+  spent: number;
+};
+
+/** Takes a plan where it is better than what is known. */
+function offer(run: Run, plan: NumberedPlan): void {
+  const answer = answerOf(run.problem, plan, run.floor);
+  if (run.best && run.best.total <= answer.total) return;
+  run.best = answer;
+  run.plan = plan;
+}
+
+function progress(run: Run): Progress {
+  const answer = run.plan ? answerOf(run.problem, run.plan, run.floor) : null;
+  return { answer, bound: answer ? answer.bound : run.floor, effort: run.spent };
+}
+
+/** The present order if it holds, and what a narrow beam finds. */
+function* firstPlans(run: Run): Generator<Progress, void> {
+  const { model, rules, problem, space } = run;
+  const present = Int32Array.from({ length: model.songs }, (_, song) => song);
+  if (orderTest(rules, problem.maxMoved)(present)) {
+    const { plan, spent } = planInOrder(model, [...present], PORTION);
+    run.spent += spent;
+    if (plan) offer(run, plan);
+    yield progress(run);
+  }
+  const narrow = beam(space, 16);
+  run.spent += narrow.expanded;
+  if (narrow.way) offer(run, space.planOf(narrow.way.moves));
+  yield progress(run);
+}
+
+/** A plan in any order that holds, where nothing better turned up; or why there is no such order. */
+function anyPlan(run: Run): Reason[] | null {
+  const songs = orderThatHolds(run.problem, ORDER_EFFORT);
+  if (songs === null) return [ruleConflict(run.problem, CONFLICT_EFFORT)];
+  if (songs === undefined) return null;
+  const { plan, spent } = planInOrder(run.model, songs, PORTION);
+  run.spent += spent;
+  if (plan) offer(run, plan);
+  return null;
+}
+
+function* prove(run: Run, effort: number): Generator<Progress, void> {
+  const { space, model, rules } = run;
+  const proof = new BestFirst(space, Math.floor(STATE_MEMORY / (60 + 6 * space.width)));
+  const random = seededRandom(1);
+  const before = run.spent;
+  let changes = 0;
+  let nextChanges = 2_000;
+  while (!proof.exhausted && (run.spent < effort || !run.plan)) {
+    if (run.best) proof.setLimit(run.best.total * (1 - 5e-10));
+    proof.run(PORTION);
+    if (proof.found) offer(run, space.planOf(proof.found.moves));
+    run.spent = before + proof.expanded + changes / CHANGES_PER_EFFORT;
+    run.floor = Math.max(run.floor, proof.floor());
+    if (!proof.exhausted && run.plan && proof.expanded >= nextChanges && model.songs > SMALL_SET) {
+      const steps = 10_000;
+      offer(run, improve(model, rules, run.plan, { random, steps }));
+      changes += steps;
+      nextChanges *= 2;
+    }
+    yield progress(run);
+  }
+  run.floor = Math.max(run.floor, proof.floor());
+}
+
+/**
+ * Searches for the plan with the least total, and yields what it knows from time to time. Whenever it is left, the last
+ * answer is valid and the last bound true; what it returns is the last word. The same problem and effort always go the
+ * same way.
+ *
+ * @param effort how much to do, see `usualEffort`
+ */
 export function* search(
   problem: Problem,
-  { effort: asked = usualEffort }: { effort?: number } = {},
+  { effort = usualEffort }: { effort?: number } = {},
 ): Generator<Progress, Answer> {
-  const model = modelOf(problem);
+  if (problem.songs.length === 0) return answerOf(problem, { songs: [], options: [] }, 0);
+  const everyWay = modelOf(problem);
   const compiled = compileRules(problem);
-  const noGuitar = songsWithoutGuitar(model);
-  const why = [...noGuitar, ...(compiled.ok ? [] : compiled.why)];
+  const why = reasonsAtOnce(everyWay, compiled);
   if (why.length > 0 || !compiled.ok) return { status: "infeasible", why };
-  const small = model.songs <= SMALL_SET || (problem.maxMoved === 0 && !model.tech);
-  const effort = small ? Math.max(asked, UNLIMITED) : asked;
 
-  const space = setSpace(model, compiled.rules, (layout) => partitionBound(model, compiled.rules, layout));
-  const room = Math.floor(STATE_MEMORY / (60 + 6 * space.width));
-  let best: NumberedPlan | null = null;
-  let answer: FoundAnswer | null = null;
-  const proof = new BestFirst(space, room);
-  const first = beam(space, 30);
-  if (first.way) {
-    best = space.planOf(first.way.moves);
-    answer = answerOf(problem, best, 0);
-    proof.setLimit(answer.total);
+  const model = withoutRetuningKept(everyWay);
+  const { rules } = compiled;
+  const fixed = problem.maxMoved === 0;
+  const space = fixed
+    ? fixedOrderSpace(model, rules)
+    : setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
+  const run: Run = { problem, model, rules, space, best: null, plan: null, floor: 0, spent: 0 };
+  yield* firstPlans(run);
+  if (!run.plan) {
+    const conflict = anyPlan(run);
+    if (conflict) return { status: "infeasible", why: conflict };
   }
-  let spent = first.expanded;
-  while (!proof.exhausted && spent < effort) {
-    proof.run(Math.min(PORTION, effort - spent));
-    spent = first.expanded + proof.expanded;
-    if (proof.found) {
-      best = space.planOf(proof.found.moves);
-      answer = answerOf(problem, best, proof.floor());
-    }
-    yield { answer, bound: proof.floor(), effort: spent };
-  }
-  if (best) return answerOf(problem, best, proof.floor());
-  return { status: "infeasible", why: [{ code: "rules", songs: [], message: "No order keeps all rules." }] };
+  const toTheEnd = model.songs <= SMALL_SET || (fixed && !model.tech);
+  yield* prove(run, toTheEnd ? Math.max(effort, TO_THE_END) : effort);
+  if (run.plan) return answerOf(problem, run.plan, run.floor);
+  return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_EFFORT)] };
 }

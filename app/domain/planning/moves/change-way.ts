@@ -1,0 +1,26 @@
+import type { Draft, Move } from "#app/domain/planning/moves/draft.ts";
+import { below, type Random } from "#app/domain/planning/search/random.ts";
+
+function anotherWay({ ways, optionCounts }: Draft, song: number, random: Random): boolean {
+  const count = optionCounts[song]!;
+  if (count < 2) return false;
+  ways[song] = (ways[song]! + 1 + below(random, count - 1)) % count;
+  return true;
+}
+
+/** One song is played on another guitar or in another of its ways. */
+export const changeWay: Move = (draft, random) =>
+  anotherWay(draft, draft.songs[below(random, draft.songs.length)]!, random);
+
+/** One song is played in another way and put in somewhere else. */
+export const changeWayAndPlace: Move = (draft, random) => {
+  const { songs } = draft;
+  const from = below(random, songs.length);
+  const song = songs[from]!;
+  const to = below(random, songs.length);
+  if (!anotherWay(draft, song, random)) return false;
+  if (to > from) songs.copyWithin(from, from + 1, to + 1);
+  else songs.copyWithin(to + 1, to, from);
+  songs[to] = song;
+  return true;
+};
