@@ -1,6 +1,5 @@
 import { PassThrough } from "node:stream";
-import { createReadableStreamFromReadable } from "@react-router/node";
-import { isbot } from "isbot";
+import { text } from "node:stream/consumers";
 import { renderToPipeableStream } from "react-dom/server";
 import {
   type EntryContext,
@@ -14,7 +13,10 @@ import { nonceContext } from "#app/services/nonce.server.ts";
 
 export const streamTimeout = 5_000;
 
-/** Renders a page as a stream; readers that do not wait for the rest, as crawlers do not, get all of it at once. */
+/**
+ * Renders a page whole: nothing on a page waits for anything but its loader, and one piece compresses and travels
+ * better than many.
+ */
 export default function handleRequest(
   request: Request,
   status: number,
@@ -27,33 +29,21 @@ export default function handleRequest(
   if (status === 503) headers.set("Retry-After", "3");
   if (request.method === "HEAD") return new Response(null, { status, headers });
   const nonce = loadContext.get(nonceContext) ?? undefined;
-  const whole = isbot(request.headers.get("User-Agent") ?? "");
   return new Promise((resolve, reject) => {
-    let answered = false;
-    const send = () => {
-      answered = true;
-      const body = new PassThrough({
-        final(done) {
-          clearTimeout(timer);
-          done();
-        },
-      });
-      pipe(body);
-      resolve(new Response(createReadableStreamFromReadable(body), { status, headers }));
-    };
     const { pipe, abort } = renderToPipeableStream(
       <NonceProvider value={nonce}>
         <ServerRouter context={routerContext} url={request.url} nonce={nonce} />
       </NonceProvider>,
       {
         nonce,
-        [whole ? "onAllReady" : "onShellReady"]: send,
-        onShellError: reject,
-        onError(error) {
-          // Before the shell is out, the error reaches handleError by itself.
-          if (answered && !request.signal.aborted)
-            log.error({ err: error }, "a page could not be rendered whole");
+        onAllReady() {
+          clearTimeout(timer);
+          text(pipe(new PassThrough())).then(
+            (page) => resolve(new Response(page, { status, headers })),
+            reject,
+          );
         },
+        onShellError: reject,
       },
     );
     const timer = setTimeout(abort, streamTimeout + 1_000);
