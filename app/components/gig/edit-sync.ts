@@ -114,7 +114,7 @@ export function gigSync(given: {
     const now = browser;
     if (!now || windowId === null || asking) return;
     await adopt(now, windowId);
-    if (asking) return;
+    if (asking || takeBatches(queue)) return pump();
     asking = true;
     const reply = await now.transport.news(queue.base.revision);
     asking = false;

@@ -6,6 +6,7 @@ import { zonesHere } from "#app/components/gig/zones.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { Dialog } from "#app/components/ui/dialog.tsx";
 import type { Edit } from "#app/domain/gig/edit.ts";
+import { gigWords } from "#app/domain/gig/edit-words.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import {
   type GigFields as GigFieldValues,
@@ -41,7 +42,7 @@ export function GigDetailsForm({ gig, edit, onDone }: GigDetailsFormProps) {
       event.preventDefault();
       if (submission?.status !== "success") return;
       const edits = gigFieldEdits(opened, submission.value);
-      if (edits.length > 0) edit(edits, "Change gig details", opened.revision);
+      if (edits.length > 0) edit(edits, labelOf(edits), opened.revision);
       onDone();
     },
   });
@@ -50,6 +51,12 @@ export function GigDetailsForm({ gig, edit, onDone }: GigDetailsFormProps) {
       <GigFields form={form} fields={fields} zones={zonesHere()} />
     </form>
   );
+}
+
+function labelOf([first, ...more]: readonly Edit[]): string {
+  return first?.kind === "gig.set" && more.length === 0
+    ? `Change ${gigWords[first.field]}`
+    : "Change gig details";
 }
 
 type GigDetailsDialogProps = Omit<GigDetailsFormProps, "onDone"> & { onClose: () => void };

@@ -1,5 +1,5 @@
 import type { Clash } from "#app/domain/gig/conflict.ts";
-import type { Edit, LoggedBatch } from "#app/domain/gig/edit.ts";
+import type { Edit, GigField, LoggedBatch } from "#app/domain/gig/edit.ts";
 import type { Entry, Gig, GigTimes, Pinned, Rule } from "#app/domain/gig/gig.ts";
 import { timeKeys, timeNames } from "#app/domain/gig/gig-form.ts";
 import { dateWords, localTime } from "#app/domain/gig/local-time.ts";
@@ -72,7 +72,8 @@ function setName({ gig }: Spoken, setId: string): string {
   return gig.sets.find((set) => set.id === setId)?.name ?? "a set";
 }
 
-const gigWords: Record<string, string> = {
+/** What the fields of a gig are called in the middle of a sentence. */
+export const gigWords: Readonly<Record<string, string>> & Readonly<Record<GigField, string>> = {
   name: "the name of the gig",
   venue: "the venue",
   startsAt: "the start",
