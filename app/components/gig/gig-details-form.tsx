@@ -48,7 +48,7 @@ export function GigDetailsForm({ gig, edit, onDone }: GigDetailsFormProps) {
   });
   return (
     <form {...getFormProps(form)} className="flex flex-col gap-4">
-      <GigFields form={form} fields={fields} zones={zonesHere()} />
+      <GigFields fields={fields} zones={zonesHere()} />
     </form>
   );
 }

@@ -1,4 +1,4 @@
-import type { FieldMetadata, FormMetadata } from "@conform-to/react";
+import type { FieldMetadata } from "@conform-to/react";
 import type { ComponentProps, ReactNode } from "react";
 import { GigTimesFields } from "#app/components/gig/gig-times-fields.tsx";
 import { zonesByRegion } from "#app/components/gig/zones.ts";
@@ -12,8 +12,6 @@ export type GigFormFields = {
 };
 
 type GigFieldsProps = {
-  // biome-ignore lint/suspicious/noExplicitAny: the form of a new gig and that of a kept one have this in common
-  form: Pick<FormMetadata<any>, "update" | "id">;
   fields: GigFormFields;
   zones: readonly string[];
   /** More fields, after the slot and the curfew. */
@@ -21,7 +19,7 @@ type GigFieldsProps = {
 };
 
 /** A gig's details: what and where, when, for how long, with whom, and the times of work and talk. */
-export function GigFields({ form, fields, zones, children }: GigFieldsProps) {
+export function GigFields({ fields, zones, children }: GigFieldsProps) {
   return (
     <>
       <Line field={fields.name} label="Name" required maxLength={gigFieldLimits.name} />
@@ -37,11 +35,7 @@ export function GigFields({ form, fields, zones, children }: GigFieldsProps) {
       </div>
       {children}
       <CrewField field={fields.crew} />
-      <GigTimesFields
-        form={form}
-        times={fields.times}
-        crew={fields.crew.value === "tech" ? "tech" : "alone"}
-      />
+      <GigTimesFields times={fields.times} crew={fields.crew.value === "tech" ? "tech" : "alone"} />
       <TextArea
         key={fields.notes.key}
         id={fields.notes.id}

@@ -1,5 +1,6 @@
-import type { FieldMetadata, FormMetadata } from "@conform-to/react";
+import type { FieldMetadata } from "@conform-to/react";
 import { ChevronRight } from "lucide-react";
+import { useEffect, useRef, useState } from "react";
 import { Button } from "#app/components/ui/button.tsx";
 import { describedBy, fieldIds } from "#app/components/ui/field.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
@@ -7,8 +8,6 @@ import { type Crew, defaultTimes, type GigTimes } from "#app/domain/gig/gig.ts";
 import { type GigFormInput, timeKeys, timeNames } from "#app/domain/gig/gig-form.ts";
 
 type GigTimesFieldsProps = {
-  // biome-ignore lint/suspicious/noExplicitAny: any form with these fields has what this needs
-  form: Pick<FormMetadata<any>, "update">;
   times: FieldMetadata<GigFormInput["times"]>;
   crew: Crew;
 };
@@ -19,13 +18,20 @@ const groups: { title: string; keys: readonly (keyof GigTimes)[] }[] = [
 ];
 
 /** The seconds that work takes and talk covers; folded away, since the usual ones do for most gigs. */
-export function GigTimesFields({ form, times, crew }: GigTimesFieldsProps) {
+export function GigTimesFields({ times, crew }: GigTimesFieldsProps) {
   const fields = times.getFieldset();
   const own = timeKeys.filter((key) => (fields[key].value ?? "") !== "").length;
   const wrong = timeKeys.some((key) => fields[key].errors?.length);
+  const details = useRef<HTMLDetailsElement>(null);
+  const [wrongAtFirst] = useState(wrong);
+  const [live, setLive] = useState(false);
+  useEffect(() => setLive(true), []);
+  useEffect(() => {
+    if (wrong && details.current) details.current.open = true;
+  }, [wrong]);
   const words = own === 0 ? "usual" : own === 1 ? "1 of your own" : `${own} of your own`;
   return (
-    <details className="group border-grey-200 border-y" open={wrong || undefined}>
+    <details className="group border-grey-200 border-y" ref={details} open={wrongAtFirst || undefined}>
       <summary className="flex min-h-11 flex-wrap items-center gap-x-2 font-display font-semibold">
         <ChevronRight size={16} aria-hidden="true" className="shrink-0 group-open:rotate-90" />
         Times
@@ -48,20 +54,22 @@ export function GigTimesFields({ form, times, crew }: GigTimesFieldsProps) {
             ))}
           </fieldset>
         ))}
-        <Button
-          small
-          className="self-start"
-          {...form.update.getButtonProps({
-            name: times.name,
-            value: Object.fromEntries(timeKeys.map((key) => [key, ""])),
-          })}
-          disabled={own === 0}
-        >
-          Reset to usual times
-        </Button>
+        {live ? (
+          <Button small className="self-start" disabled={own === 0} onClick={() => empty(details.current)}>
+            Reset to usual times
+          </Button>
+        ) : null}
       </div>
     </details>
   );
+}
+
+/** Empties every field in here as if a person had. */
+function empty(fields: HTMLElement | null): void {
+  for (const input of fields?.querySelectorAll("input") ?? []) {
+    input.value = "";
+    input.dispatchEvent(new Event("input", { bubbles: true }));
+  }
 }
 
 type SecondsProps = { label: string; usual: number; field: FieldMetadata<string | undefined> };

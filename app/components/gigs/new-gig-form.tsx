@@ -44,7 +44,7 @@ export function NewGigForm({ zone, zones, lastResult }: NewGigFormProps) {
     <Form method="post" {...getFormProps(form)} {...watch} className="pb-20 md:pb-0">
       <UnsavedGuard unsaved={unsaved && !saving} />
       <div className="flex max-w-2xl flex-col gap-4 px-4 py-5 md:px-6">
-        <GigFields form={form} fields={fields} zones={zones}>
+        <GigFields fields={fields} zones={zones}>
           <div className="grid gap-4 sm:grid-cols-2">
             <Line field={fields.sets} label="Sets" inputMode="numeric" />
             <Line field={fields.interval} label="Interval between sets, minutes" inputMode="numeric" />
