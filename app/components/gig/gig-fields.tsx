@@ -24,12 +24,12 @@ export function GigFields({ fields, zones, children }: GigFieldsProps) {
     <>
       <Line field={fields.name} label="Name" required maxLength={gigFieldLimits.name} />
       <Line field={fields.venue} label="Venue" maxLength={gigFieldLimits.venue} />
-      <div className="grid gap-4 sm:grid-cols-[minmax(0,10fr)_minmax(0,9fr)_minmax(0,12fr)]">
+      <div className="grid grid-cols-2 gap-4 sm:grid-cols-[minmax(0,10fr)_minmax(0,9fr)_minmax(0,12fr)]">
         <Line field={fields.date} label="Date" type="date" required />
         <Line field={fields.time} label="Starts at" type="time" required />
         <ZoneField field={fields.zone} zones={zones} />
       </div>
-      <div className="grid gap-4 sm:grid-cols-2">
+      <div className="grid grid-cols-2 gap-4">
         <Line field={fields.slot} label="Slot, minutes" hint="Empty: no slot." inputMode="numeric" />
         <Line field={fields.curfew} label="Curfew" hint="Empty: none." type="time" />
       </div>
@@ -81,6 +81,7 @@ function ZoneField({ field, zones }: { field: GigFormFields["zone"]; zones: read
       defaultValue={chosen}
       errors={field.errors}
       label="Time zone"
+      wrapClass="max-sm:col-span-2"
     >
       {zonesByRegion(all).map(([region, names]) => (
         <optgroup key={region} label={region}>

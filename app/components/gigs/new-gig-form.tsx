@@ -45,9 +45,9 @@ export function NewGigForm({ zone, zones, lastResult }: NewGigFormProps) {
       <UnsavedGuard unsaved={unsaved && !saving} />
       <div className="flex max-w-2xl flex-col gap-4 px-4 py-5 md:px-6">
         <GigFields fields={fields} zones={zones}>
-          <div className="grid gap-4 sm:grid-cols-2">
+          <div className="grid grid-cols-2 gap-4">
             <Line field={fields.sets} label="Sets" inputMode="numeric" />
-            <Line field={fields.interval} label="Interval between sets, minutes" inputMode="numeric" />
+            <Line field={fields.interval} label="Interval, minutes" inputMode="numeric" />
           </div>
         </GigFields>
       </div>

@@ -15,7 +15,15 @@ type DialogProps = {
 };
 
 /** A modal dialog; on a phone it fills the width and stands at the bottom. */
-export function Dialog({ open, onOpenChange, title, children, actions, closeLabel = "Close", wide = false }: DialogProps) {
+export function Dialog({
+  open,
+  onOpenChange,
+  title,
+  children,
+  actions,
+  closeLabel = "Close",
+  wide = false,
+}: DialogProps) {
   return (
     <BaseDialog.Root open={open} onOpenChange={onOpenChange}>
       <BaseDialog.Portal>
@@ -25,7 +33,7 @@ export function Dialog({ open, onOpenChange, title, children, actions, closeLabe
         >
           <BaseDialog.Title className="font-bold font-display text-2xl">{title}</BaseDialog.Title>
           <div className="flex flex-col gap-4">{children}</div>
-          <div className="flex flex-wrap justify-end gap-2">
+          <div className="-mx-5 -mb-5 sticky -bottom-5 flex flex-wrap justify-end gap-2 border-grey-200 border-t bg-white px-5 py-4">
             {actions}
             <BaseDialog.Close className={buttonClass("plain")}>{closeLabel}</BaseDialog.Close>
           </div>
