@@ -1,5 +1,6 @@
 import { type BadProblem, bad } from "#app/domain/planning/bad-problem.ts";
 import { parseProblem } from "#app/domain/planning/problem.ts";
+import { usualEffort } from "#app/domain/planning/search.ts";
 import { methodNotAllowed } from "#app/services/api-replies.server.ts";
 import { requireApiMember } from "#app/services/member.server.ts";
 import { solveInPool } from "#app/services/planner-pool.server.ts";
@@ -7,9 +8,8 @@ import { readJsonBody } from "#app/services/request-body.server.ts";
 import { QueueFull } from "#app/services/worker-pool.server.ts";
 import type { Route } from "./+types/plan";
 
-/** What the search may do where the request does not say: enough for a set of an evening. */
-const usualEffort = 200_000;
-const mostEffort = 10_000_000;
+/** More than this is more than the pool gives one plan time for. */
+const mostEffort = 100_000_000;
 
 export function loader({ context }: Route.LoaderArgs) {
   requireApiMember(context);
