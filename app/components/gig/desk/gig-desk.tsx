@@ -75,6 +75,9 @@ export function GigDesk(props: GigDeskProps) {
         />
         <div className="min-[85rem]:grid min-[85rem]:grid-cols-[minmax(0,1fr)_240px] min-[90rem]:grid-cols-[minmax(0,1fr)_264px]">
           <div ref={list} className="min-w-0 pb-28 lg:px-6 lg:pb-10">
+            <div role="alert">
+              {edits.notice ? <Warning className="px-4 py-2 lg:px-0">{edits.notice}</Warning> : null}
+            </div>
             <PlanWarnings warnings={planWarnings(gig, plan)} />
             {plan.sets.map((setPlan, index) => (
               <SetBlock

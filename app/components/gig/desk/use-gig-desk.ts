@@ -5,7 +5,7 @@ import { useOthersTold } from "#app/components/gig/desk/use-others-told.ts";
 import { type Latest, usePageToolsValue } from "#app/components/gig/desk/use-page-tools.ts";
 import type { Part } from "#app/components/gig/sets/moves.ts";
 import { newEntries } from "#app/components/gig/sets/new-entry.ts";
-import { useGigEdits } from "#app/components/gig/use-gig-edits.ts";
+import { useGigEdits } from "#app/components/gig/edits/use-gig-edits.ts";
 import { useToasts } from "#app/components/ui/toasts.tsx";
 import type { Edit, LoggedBatch } from "#app/domain/gig/edit.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";

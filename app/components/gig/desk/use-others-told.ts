@@ -1,5 +1,5 @@
 import { useEffect, useRef } from "react";
-import type { OthersChange } from "#app/components/gig/edit-queue.ts";
+import type { OthersChange } from "#app/components/gig/edits/edit-queue.ts";
 import { useToasts } from "#app/components/ui/toasts.tsx";
 
 /** Tells what others changed in this gig while the page is open, each change once. */

@@ -1,4 +1,4 @@
-import type { Trouble } from "#app/components/gig/edit-queue.ts";
+import type { Trouble } from "#app/components/gig/edits/edit-queue.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { Dialog } from "#app/components/ui/dialog.tsx";
 

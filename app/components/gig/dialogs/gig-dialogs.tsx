@@ -16,7 +16,7 @@ const PasteDialog = lazy(async () => {
   return { default: PasteDialog };
 });
 const GigDetailsDialog = lazy(async () => {
-  const { GigDetailsDialog } = await import("#app/components/gig/gig-details-form.tsx");
+  const { GigDetailsDialog } = await import("#app/components/gig/details/gig-details-form.tsx");
   return { default: GigDetailsDialog };
 });
 

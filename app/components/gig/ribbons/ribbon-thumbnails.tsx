@@ -7,7 +7,7 @@ import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 
 type RibbonThumbnailsProps = { before: SetPlan; after: SetPlan; guitars: Guitar[] };
 
-const width = 104;
+const width = 94;
 const row = 6;
 const gap = 6;
 const foldedWidth = 12;
@@ -15,7 +15,7 @@ const foldedWidth = 12;
 /** How the ribbons look now and how they would: a calm set is a page of straight lines. */
 export function RibbonThumbnails({ before, after, guitars }: RibbonThumbnailsProps) {
   return (
-    <div className="flex gap-4">
+    <div className="flex gap-3">
       <Thumbnail plan={before} guitars={guitars} label="Now" />
       <Thumbnail plan={after} guitars={guitars} label="Then" />
     </div>

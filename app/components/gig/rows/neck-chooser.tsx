@@ -1,4 +1,5 @@
 import { Popover } from "@base-ui/react/popover";
+import { memo } from "react";
 import { CapoMark } from "#app/components/capo-mark.tsx";
 import { type EntryPayload, usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { NeckCells } from "#app/components/gig/rows/neck-cells.tsx";
@@ -15,7 +16,7 @@ import type { Song, SongNeck } from "#app/domain/repertoire/song.ts";
 type NeckChooserProps = { gig: Gig; repertoire: Repertoire };
 
 /** Guitar and way to play one song in this set: every way of the song, and the guitars that can play it so. */
-export function NeckChooser({ gig, repertoire }: NeckChooserProps) {
+export const NeckChooser = memo(function NeckChooser({ gig, repertoire }: NeckChooserProps) {
   const { chooser } = usePageTools();
   return (
     <Popover.Root handle={chooser}>
@@ -30,7 +31,7 @@ export function NeckChooser({ gig, repertoire }: NeckChooserProps) {
       }}
     </Popover.Root>
   );
-}
+});
 
 /** What a choice writes, leaving alone what already stands so. */
 function choiceEdits(entry: Entry, guitarId: string, neckId: string): Edit[] {

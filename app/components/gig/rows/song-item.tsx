@@ -2,6 +2,7 @@ import { useDraggable } from "@dnd-kit/core";
 import { memo } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { GapRow } from "#app/components/gig/rows/gap-row.tsx";
+import { sameRow, sameWords } from "#app/components/gig/rows/same-row.ts";
 import { SongRow, titleOfRow } from "#app/components/gig/rows/song-row.tsx";
 import type { GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
@@ -14,8 +15,18 @@ type SongItemProps = {
   troubles: readonly string[];
 };
 
-/** A song with the gap that leads into it. The number is what it is dragged by. */
-export const SongItem = memo(function SongItem({ row, set, first, last, troubles }: SongItemProps) {
+/** A song with the gap that leads into it. The number is what it is dragged by. Drawn again only where it changed. */
+export const SongItem = memo(
+  SongItemOnce,
+  (before, after) =>
+    sameRow(before.row, after.row) &&
+    before.set === after.set &&
+    before.first === after.first &&
+    before.last === after.last &&
+    sameWords(before.troubles, after.troubles),
+);
+
+function SongItemOnce({ row, set, first, last, troubles }: SongItemProps) {
   const { may } = usePageTools();
   const { attributes, listeners, setNodeRef, setActivatorNodeRef, isDragging } = useDraggable({
     id: row.entry.id,
@@ -45,4 +56,4 @@ export const SongItem = memo(function SongItem({ row, set, first, last, troubles
       </div>
     </li>
   );
-});
+}

@@ -1,13 +1,14 @@
 import { Menu } from "@base-ui/react/menu";
 import { Popover } from "@base-ui/react/popover";
 import { Ellipsis, Pin } from "lucide-react";
-import type { ReactNode } from "react";
+import { memo, type ReactNode } from "react";
 import { CapoMark } from "#app/components/capo-mark.tsx";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { NeckCells } from "#app/components/gig/rows/neck-cells.tsx";
 import { chooserTriggerId, menuTriggerId } from "#app/components/gig/rows/row-menu.tsx";
 import { RowTags } from "#app/components/gig/rows/row-tags.tsx";
 import { RowTroubles, RowWarnings } from "#app/components/gig/rows/row-warnings.tsx";
+import { sameRow, sameWords } from "#app/components/gig/rows/same-row.ts";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
 import type { GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
@@ -20,32 +21,55 @@ export function titleOfRow(row: Pick<Row, "song">): string {
   return row.song?.title ?? "Song that is gone";
 }
 
-type SongRowProps = {
+type RowBodyProps = {
   row: Row;
   set: Pick<GigSet, "id" | "holdFirst" | "holdLast">;
   first: boolean;
   last: boolean;
   /** What must be mended about it. */
   troubles: readonly string[];
-  /** The number, as a handle to drag the row by, or plain. */
-  number: ReactNode;
   /** Without anything to press: the picture of a row that is being dragged. */
   plain?: boolean;
+};
+
+type SongRowProps = RowBodyProps & {
+  /** The number, as a handle to drag the row by, or plain. */
+  number: ReactNode;
 };
 
 const areas =
   "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_40px_46px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
 
 /** One song of a set. */
-export function SongRow({ row, set, first, last, troubles, number, plain = false }: SongRowProps) {
-  const { naming, may } = usePageTools();
-  const { entry, song, neck } = row;
-  const title = titleOfRow(row);
+export function SongRow({ number, ...body }: SongRowProps) {
   return (
     <div className={`${areas} items-center border-grey-200 border-y bg-white lg:min-h-10 lg:border-l-0`}>
       <div className="flex h-full items-center justify-center self-stretch border-grey-200 border-r [grid-area:num]">
         {number}
       </div>
+      <RowBody {...body} />
+    </div>
+  );
+}
+
+/** All of a row but its number, which changes hands while rows are dragged. Drawn again only where it changed. */
+const RowBody = memo(
+  RowBodyOnce,
+  (before, after) =>
+    sameRow(before.row, after.row) &&
+    before.set === after.set &&
+    before.first === after.first &&
+    before.last === after.last &&
+    before.plain === after.plain &&
+    sameWords(before.troubles, after.troubles),
+);
+
+function RowBodyOnce({ row, set, first, last, troubles, plain = false }: RowBodyProps) {
+  const { naming, may } = usePageTools();
+  const { entry, song, neck } = row;
+  const title = titleOfRow(row);
+  return (
+    <>
       <div className="flex min-w-0 items-baseline gap-x-2 self-end pt-1.5 pr-2 pl-3 [grid-area:title] lg:self-center lg:pt-0 lg:pl-3.5">
         <span
           className="min-w-16 truncate font-display font-semibold text-lg leading-6 lg:text-xl"
@@ -85,7 +109,7 @@ export function SongRow({ row, set, first, last, troubles, number, plain = false
         {may.prepare && !plain ? <MenuButton entryId={entry.id} title={title} /> : null}
       </div>
       <RowTroubles troubles={troubles} />
-    </div>
+    </>
   );
 }
 

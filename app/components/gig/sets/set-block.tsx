@@ -20,7 +20,7 @@ type SetBlockProps = {
   parts: Part[];
   repertoire: Repertoire;
   standing: ReadonlySet<string>;
-  onAdd: (songs: Song[], part: Part) => void;
+  onAdd: (songs: Song[], part: Pick<Part, "setId" | "section">) => void;
 };
 
 /** One set: its songs with their gaps, and beside them a ribbon for each guitar. */
@@ -57,10 +57,12 @@ export function SetBlock({ gig, plan, first, parts, repertoire, standing, onAdd 
           ))}
           {may.plan ? (
             <AddLine
-              parts={parts}
+              setId={plan.set.id}
+              setName={plan.set.name}
+              hasEncore={parts.length > 1}
               songs={repertoire.songs}
               standing={standing}
-              onAdd={(song, part) => onAdd([song], part)}
+              onAdd={onAdd}
             />
           ) : null}
         </div>

@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { SetSuggestionsBlock } from "#app/components/gig/suggestions/set-suggestions.tsx";
 import type { Suggestions } from "#app/components/gig/suggestions/use-suggestions.ts";
 import { Dialog } from "#app/components/ui/dialog.tsx";
@@ -14,7 +15,8 @@ type SuggestionsPanelProps = {
 };
 
 /** Orders and guitars that need less retuning, set by set. */
-export function SuggestionsPanel({ gig, plan, repertoire, suggestions }: SuggestionsPanelProps) {
+export const SuggestionsPanel = memo(function SuggestionsPanel(props: SuggestionsPanelProps) {
+  const { gig, plan, repertoire, suggestions } = props;
   const { sets, begun, failed } = suggestions;
   return (
     <div className="flex flex-col gap-5">
@@ -43,7 +45,7 @@ export function SuggestionsPanel({ gig, plan, repertoire, suggestions }: Suggest
       })}
     </div>
   );
-}
+});
 
 /** The same on a phone and on small screens, above the page. */
 export function SuggestionsDialog({ onClose, ...panel }: SuggestionsPanelProps & { onClose: () => void }) {

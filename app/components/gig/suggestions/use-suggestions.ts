@@ -102,7 +102,7 @@ export function useSuggestions(plan: GigPlan): Suggestions {
     return () => clearTimeout(timer);
   }, [asked, worker]);
   const sets = useMemo(() => suggestionsOf(jobs, known), [jobs, known]);
-  return { sets, begun, failed };
+  return useMemo(() => ({ sets, begun, failed }), [sets, begun, failed]);
 }
 
 function suggestionsOf(jobs: readonly Job[], known: Known): SetSuggestions[] {

@@ -1,0 +1,36 @@
+import type { Row } from "#app/domain/gig/plan.ts";
+
+/** Whether two plain values hold the same. */
+function sameValue(a: unknown, b: unknown): boolean {
+  if (Object.is(a, b)) return true;
+  if (typeof a !== "object" || typeof b !== "object" || a === null || b === null) return false;
+  const keys = Object.keys(a);
+  if (keys.length !== Object.keys(b).length) return false;
+  return keys.every((key) => sameValue(a[key as keyof typeof a], b[key as keyof typeof b]));
+}
+
+/**
+ * Whether a row would be drawn the same. A plan is made anew at each move of a drag, so its rows are new objects, but
+ * most of them say what they said before. When a song begins is not drawn in its row.
+ */
+export function sameRow(a: Row, b: Row): boolean {
+  return (
+    a === b ||
+    (a.entry === b.entry &&
+      a.song === b.song &&
+      a.guitar === b.guitar &&
+      a.neck === b.neck &&
+      a.number === b.number &&
+      a.section === b.section &&
+      a.left === b.left &&
+      sameValue(a.retuned, b.retuned) &&
+      sameValue(a.gap, b.gap) &&
+      sameValue(a.warnings, b.warnings) &&
+      sameValue(a.rules, b.rules))
+  );
+}
+
+/** Whether two lists of sentences are the same. */
+export function sameWords(a: readonly string[], b: readonly string[]): boolean {
+  return a.length === b.length && a.every((words, index) => words === b[index]);
+}
