@@ -1,7 +1,7 @@
 import { getFormProps, type SubmissionResult, useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { Form, useNavigation } from "react-router";
-import { Line } from "#app/components/gig/gig-fields.tsx";
+import { Line } from "#app/components/gig/details/gig-fields.tsx";
 import { SaveBar } from "#app/components/save-bar.tsx";
 import { gigFieldLimits } from "#app/domain/gig/edit-schema.ts";
 import {

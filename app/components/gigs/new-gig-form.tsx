@@ -2,8 +2,8 @@ import { getFormProps, type SubmissionResult, useForm } from "@conform-to/react"
 import { parseWithZod } from "@conform-to/zod/v4";
 import { useEffect } from "react";
 import { Form, useNavigation } from "react-router";
-import { GigFields, Line } from "#app/components/gig/gig-fields.tsx";
-import { zoneHere } from "#app/components/gig/zones.ts";
+import { GigFields, Line } from "#app/components/gig/details/gig-fields.tsx";
+import { zoneHere } from "#app/components/gig/details/zones.ts";
 import { SaveBar } from "#app/components/save-bar.tsx";
 import { UnsavedGuard } from "#app/components/unsaved-guard.tsx";
 import { useUnsaved } from "#app/components/use-unsaved.ts";

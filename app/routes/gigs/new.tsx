@@ -1,6 +1,6 @@
 import { parseWithZod } from "@conform-to/zod/v4";
 import { data, redirect } from "react-router";
-import { zonesHere } from "#app/components/gig/zones.ts";
+import { zonesHere } from "#app/components/gig/details/zones.ts";
 import { NewGigForm } from "#app/components/gigs/new-gig-form.tsx";
 import { PageHead } from "#app/components/ui/page.tsx";
 import { newGigFormSchema } from "#app/domain/gig/gig-form.ts";

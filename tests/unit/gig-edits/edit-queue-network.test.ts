@@ -7,14 +7,14 @@ import {
   openQueue,
   type Queue,
   stepHistory,
-} from "#app/components/gig/edit-queue.ts";
+} from "#app/components/gig/edits/edit-queue.ts";
 import {
   takeAnswer,
   takeBatches,
   takeFailure,
   takeNews,
   takeStored,
-} from "#app/components/gig/edit-queue-answers.ts";
+} from "#app/components/gig/edits/edit-queue-answers.ts";
 import type { Batch } from "#app/domain/gig/edit.ts";
 import { fakeServer, names, people } from "#tests/unit/gig-edits/fake-server.ts";
 import { anyEdit, normal, sampleGig } from "#tests/unit/gig-edits/sample-gig.ts";

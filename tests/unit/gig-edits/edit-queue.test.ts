@@ -7,7 +7,7 @@ import {
   openQueue,
   type Queue,
   stepHistory,
-} from "#app/components/gig/edit-queue.ts";
+} from "#app/components/gig/edits/edit-queue.ts";
 import {
   takeAnswer,
   takeBatches,
@@ -17,7 +17,7 @@ import {
   takePage,
   takeRejection,
   takeStored,
-} from "#app/components/gig/edit-queue-answers.ts";
+} from "#app/components/gig/edits/edit-queue-answers.ts";
 import type { Edit } from "#app/domain/gig/edit.ts";
 import { entriesOf } from "#app/domain/gig/order.ts";
 import { type FakeServer, fakeServer, names, people } from "#tests/unit/gig-edits/fake-server.ts";

@@ -1,8 +1,8 @@
 import { describe, expect, it, vi } from "vitest";
-import { editStore } from "#app/components/gig/edit-store.ts";
-import { gigSync, retryDelay, type SyncBrowser } from "#app/components/gig/edit-sync.ts";
-import type { Reply } from "#app/components/gig/edit-transport.ts";
-import { beatingClaims, type Claims, ownWindowId } from "#app/components/gig/window-claim.ts";
+import { editStore } from "#app/components/gig/edits/edit-store.ts";
+import { gigSync, retryDelay, type SyncBrowser } from "#app/components/gig/edits/edit-sync.ts";
+import type { Reply } from "#app/components/gig/edits/edit-transport.ts";
+import { beatingClaims, type Claims, ownWindowId } from "#app/components/gig/edits/window-claim.ts";
 import type { Edit } from "#app/domain/gig/edit.ts";
 import { type FakeServer, fakeServer, names, people } from "#tests/unit/gig-edits/fake-server.ts";
 import { sampleGig } from "#tests/unit/gig-edits/sample-gig.ts";
@@ -292,12 +292,12 @@ describe("a window's id", () => {
     let ids = 0;
     const newId = () => `w${ids++}`;
     expect(await ownWindowId(claims.ofTab(), session, newId)).toBe("w0");
-    const duplicated = await import("#app/components/gig/window-claim.ts");
+    const duplicated = await import("#app/components/gig/edits/window-claim.ts");
     expect(await duplicated.ownWindowId(claims.ofTab(), session, newId)).toBe("w1");
     claims.held.clear();
     session.setItem("stillpeg.window", "w1");
     vi.resetModules();
-    const reloaded = await import("#app/components/gig/window-claim.ts");
+    const reloaded = await import("#app/components/gig/edits/window-claim.ts");
     expect(await reloaded.ownWindowId(claims.ofTab(), session, newId)).toBe("w1");
   });
 });

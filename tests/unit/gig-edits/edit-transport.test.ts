@@ -1,5 +1,5 @@
 import { afterEach, describe, expect, it, vi } from "vitest";
-import { httpTransport } from "#app/components/gig/edit-transport.ts";
+import { httpTransport } from "#app/components/gig/edits/edit-transport.ts";
 
 const request = { batches: [], since: 3 };
 

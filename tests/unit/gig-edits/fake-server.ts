@@ -1,4 +1,4 @@
-import type { EditsAnswer, EditsRequest, GigNews } from "#app/components/gig/edit-queue-answers.ts";
+import type { EditsAnswer, EditsRequest, GigNews } from "#app/components/gig/edits/edit-queue-answers.ts";
 import type { LoggedBatch } from "#app/domain/gig/edit.ts";
 import { conflictReport, goneReport, type RepertoireNames } from "#app/domain/gig/edit-words.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";

@@ -1,10 +1,20 @@
 import { nanoid } from "nanoid";
 import { useEffect, useMemo, useRef, useState, useSyncExternalStore } from "react";
-import type { OthersChange, Queue, Trouble } from "#app/components/gig/edit-queue.ts";
-import { editStore } from "#app/components/gig/edit-store.ts";
-import { type GigSync, gigSync, historyLabels, type SyncBrowser } from "#app/components/gig/edit-sync.ts";
-import { httpTransport } from "#app/components/gig/edit-transport.ts";
-import { beatingClaims, type Claims, lockClaims, ownWindowId } from "#app/components/gig/window-claim.ts";
+import type { OthersChange, Queue, Trouble } from "#app/components/gig/edits/edit-queue.ts";
+import { editStore } from "#app/components/gig/edits/edit-store.ts";
+import {
+  type GigSync,
+  gigSync,
+  historyLabels,
+  type SyncBrowser,
+} from "#app/components/gig/edits/edit-sync.ts";
+import { httpTransport } from "#app/components/gig/edits/edit-transport.ts";
+import {
+  beatingClaims,
+  type Claims,
+  lockClaims,
+  ownWindowId,
+} from "#app/components/gig/edits/window-claim.ts";
 import type { Edit, LoggedBatch } from "#app/domain/gig/edit.ts";
 import type { RepertoireNames } from "#app/domain/gig/edit-words.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";

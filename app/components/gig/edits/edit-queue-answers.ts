@@ -1,4 +1,4 @@
-import { type Pending, type Queue, rebase, type Trouble } from "#app/components/gig/edit-queue.ts";
+import { type Pending, type Queue, rebase, type Trouble } from "#app/components/gig/edits/edit-queue.ts";
 import { applyEdits } from "#app/domain/gig/apply-edit.ts";
 import type { Batch, LoggedBatch } from "#app/domain/gig/edit.ts";
 import type { ConflictReport } from "#app/domain/gig/edit-words.ts";

@@ -6,7 +6,7 @@ import {
   openQueue,
   type Queue,
   stepHistory,
-} from "#app/components/gig/edit-queue.ts";
+} from "#app/components/gig/edits/edit-queue.ts";
 import {
   takeAnswer,
   takeBatches,
@@ -16,10 +16,10 @@ import {
   takePage,
   takeRejection,
   takeStored,
-} from "#app/components/gig/edit-queue-answers.ts";
-import type { EditStore } from "#app/components/gig/edit-store.ts";
-import type { EditTransport, Reply } from "#app/components/gig/edit-transport.ts";
-import type { Claims } from "#app/components/gig/window-claim.ts";
+} from "#app/components/gig/edits/edit-queue-answers.ts";
+import type { EditStore } from "#app/components/gig/edits/edit-store.ts";
+import type { EditTransport, Reply } from "#app/components/gig/edits/edit-transport.ts";
+import type { Claims } from "#app/components/gig/edits/window-claim.ts";
 import type { Edit, LoggedBatch } from "#app/domain/gig/edit.ts";
 import type { RepertoireNames } from "#app/domain/gig/edit-words.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";

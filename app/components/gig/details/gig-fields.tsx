@@ -1,7 +1,7 @@
 import type { FieldMetadata } from "@conform-to/react";
 import type { ComponentProps, ReactNode } from "react";
-import { GigTimesFields } from "#app/components/gig/gig-times-fields.tsx";
-import { zonesByRegion } from "#app/components/gig/zones.ts";
+import { GigTimesFields } from "#app/components/gig/details/gig-times-fields.tsx";
+import { zonesByRegion } from "#app/components/gig/details/zones.ts";
 import { SelectField, TextArea, TextField } from "#app/components/ui/field.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
 import { gigFieldLimits } from "#app/domain/gig/edit-schema.ts";

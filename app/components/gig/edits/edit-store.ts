@@ -1,5 +1,5 @@
 import { z } from "zod";
-import type { Queue, Trouble } from "#app/components/gig/edit-queue.ts";
+import type { Queue, Trouble } from "#app/components/gig/edits/edit-queue.ts";
 import { batchSchema } from "#app/domain/gig/edit-schema.ts";
 
 /** What a window keeps of its queue, so that closing it loses nothing. */

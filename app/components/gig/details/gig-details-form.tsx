@@ -1,8 +1,8 @@
 import { getFormProps, useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { useState } from "react";
-import { GigFields } from "#app/components/gig/gig-fields.tsx";
-import { zonesHere } from "#app/components/gig/zones.ts";
+import { GigFields } from "#app/components/gig/details/gig-fields.tsx";
+import { zonesHere } from "#app/components/gig/details/zones.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { Dialog } from "#app/components/ui/dialog.tsx";
 import type { Edit } from "#app/domain/gig/edit.ts";

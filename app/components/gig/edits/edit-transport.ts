@@ -1,4 +1,4 @@
-import type { EditsAnswer, EditsRequest, GigNews } from "#app/components/gig/edit-queue-answers.ts";
+import type { EditsAnswer, EditsRequest, GigNews } from "#app/components/gig/edits/edit-queue-answers.ts";
 
 /** What came back from the server, or why nothing did. */
 export type Reply<Answer> =
