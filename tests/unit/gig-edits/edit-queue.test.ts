@@ -209,6 +209,16 @@ describe("others' edits", () => {
     expect(hole.pending).toHaveLength(1);
   });
 
+  it("that arrived between the reading of the gig and of its log are taken in once", () => {
+    const server = fakeServer(sampleGig());
+    const before = server.gig();
+    send(makeEdit(window(server, "ivo"), "i1", [place("e3", "Zz")], ""), server);
+    const opened = openQueue({ gig: before, log: server.log(), personId: "wren", client: "wren" });
+    const queue = takeNews(opened, server.news(0));
+    expect(queue.log.map((one) => one.id)).toEqual(["i1"]);
+    expect(queue.gig).toEqual(server.gig());
+  });
+
   it("come with the page where it is loaded again, which leaves older pages alone", () => {
     const server = fakeServer(sampleGig());
     let queue = makeEdit(window(server), "b1", [guitar("birch")], "");

@@ -1,4 +1,10 @@
-import { type Pending, type Queue, rebase, type Trouble } from "#app/components/gig/edits/edit-queue.ts";
+import {
+  type Pending,
+  type Queue,
+  rebase,
+  type Trouble,
+  upTo,
+} from "#app/components/gig/edits/edit-queue.ts";
 import { applyEdits } from "#app/domain/gig/apply-edit.ts";
 import type { Batch, LoggedBatch } from "#app/domain/gig/edit.ts";
 import type { ConflictReport } from "#app/domain/gig/edit-words.ts";
@@ -85,9 +91,10 @@ export function takeRejection(queue: Queue, refusal: { message: string; index: n
 /** The page was loaded again: the gig and log as they are now, with what is under way on top. */
 export function takePage(queue: Queue, gig: Gig, log: readonly LoggedBatch[]): Queue {
   if (gig.revision <= queue.base.revision) return queue;
-  const arrived = new Set(log.map((batch) => batch.id));
+  const known = upTo(gig, log);
+  const arrived = new Set(known.map((batch) => batch.id));
   const pending = queue.pending.filter((one) => !arrived.has(one.batch.id));
-  return rebase({ ...queue, base: gig, log: [...log], pending });
+  return rebase({ ...queue, base: gig, log: known, pending });
 }
 
 /** Edits that were kept in the browser: this window's from before a reload, or those of a window that is gone. */

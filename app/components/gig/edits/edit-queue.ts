@@ -76,7 +76,7 @@ export function openQueue(given: {
     personId,
     client,
     base: gig,
-    log: [...log],
+    log: upTo(gig, log),
     pending: [],
     onWire: [],
     troubles: [],
@@ -86,6 +86,11 @@ export function openQueue(given: {
     gig,
     others: [],
   };
+}
+
+/** The log as far as the gig has it: the two may have been read one after the other. */
+export function upTo(gig: Gig, log: readonly LoggedBatch[]): LoggedBatch[] {
+  return log.filter((batch) => batch.revision <= gig.revision);
 }
 
 /** Applies the edits under way on top of what the server has. Those that no longer apply are left to its answer. */
