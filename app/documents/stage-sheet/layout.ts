@@ -1,8 +1,9 @@
 import { textWidth } from "#app/documents/fonts.ts";
 import { readingDistance } from "#app/documents/legibility.ts";
 import { margin, type Paper, paperSizes } from "#app/documents/paper.ts";
+import { columnsFor } from "./columns.ts";
 import type { Mark, SheetPage } from "./marks.ts";
-import { columnsFor, layoutRow, type RowLayout } from "./row-layout.ts";
+import { layoutRow, type RowLayout } from "./row-layout.ts";
 import type { SheetRow, SheetSet, StageSheet } from "./sheet.ts";
 
 export type SheetOptions = {

@@ -1,71 +1,46 @@
 import { textWidth } from "#app/documents/fonts.ts";
+import { type Columns, fitText, gutter, leading, leastShrink, padding } from "./columns.ts";
 import type { Mark } from "./marks.ts";
 import type { SheetRow } from "./sheet.ts";
 
-/** Where the columns of a page stand, all in points, for type of one size. */
-export type Columns = {
+/** Where the words of what hands do stand: from which line above the song, between which edges, at what size. */
+type ActionPlace = {
+  lines: string[];
   size: number;
   left: number;
   right: number;
-  titleLeft: number;
-  capoLeft: number;
-  capoRight: number;
-  cell: number;
+  /** Line it begins on, 0 at the top of the row. */
+  first: number;
+  /** Lines above the song that it needs. */
+  above: number;
 };
 
-/** Line to line, in ems. */
-const leading = 1.06;
-/** Above and below a row's lines, in ems. */
-const padding = 0.13;
-/** A title may be set this much smaller before it wraps. */
-const leastShrink = 0.82;
-/** Between columns, in ems. */
-const gutter = 0.45;
-
-/** The columns that a set's rows need at a size, or null where no room is left for titles. */
-export function columnsFor(rows: SheetRow[], size: number, left: number, right: number): Columns | null {
-  const letters = rows.flatMap((row) => row.tuning.map((string) => textWidth(string.letter, 600)));
-  const widestLetter = Math.max(0.6, ...letters);
-  const strings = Math.max(0, ...rows.map((row) => row.tuning.length));
-  const cell = Math.min(1.3, Math.max(1.14, widestLetter + 0.3)) * size;
-  const capo = Math.max(0, ...rows.flatMap((row) => row.capos.map((line) => textWidth(line, 600)))) * size;
-  const widestNumber = textWidth(String(rows.at(-1)?.number ?? 1), 700) * size;
-  const titleLeft = left + Math.max(widestNumber, size) + gutter * size;
-  const capoRight = right - strings * cell - (strings > 0 ? gutter * size : 0);
-  const capoLeft = capoRight - capo;
-  return capoLeft - gutter * size - titleLeft < 5 * size
-    ? null
-    : { size, left, right, titleLeft, capoLeft, capoRight, cell };
-}
-
-/** Breaks words into lines that fit; a single word wider than the width stands alone on its line. */
-function wrap(words: string[], width: number, size: number, weight: 600 | 700, joint: string): string[] {
-  const lines: string[] = [];
-  for (const word of words) {
-    const last = lines.at(-1);
-    const longer = last === undefined ? word : `${last}${joint}${word}`;
-    if (last !== undefined && textWidth(longer, weight) * size <= width) lines[lines.length - 1] = longer;
-    else lines.push(word);
-  }
-  return lines;
-}
-
-/** A text in as many lines as it needs, no larger than `size`, each line inside `width`. */
-function fitText(
-  text: string,
-  width: number,
-  size: number,
-  weight: 600 | 700,
-  joint: " " | ", ",
-): { lines: string[]; size: number } {
-  const whole = textWidth(text, weight);
-  if (whole * size * leastShrink <= width)
-    return { lines: [text], size: Math.min(size, width / Math.max(whole, 0.01)) };
-  const lines = wrap(text.split(joint), width, size, weight, joint);
-  const shown =
-    joint === ", " ? lines.map((line, index) => (index < lines.length - 1 ? `${line},` : line)) : lines;
-  const widest = Math.max(...shown.map((line) => textWidth(line, weight)));
-  return { lines: shown, size: Math.min(size, width / widest) };
+/**
+ * The action beside the guitar where it fits there; else below it; else in the full width above the lines of a partial
+ * capo. The place that takes the fewest lines without shrinking the words wins.
+ */
+function placeAction(
+  row: SheetRow,
+  { size, titleLeft, capoLeft, right }: Columns,
+  badgeWidth: number,
+): ActionPlace {
+  const beside = titleLeft + (row.guitar ? badgeWidth + 0.35 * size : 0);
+  const capoExtra = Math.max(0, row.capos.length - 1);
+  if (row.action === "") return { lines: [], size, left: beside, right, first: 0, above: 0 };
+  const narrow = capoExtra > 0 ? capoLeft - gutter * size : right;
+  const places = [
+    { left: beside, right: narrow, first: 0, under: 0 },
+    { left: beside, right, first: 0, under: capoExtra },
+    { left: titleLeft, right: narrow, first: row.guitar ? 1 : 0, under: 0 },
+    { left: titleLeft, right, first: row.guitar ? 1 : 0, under: capoExtra },
+  ].map(({ left, right: edge, first, under }) => {
+    const fitted = fitText(row.action, edge - left, size, 600, ", ");
+    return { ...fitted, left, right: edge, first, above: first + fitted.lines.length + under };
+  });
+  const whole = places.filter((place) => place.size >= size * leastShrink);
+  const able = whole.length > 0 ? whole : places;
+  const cost = (place: ActionPlace) => place.above + 0.1 * place.lines.length;
+  return able.reduce((best, place) => (cost(place) < cost(best) ? place : best));
 }
 
 export type RowLayout = { height: number; marks: (top: number) => Mark[]; smallest: number };
@@ -76,19 +51,8 @@ export function layoutRow(row: SheetRow, columns: Columns): RowLayout {
   const line = leading * size;
   const title = fitText(row.title, capoLeft - gutter * size - titleLeft, size, 600, " ");
   const badgeWidth = row.guitar ? (textWidth(row.guitar.name, 600) + 0.9) * size : 0;
-  const actionRight = row.capos.length > 1 ? capoLeft - gutter * size : right;
-  const beside = titleLeft + (row.guitar ? badgeWidth + 0.35 * size : 0);
-  const fitBeside = fitText(row.action, actionRight - beside, size, 600, ", ");
-  const fitBelow = fitText(row.action, actionRight - titleLeft, size, 600, ", ");
-  const below = row.guitar !== null && fitBeside.size < size * leastShrink;
-  const actionLeft = below ? titleLeft : beside;
-  const action = row.action === "" ? { lines: [], size } : below ? fitBelow : fitBeside;
-  const firstAction = below ? 1 : 0;
-  const above = Math.max(
-    row.guitar || row.encore ? 1 : 0,
-    action.lines.length > 0 ? firstAction + action.lines.length : 0,
-    row.capos.length - 1,
-  );
+  const action = placeAction(row, columns, badgeWidth);
+  const above = Math.max(row.guitar || row.encore ? 1 : 0, action.above, row.capos.length - 1);
   const height = (above + title.lines.length) * line + 2 * padding * size;
   const letterScales = row.tuning.map((string) =>
     Math.min(1, (columns.cell - 0.2 * size) / (textWidth(string.letter, 600) * size)),
@@ -104,7 +68,7 @@ export function layoutRow(row: SheetRow, columns: Columns): RowLayout {
     const main = baseline(above);
     const found: Mark[] = [];
     const text = (
-      role: "title" | "capo" | "action" | "number" | "tuning",
+      role: Extract<Mark, { kind: "text" }>["role"],
       content: string,
       x: number,
       y: number,
@@ -140,12 +104,17 @@ export function layoutRow(row: SheetRow, columns: Columns): RowLayout {
       text(
         "action",
         content,
-        actionLeft,
-        baseline(firstAction + index),
-        actionRight - actionLeft,
+        action.left,
+        baseline(action.first + index),
+        action.right - action.left,
         action.size,
       );
     });
+    if (row.encore) {
+      const room = titleLeft - gutter * size - columns.left;
+      const small = Math.min(0.42 * size, room / textWidth("ENCORE", 600));
+      text("small", "ENCORE", columns.left, baseline(0), room, small, "right");
+    }
     text(
       "number",
       String(row.number),
