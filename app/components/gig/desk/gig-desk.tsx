@@ -88,6 +88,7 @@ export function GigDesk(props: GigDeskProps) {
                 parts={parts.filter((part) => part.setId === setPlan.set.id)}
                 repertoire={repertoire}
                 standing={desk.standing}
+                draggedId={drag?.entryId ?? null}
                 onAdd={desk.add}
               />
             ))}

@@ -1,6 +1,5 @@
-import { useDraggable } from "@dnd-kit/core";
 import { memo } from "react";
-import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
+import { DragHandle } from "#app/components/gig/drag/drag-handle.tsx";
 import { GapRow } from "#app/components/gig/rows/gap-row.tsx";
 import { sameRow, sameWords } from "#app/components/gig/rows/same-row.ts";
 import { SongRow, titleOfRow } from "#app/components/gig/rows/song-row.tsx";
@@ -13,9 +12,11 @@ type SongItemProps = {
   first: boolean;
   last: boolean;
   troubles: readonly string[];
+  /** It is on its way: its picture is under the pointer, and this is where it would go. */
+  dragged: boolean;
 };
 
-/** A song with the gap that leads into it. The number is what it is dragged by. Drawn again only where it changed. */
+/** A song with the gap that leads into it. Drawn again only where it changed. */
 export const SongItem = memo(
   SongItemOnce,
   (before, after) =>
@@ -23,36 +24,23 @@ export const SongItem = memo(
     before.set === after.set &&
     before.first === after.first &&
     before.last === after.last &&
+    before.dragged === after.dragged &&
     sameWords(before.troubles, after.troubles),
 );
 
-function SongItemOnce({ row, set, first, last, troubles }: SongItemProps) {
-  const { may } = usePageTools();
-  const { attributes, listeners, setNodeRef, setActivatorNodeRef, isDragging } = useDraggable({
-    id: row.entry.id,
-    disabled: !may.plan,
-    attributes: { roleDescription: "song that can be moved" },
-  });
-  const number = may.plan ? (
-    <button
-      type="button"
-      ref={setActivatorNodeRef}
-      {...attributes}
-      {...listeners}
-      data-handle={row.entry.id}
-      aria-label={`${row.number}, move ${titleOfRow(row)}`}
-      className="tabular flex h-full min-h-11 w-full cursor-grab touch-none items-center justify-center font-semibold text-lg hover:bg-grey-100 focus-visible:outline-offset-[-2px] active:cursor-grabbing lg:min-h-8 lg:text-xl"
-    >
-      {row.number}
-    </button>
-  ) : (
-    <span className="tabular font-semibold text-lg lg:text-xl">{row.number}</span>
-  );
+function SongItemOnce({ row, set, first, last, troubles, dragged }: SongItemProps) {
   return (
-    <li className={isDragging ? "opacity-35" : ""}>
+    <li className={dragged ? "opacity-35" : ""}>
       {row.gap ? <GapRow row={row} gap={row.gap} /> : null}
-      <div ref={setNodeRef} data-box="entry" data-entry={row.entry.id} className="-mt-px">
-        <SongRow row={row} set={set} first={first} last={last} troubles={troubles} number={number} />
+      <div data-box="entry" data-entry={row.entry.id} className="-mt-px">
+        <SongRow
+          row={row}
+          set={set}
+          first={first}
+          last={last}
+          troubles={troubles}
+          number={<DragHandle entryId={row.entry.id} number={row.number} title={titleOfRow(row)} />}
+        />
       </div>
     </li>
   );

@@ -1,14 +1,13 @@
 import { Menu } from "@base-ui/react/menu";
 import { Popover } from "@base-ui/react/popover";
 import { Ellipsis, Pin } from "lucide-react";
-import { memo, type ReactNode } from "react";
+import type { ReactNode } from "react";
 import { CapoMark } from "#app/components/capo-mark.tsx";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { NeckCells } from "#app/components/gig/rows/neck-cells.tsx";
 import { chooserTriggerId, menuTriggerId } from "#app/components/gig/rows/row-menu.tsx";
 import { RowTags } from "#app/components/gig/rows/row-tags.tsx";
 import { RowTroubles, RowWarnings } from "#app/components/gig/rows/row-warnings.tsx";
-import { sameRow, sameWords } from "#app/components/gig/rows/same-row.ts";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
 import type { GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
@@ -52,19 +51,8 @@ export function SongRow({ number, ...body }: SongRowProps) {
   );
 }
 
-/** All of a row but its number, which changes hands while rows are dragged. Drawn again only where it changed. */
-const RowBody = memo(
-  RowBodyOnce,
-  (before, after) =>
-    sameRow(before.row, after.row) &&
-    before.set === after.set &&
-    before.first === after.first &&
-    before.last === after.last &&
-    before.plain === after.plain &&
-    sameWords(before.troubles, after.troubles),
-);
-
-function RowBodyOnce({ row, set, first, last, troubles, plain = false }: RowBodyProps) {
+/** All of a row but its number. */
+function RowBody({ row, set, first, last, troubles, plain = false }: RowBodyProps) {
   const { naming, may } = usePageTools();
   const { entry, song, neck } = row;
   const title = titleOfRow(row);

@@ -20,11 +20,13 @@ type SetBlockProps = {
   parts: Part[];
   repertoire: Repertoire;
   standing: ReadonlySet<string>;
+  draggedId: string | null;
   onAdd: (songs: Song[], part: Pick<Part, "setId" | "section">) => void;
 };
 
 /** One set: its songs with their gaps, and beside them a ribbon for each guitar. */
-export function SetBlock({ gig, plan, first, parts, repertoire, standing, onAdd }: SetBlockProps) {
+export function SetBlock(props: SetBlockProps) {
+  const { gig, plan, first, parts, repertoire, standing, draggedId, onAdd } = props;
   const { may } = usePageTools();
   const headingId = useId();
   const column = useRef<HTMLDivElement>(null);
@@ -53,6 +55,7 @@ export function SetBlock({ gig, plan, first, parts, repertoire, standing, onAdd 
               firstId={firstId}
               lastId={lastId}
               troubles={troubles}
+              draggedId={draggedId}
             />
           ))}
           {may.plan ? (

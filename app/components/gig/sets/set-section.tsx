@@ -15,11 +15,13 @@ type SetSectionProps = {
   firstId: string | undefined;
   lastId: string | undefined;
   troubles: ReadonlyMap<string, string[]>;
+  /** The entry that is being dragged. */
+  draggedId: string | null;
 };
 
 /** The songs of one section in their order, with their gaps. */
 export function SetSection(props: SetSectionProps) {
-  const { part, set, rows, firstId, lastId, troubles } = props;
+  const { part, set, rows, firstId, lastId, troubles, draggedId } = props;
   const { may } = usePageTools();
   return (
     <>
@@ -44,6 +46,7 @@ export function SetSection(props: SetSectionProps) {
               first={row.entry.id === firstId}
               last={row.entry.id === lastId}
               troubles={troubles.get(row.entry.id) ?? none}
+              dragged={row.entry.id === draggedId}
             />
           ))}
         </ol>
