@@ -32,7 +32,7 @@ export function fixedOrderSpace(model: Model, rules: OrderRules): SetSpace {
  * Guitars and necks for an order that is given: the cheapest where `effort` suffices, else good ones.
  *
  * @param songs song numbers of the model in the order wanted
- * @param effort states to expand at most
+ * @param effort states to look at
  */
 export function planInOrder(
   model: Model,
@@ -43,14 +43,14 @@ export function planInOrder(
   const order = songs.map((song) => problem.order[song]!);
   const fixed = withoutRetuningKept(modelOf({ ...problem, order, maxMoved: 0 }));
   const space = fixedOrderSpace(fixed, rulesOfOrder(model.songs));
-  const run = new BestFirst(space, effort * 4);
+  const run = new BestFirst(space, effort);
   run.run(effort);
   const moves = run.found?.moves ?? beam(space, 30).way?.moves;
-  if (!moves) return { plan: null, spent: run.expanded };
+  if (!moves) return { plan: null, spent: run.reached };
   const { options } = space.planOf(moves);
   const ways = options.map((option, i) => {
     const same = (other: typeof option) => other.guitar === option.guitar && other.choice === option.choice;
     return model.options[songs[i]!]!.find(same)!;
   });
-  return { plan: { songs, options: ways }, spent: run.expanded };
+  return { plan: { songs, options: ways }, spent: run.reached };
 }

@@ -26,7 +26,7 @@ function orderOnly(problem: Problem): Problem {
  * An order that keeps all rules, sections and `maxMoved`: found, proven not to exist, or undecided within the effort.
  * Every state costs nothing, and ties go to the deeper one, so that the search goes straight down.
  *
- * @param effort states to expand at most
+ * @param effort states to look at
  * @returns song numbers in order, `null` where there is no such order, `undefined` where it is not decided
  */
 export function orderThatHolds(problem: Problem, effort: number): number[] | null | undefined {
@@ -34,7 +34,7 @@ export function orderThatHolds(problem: Problem, effort: number): number[] | nul
   const compiled = compileRules(bare);
   if (!compiled.ok) return null;
   const space = setSpace(modelOf(bare), compiled.rules, () => () => 0);
-  const run = new BestFirst(space, effort * 4);
+  const run = new BestFirst(space, effort);
   run.run(effort);
   if (run.found) return space.planOf(run.found.moves).songs;
   return run.exhausted && run.floor() === Number.POSITIVE_INFINITY ? null : undefined;

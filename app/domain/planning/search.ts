@@ -18,18 +18,18 @@ import { reasonsAtOnce } from "#app/domain/planning/why-infeasible.ts";
 /** The best answer so far (`null`: none yet), what no plan can undercut, and the effort spent. */
 export type Progress = { answer: FoundAnswer | null; bound: number; effort: number };
 
-/** Enough for a set of an evening: about a second. Counted in states looked at; twenty small changes count as one. */
+/** Enough for a set of an evening: about a second. One is ten states or ten small changes looked at. */
 export const usualEffort = 200_000;
 
 /** Sets up to this size, and sets whose order stays and that have no tech, are solved to the end at any effort. */
 const SMALL_SET = 9;
 const TO_THE_END = 50_000_000;
 
-const PORTION = 1_000;
+const LOOKS_PER_EFFORT = 10;
+const PORTION = 20_000;
 const STATE_MEMORY = 180_000_000;
-const CHANGES_PER_EFFORT = 20;
-const ORDER_EFFORT = 20_000;
-const CONFLICT_EFFORT = 5_000;
+const ORDER_LOOKS = 200_000;
+const CONFLICT_LOOKS = 50_000;
 
 type Run = {
   problem: Problem;
@@ -39,7 +39,7 @@ type Run = {
   best: FoundAnswer | null;
   plan: NumberedPlan | null;
   floor: number;
-  spent: number;
+  looks: number;
 };
 
 /** Takes a plan where it is better than what is known. */
@@ -52,7 +52,7 @@ function offer(run: Run, plan: NumberedPlan): void {
 
 function progress(run: Run): Progress {
   const answer = run.plan ? answerOf(run.problem, run.plan, run.floor) : null;
-  return { answer, bound: answer ? answer.bound : run.floor, effort: run.spent };
+  return { answer, bound: answer ? answer.bound : run.floor, effort: run.looks / LOOKS_PER_EFFORT };
 }
 
 /** The present order if it holds, and what a narrow beam finds. */
@@ -61,23 +61,23 @@ function* firstPlans(run: Run): Generator<Progress, void> {
   const present = Int32Array.from({ length: model.songs }, (_, song) => song);
   if (orderTest(rules, problem.maxMoved)(present)) {
     const { plan, spent } = planInOrder(model, [...present], PORTION);
-    run.spent += spent;
+    run.looks += spent;
     if (plan) offer(run, plan);
     yield progress(run);
   }
   const narrow = beam(space, 16);
-  run.spent += narrow.expanded;
+  run.looks += narrow.reached;
   if (narrow.way) offer(run, space.planOf(narrow.way.moves));
   yield progress(run);
 }
 
 /** A plan in any order that holds, where nothing better turned up; or why there is no such order. */
 function anyPlan(run: Run): Reason[] | null {
-  const songs = orderThatHolds(run.problem, ORDER_EFFORT);
-  if (songs === null) return [ruleConflict(run.problem, CONFLICT_EFFORT)];
+  const songs = orderThatHolds(run.problem, ORDER_LOOKS);
+  if (songs === null) return [ruleConflict(run.problem, CONFLICT_LOOKS)];
   if (songs === undefined) return null;
   const { plan, spent } = planInOrder(run.model, songs, PORTION);
-  run.spent += spent;
+  run.looks += spent;
   if (plan) offer(run, plan);
   return null;
 }
@@ -86,16 +86,16 @@ function* prove(run: Run, effort: number): Generator<Progress, void> {
   const { space, model, rules } = run;
   const proof = new BestFirst(space, Math.floor(STATE_MEMORY / (60 + 6 * space.width)));
   const random = seededRandom(1);
-  const before = run.spent;
+  const before = run.looks;
   let changes = 0;
-  let nextChanges = 2_000;
-  while (!proof.exhausted && (run.spent < effort || !run.plan)) {
+  let nextChanges = 40_000;
+  while (!proof.exhausted && (run.looks < effort * LOOKS_PER_EFFORT || !run.plan)) {
     if (run.best) proof.setLimit(run.best.total * (1 - 5e-10));
     proof.run(PORTION);
     if (proof.found) offer(run, space.planOf(proof.found.moves));
-    run.spent = before + proof.expanded + changes / CHANGES_PER_EFFORT;
+    run.looks = before + proof.reached + changes;
     run.floor = Math.max(run.floor, proof.floor());
-    if (!proof.exhausted && run.plan && proof.expanded >= nextChanges && model.songs > SMALL_SET) {
+    if (!proof.exhausted && run.plan && proof.reached >= nextChanges && model.songs > SMALL_SET) {
       const steps = 10_000;
       offer(run, improve(model, rules, run.plan, { random, steps }));
       changes += steps;
@@ -129,7 +129,7 @@ export function* search(
   const space = fixed
     ? fixedOrderSpace(model, rules)
     : setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
-  const run: Run = { problem, model, rules, space, best: null, plan: null, floor: 0, spent: 0 };
+  const run: Run = { problem, model, rules, space, best: null, plan: null, floor: 0, looks: 0 };
   yield* firstPlans(run);
   if (!run.plan) {
     const conflict = anyPlan(run);
@@ -138,5 +138,5 @@ export function* search(
   const toTheEnd = model.songs <= SMALL_SET || (fixed && !model.tech);
   yield* prove(run, toTheEnd ? Math.max(effort, TO_THE_END) : effort);
   if (run.plan) return answerOf(problem, run.plan, run.floor);
-  return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_EFFORT)] };
+  return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_LOOKS)] };
 }

@@ -5,7 +5,8 @@ import { stepCost } from "#app/domain/planning/step-cost.ts";
 
 /** A tech is never late in a bound. */
 const ENOUGH = Number.POSITIVE_INFINITY;
-const ROUNDS = 120;
+const ROUNDS = 400;
+const STEADINESS = 0.85;
 
 type Way = { place: number; penalty: number };
 
@@ -111,6 +112,7 @@ export function fixedOrderBound(model: Model, layout: SetLayout, target: number)
   const parts = Array.from({ length: model.guitars }, (_, guitar) => guitarPart(model, guitar));
   const prices = new Float64Array(model.songs);
   let best = { value: Number.NEGATIVE_INFINITY, prices: prices.slice() };
+  const heading = new Float64Array(model.songs);
   let pace = 1;
   let stale = 0;
   for (let round = 0; round < ROUNDS; round += 1) {
@@ -123,15 +125,20 @@ export function fixedOrderBound(model: Model, layout: SetLayout, target: number)
     }
     stale = value > best.value ? 0 : stale + 1;
     if (value > best.value) best = { value, prices: prices.slice() };
-    if (stale === 5) {
+    if (stale === 15) {
       pace /= 2;
       stale = 0;
       prices.set(best.prices);
+      heading.fill(0);
     }
-    const wrong = played.reduce((sum, times) => sum + (1 - times) ** 2, 0);
-    if (wrong === 0 || value >= target) break;
-    const step = (pace * (target - value)) / wrong;
-    for (let song = 0; song < prices.length; song += 1) prices[song]! += step * (1 - played[song]!);
+    if (value >= target || played.every((times) => times === 1)) break;
+    let length = 0;
+    for (let song = 0; song < prices.length; song += 1) {
+      heading[song] = 1 - played[song]! + STEADINESS * heading[song]!;
+      length += heading[song]! ** 2;
+    }
+    const step = (pace * (target - value)) / Math.max(length, 1e-9);
+    for (let song = 0; song < prices.length; song += 1) prices[song]! += step * heading[song]!;
   }
   for (const part of parts) sweep(part, best.prices);
   const rest = new Float64Array(model.songs + 1);

@@ -44,25 +44,25 @@ class Layer {
  * Goes through a space layer by layer, keeping the `width` most promising states of each. Finds a good way quickly, or
  * none where all of the kept ones end; proves nothing.
  */
-export function beam(space: Space, width: number): { way: Way | null; expanded: number } {
+export function beam(space: Space, width: number): { way: Way | null; reached: number } {
   const layers = [new Layer(space.width)];
   layers[0]!.reach(space.start, 0, -1, -1, () => 0);
   const state = new Int32Array(space.width);
   const child = new Int32Array(space.width);
-  let expanded = 0;
+  let reached = 0;
   for (let depth = 0; depth < space.depth; depth += 1) {
     const layer = layers[depth]!;
     const next = new Layer(space.width);
     for (const number of layer.best(width)) {
-      expanded += 1;
       layer.table.read(number, state);
       const cost = layer.costs[number]!;
       space.expand(state, depth, child, (step, move) => {
+        reached += 1;
         next.reach(child, cost + step, number, move, () => space.bound(child, depth + 1));
       });
     }
     layers.push(next);
-    if (next.costs.length === 0) return { way: null, expanded };
+    if (next.costs.length === 0) return { way: null, reached };
   }
   const last = layers[space.depth]!;
   let number = last.best(1)[0]!;
@@ -72,5 +72,5 @@ export function beam(space: Space, width: number): { way: Way | null; expanded: 
     moves.push(layers[depth]!.moves[number]!);
     number = layers[depth]!.parents[number]!;
   }
-  return { way: { cost, moves: moves.reverse() }, expanded };
+  return { way: { cost, moves: moves.reverse() }, reached };
 }

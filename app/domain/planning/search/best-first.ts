@@ -34,7 +34,8 @@ export class BestFirst {
   private readonly child: Int32Array;
   private limit = Number.POSITIVE_INFINITY;
   private turnedAway = Number.POSITIVE_INFINITY;
-  expanded = 0;
+  /** Children that have been looked at. */
+  reached = 0;
   found: Way | null = null;
 
   /** @param room how many states may be kept */
@@ -64,10 +65,10 @@ export class BestFirst {
     return Math.min(open, this.turnedAway);
   }
 
-  /** Expands up to so many states; stops at the first complete way, the cheapest of all that were not turned away. */
-  run(expansions: number): void {
-    const end = this.expanded + expansions;
-    while (this.expanded < end && !this.exhausted) {
+  /** Looks at so many children or a few more; stops at the first complete way, the cheapest of all not turned away. */
+  run(children: number): void {
+    const end = this.reached + children;
+    while (this.reached < end && !this.exhausted) {
       const node = this.heap.pop();
       if (this.closed[node]) continue;
       this.closed[node] = 1;
@@ -77,7 +78,6 @@ export class BestFirst {
         this.found = { cost, moves: this.wayTo(node) };
         return;
       }
-      this.expanded += 1;
       const least = this.values[node]!;
       this.table.read(node, this.state);
       this.space.expand(this.state, depth, this.child, (step, move) => {
@@ -94,6 +94,7 @@ export class BestFirst {
 
   /** Takes note of a way to the state in `child`; `least` is the value of the state it came from. */
   private reach(cost: number, least: number, parent: number, move: number, depth: number): void {
+    this.reached += 1;
     if (cost >= this.limit) return;
     const known = this.table.find(this.child);
     if (known !== NONE) {
