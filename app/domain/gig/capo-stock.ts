@@ -36,7 +36,7 @@ function words(kind: string): string {
 
 /**
  * Where a set first needs more capos of a kind than the act owns. A capo stays on its guitar until that guitar's next
- * song wants it otherwise. An act that has listed no capos at all is not warned.
+ * song wants it otherwise. An act that has listed no capos at all is not warned: see {@link unlistedCapos}.
  * @example capoShortages(rows, before, [{ id: "c", name: "Steel", strings: null, count: 1 }])[0]?.needed // 2
  */
 export function capoShortages(
@@ -65,4 +65,16 @@ export function capoShortages(
     }
   }
   return [...found.values()];
+}
+
+/**
+ * What to say, once, about a gig that uses capos of an act that has listed none; null where there is nothing to say.
+ * @example unlistedCapos([{ neck }], []) // "These songs use capos, and none are listed under Guitars. …"
+ */
+export function unlistedCapos(
+  rows: readonly { neck: Neck | null }[],
+  capos: readonly ActCapo[],
+): string | null {
+  if (capos.length > 0 || rows.every(({ neck }) => !neck || neck.capos.length === 0)) return null;
+  return "These songs use capos, and none are listed under Guitars. List them to be told where one is missing.";
 }

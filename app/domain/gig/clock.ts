@@ -14,13 +14,27 @@ export type Clock = {
   overCurfew: number;
 };
 
+/** No clock is put forward by more than this, in minutes. */
+const longestSkip = 180;
+
+/** When the wall clock first shows a time or, where it is put forward over that, what comes next. */
+function instantFrom(date: string, time: string, zone: string): string | null {
+  const wall = Date.parse(`${date}T${time}:00.000Z`);
+  for (let minutes = 0; minutes <= longestSkip; minutes += 1) {
+    const shown = new Date(wall + minutes * 60_000).toISOString();
+    const instant = instantOf({ date: shown.slice(0, 10), time: shown.slice(11, 16) }, zone);
+    if (instant !== null) return instant;
+  }
+  return null;
+}
+
 /** The curfew's instant: the first time after the start that the wall clock shows it. */
 function curfewAfter({ curfew, startsAt, zone }: Pick<Gig, "curfew" | "startsAt" | "zone">): string | null {
   if (curfew === null) return null;
   const { date } = localTime(startsAt, zone);
-  const today = instantOf({ date, time: curfew }, zone);
+  const today = instantFrom(date, curfew, zone);
   if (today !== null && Date.parse(today) > Date.parse(startsAt)) return today;
-  return instantOf({ date: addDays(date, 1), time: curfew }, zone);
+  return instantFrom(addDays(date, 1), curfew, zone);
 }
 
 /**

@@ -102,6 +102,15 @@ export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
   return tokens;
 }
 
+/** What the tech does, from when on, and whether it is ready in time. */
+function sideWords({ gap }: GapRow): string {
+  const done = gap?.work.find((work) => work.by === "tech")?.seconds ?? 0;
+  const left = gap?.work.find((work) => work.by === "player")?.seconds ?? 0;
+  const since = gap?.restsAfter ? `, once ${gap.restsAfter} is over` : "";
+  if (left === 0) return `The tech does this at the side${since}`;
+  return `The tech does ${seconds(done)} of this at the side${since}; ${seconds(left)} are left for the stage`;
+}
+
 function upperFirst(text: string): string {
   return text.charAt(0).toUpperCase() + text.slice(1);
 }
@@ -113,9 +122,9 @@ function seconds(value: number): string {
 function timeWords(gap: Gap): string {
   if (gap.seconds === 0) return gap.work.length > 0 ? "Nothing to wait for on stage" : "Nothing to do";
   const about = `About ${seconds(gap.seconds)}`;
-  if (gap.exposed > 0 && gap.cover > 0)
-    return `${about}, ${seconds(gap.exposed)} longer than the talk covers`;
-  if (gap.exposed > 0) return `${about} of dead air`;
+  const exposed = Math.round(gap.exposed) > 0;
+  if (exposed && gap.cover > 0) return `${about}, ${seconds(gap.exposed)} longer than the talk covers`;
+  if (exposed) return `${about} of dead air`;
   return `${about}, covered by the talk`;
 }
 
@@ -133,16 +142,26 @@ export function gapSentence(row: GapRow, naming: Naming): string {
     if (token.kind === "capo") parts.push(upperFirst(token.words));
     if (token.kind === "string")
       parts.push(`String ${token.string} ${token.direction} ${token.semitones}, to ${token.to}`);
-    if (token.kind === "tech")
-      parts.push(
-        token.words === "at the side"
-          ? "The tech does this at the side"
-          : "The tech starts this at the side; the rest is done on stage",
-      );
+    if (token.kind === "tech") parts.push(sideWords(row));
   }
   if (parts.length === 0 && gap.seconds === 0) return "Nothing to do.";
   parts.push(timeWords(gap));
   return `${parts.join(". ")}.`;
+}
+
+/**
+ * Capos that move while strings under them are retuned: hands take them off first and put them on last, so that the
+ * tuner reads the letters on the sheet.
+ */
+function liftedFirst(strings: readonly StringWork[], capos: readonly CapoWork[]): CapoWork[] {
+  const turned = new Set(strings.map((one) => one.string));
+  return capos.flatMap((capo): CapoWork[] => {
+    if (capo.action !== "move" || !capo.strings.some((string) => turned.has(string))) return [capo];
+    return [
+      { action: "off", strings: capo.strings, from: capo.from },
+      { action: "on", strings: capo.strings, to: capo.to },
+    ];
+  });
 }
 
 /**
@@ -154,11 +173,12 @@ export function stageWords(row: GapRow, naming: Naming): string {
   const change = changeOf(row);
   if (!change || !row.guitar || !row.neck || !change.onStage) return "";
   const count = row.guitar.strings;
-  const { off, down, up, on } = inOrder(change.strings, change.capos);
-  const words = off.map((capo) => capoWord(capo, count, hadSeveral(row, change.capos), true));
+  const several = hadSeveral(row, change.capos);
+  const { off, down, up, on } = inOrder(change.strings, liftedFirst(change.strings, change.capos));
+  const words = off.map((capo) => capoWord(capo, count, several, true));
   if (down.length > 0) words.push(`${down.length} down`);
   if (up.length > 0) words.push(`${up.length} up`);
-  words.push(...on.map((capo) => capoWord(capo, count, hadSeveral(row, change.capos), true)));
+  words.push(...on.map((capo) => capoWord(capo, count, several, true)));
   return [...words, ...tunerWords(row, change, naming)].join(", ");
 }
 

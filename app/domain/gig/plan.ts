@@ -1,10 +1,12 @@
-import { type CapoShortage, capoShortages } from "#app/domain/gig/capo-stock.ts";
+import { breachWords, type RuleBreach } from "#app/domain/gig/breach-words.ts";
+import { type CapoShortage, capoShortages, unlistedCapos } from "#app/domain/gig/capo-stock.ts";
 import { type Clock, clockOf } from "#app/domain/gig/clock.ts";
 import type { Entry, Gig, GigSet, Rule, Section } from "#app/domain/gig/gig.ts";
-import { entriesOf, setsOf } from "#app/domain/gig/order.ts";
+import { setsOf } from "#app/domain/gig/order.ts";
+import { type Look, rowsOf } from "#app/domain/gig/plan-rows.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
-import { type SetProblem, setProblem } from "#app/domain/gig/set-problem.ts";
-import { type RowWarning, rowWarnings } from "#app/domain/gig/warnings.ts";
+import { setProblem } from "#app/domain/gig/set-problem.ts";
+import type { RowWarning } from "#app/domain/gig/warnings.ts";
 import type { Neck } from "#app/domain/music/neck.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Play, Work } from "#app/domain/planning/answer.ts";
@@ -21,6 +23,8 @@ export type Gap = {
   cover: number;
   exposed: number;
   work: Work[];
+  /** Title of the song after which a tech may begin on this guitar; null where all is done on stage. */
+  restsAfter: string | null;
 };
 
 /** One song standing in a set, with what the plan makes of it. */
@@ -55,8 +59,6 @@ export type Totals = {
   seconds: number;
 };
 
-export type RuleBreach = { entryIds: string[]; message: string };
-
 export type SetPlan = {
   set: GigSet;
   rows: Row[];
@@ -77,7 +79,14 @@ export type SetPlan = {
   shortages: CapoShortage[];
 };
 
-export type GigPlan = { sets: SetPlan[]; totals: Totals; clock: Clock; shortages: CapoShortage[] };
+export type GigPlan = {
+  sets: SetPlan[];
+  totals: Totals;
+  clock: Clock;
+  shortages: CapoShortage[];
+  /** Something to say once about the whole gig; null where there is nothing. */
+  note: string | null;
+};
 
 const nothing: Totals = {
   exposed: 0,
@@ -117,93 +126,6 @@ function totalsOf({ totals, gaps }: Evaluation): Totals {
   };
 }
 
-function gapsByEntry(evaluation: Evaluation): Map<string, Gap> {
-  const gaps = new Map<string, Gap>();
-  for (const gap of evaluation.gaps) {
-    const place = evaluation.order.indexOf(gap.into);
-    const { swap, seconds, cover, exposed, work } = gap;
-    if (place > 0)
-      gaps.set(gap.into, { fromEntryId: evaluation.order[place - 1]!, swap, seconds, cover, exposed, work });
-  }
-  return gaps;
-}
-
-function rulesAbout(gig: Gig, entryId: string): Rule[] {
-  return gig.rules.filter((rule) =>
-    rule.kind === "at" ? rule.entry === entryId : rule.a === entryId || rule.b === entryId,
-  );
-}
-
-function retunedStrings(guitar: Guitar | null, gap: Gap | null): boolean[] {
-  if (!guitar) return [];
-  const changed = new Set(
-    gap?.work.flatMap((work) => (work.guitar === guitar.id ? work.strings.map((one) => one.string) : [])),
-  );
-  return Array.from({ length: guitar.strings }, (_, index) => changed.has(guitar.strings - index));
-}
-
-type Look = { gig: Gig; songs: Map<string, Song>; guitars: Map<string, Guitar>; naming: Naming };
-
-/** Rows without their place on the clock, and how long each song's row takes with the gap before it. */
-function rowsOf(
-  look: Look,
-  set: GigSet,
-  given: SetProblem,
-  evaluation: Evaluation,
-): { rows: Row[]; lengths: number[] } {
-  const { gig, songs, guitars, naming } = look;
-  const gaps = gapsByEntry(evaluation);
-  const plays = new Map(given.plays.map((play) => [play.song, play]));
-  const covers = new Map(given.problem.songs.map((song) => [song.id, song.cover]));
-  const entries = entriesOf(gig, set.id);
-  const lengths: number[] = [];
-  const rows = entries.map((entry, index): Row => {
-    const song = songs.get(entry.songId) ?? null;
-    const play = plays.get(entry.id);
-    const guitar = (play && guitars.get(play.guitar)) ?? null;
-    const neck = (play && given.necks.get(entry.id)?.[play.neck]) ?? null;
-    const gap = gaps.get(entry.id) ?? null;
-    const cover = covers.get(entry.id) ?? gig.times.cover;
-    lengths.push(index === 0 ? 0 : Math.max(cover, gap?.seconds ?? 0));
-    const row = {
-      entry,
-      song,
-      number: index + 1,
-      section: entry.section,
-      guitar,
-      neck,
-      gap,
-      left: given.left.get(entry.id) ?? null,
-      startSecond: 0,
-      retuned: retunedStrings(guitar, gap),
-      rules: rulesAbout(gig, entry.id),
-    };
-    const ends = index === 0 || index === entries.length - 1 || entries[index - 1]?.section !== entry.section;
-    return { ...row, warnings: rowWarnings(row, { ends, into: gig.rules, naming, crew: gig.crew }) };
-  });
-  return { rows, lengths };
-}
-
-function breachesOf(evaluation: Evaluation, look: Look): RuleBreach[] {
-  const titles = new Map(
-    look.gig.entries.map((entry) => [entry.id, look.songs.get(entry.songId)?.title ?? "A song"]),
-  );
-  const name = (id: string | undefined) => (id && titles.get(id)) ?? "A song";
-  return evaluation.breaches.map(({ code, songs: [a, b, ...rest] }) => {
-    const entryIds = [a, b, ...rest].filter((id): id is string => id !== undefined);
-    const words: Record<string, string> = {
-      at: `${name(a)} does not stand where its rule says.`,
-      before: `${name(a)} should come before ${name(b)}.`,
-      into: `${name(a)} should go straight into ${name(b)}.`,
-      apart: `${name(a)} and ${name(b)} should not stand next to each other.`,
-      section: `${name(b)} belongs to a later part of the set.`,
-      sections: `${name(b)} belongs to a later part of the set.`,
-      keeps: `${name(a)} would retune a guitar that keeps its tuning. Play it on another, or another way.`,
-    };
-    return { entryIds, message: words[code] ?? `${name(a)} breaks a rule.` };
-  });
-}
-
 function planSet(look: Look, set: GigSet, repertoire: Repertoire, startSecond: number): SetPlan {
   const given = setProblem(look.gig, set.id, repertoire, look.naming);
   const evaluation = evaluate(given.problem, given.problem.order, given.plays);
@@ -226,7 +148,11 @@ function planSet(look: Look, set: GigSet, repertoire: Repertoire, startSecond: n
     plays: given.plays,
     necks: given.necks,
     evaluation,
-    breaches: breachesOf(evaluation, look),
+    breaches: breachWords(evaluation.breaches, {
+      gig: look.gig,
+      entries: rows.flatMap((row) => (row.left === null ? [row.entry] : [])),
+      title: (id) => rows.find((row) => row.entry.id === id)?.song?.title ?? "A song",
+    }),
     seconds: at - startSecond,
     startSecond,
     before,
@@ -259,5 +185,9 @@ export function planGig(gig: Gig, repertoire: Repertoire, naming: Naming = "engl
     totals: sumOf(sets.map((set) => set.totals)),
     clock: clockOf(gig, at),
     shortages: sets.flatMap((set) => set.shortages),
+    note: unlistedCapos(
+      sets.flatMap((set) => set.rows),
+      repertoire.capos,
+    ),
   };
 }

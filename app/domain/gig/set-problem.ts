@@ -1,8 +1,10 @@
+import { coversOf } from "#app/domain/gig/cover.ts";
+import { atDoors, presentPlay, standAfter } from "#app/domain/gig/default-choice.ts";
 import type { Entry, Gig } from "#app/domain/gig/gig.ts";
 import { entriesOf } from "#app/domain/gig/order.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
-import { encoreOpener, rulesOf, straightInto } from "#app/domain/gig/set-rules.ts";
-import { canPlay, whyLeft } from "#app/domain/gig/why-left.ts";
+import { rulesOf } from "#app/domain/gig/set-rules.ts";
+import { whyLeft } from "#app/domain/gig/why-left.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import { defaultAim } from "#app/domain/planning/aim.ts";
 import type { Play } from "#app/domain/planning/answer.ts";
@@ -34,18 +36,6 @@ function openGuitars(entry: Entry, guitars: readonly Guitar[]): readonly Guitar[
   return pinned.length > 0 ? pinned : guitars;
 }
 
-/** How an entry is played now: as it says where that can be, else the first way in order of preference that can. */
-function presentPlay(entry: Entry, necks: readonly SongNeck[], guitars: readonly Guitar[]): Play | null {
-  const asked = necks.findIndex((neck) => neck.id === entry.neckId);
-  const order = asked >= 0 ? [asked, ...necks.keys()] : [...necks.keys()];
-  for (const neck of order) {
-    const able = guitars.filter((guitar) => canPlay(guitar, necks[neck]!));
-    const guitar = able.find((one) => one.id === entry.guitarId) ?? able[0];
-    if (guitar) return { song: entry.id, guitar: guitar.id, neck };
-  }
-  return null;
-}
-
 /**
  * One set of a gig as one planning problem: every guitar is prepared freely before it. Songs are known by their
  * entries' ids, since a song may stand twice. Only pinned choices bind. An entry that no guitar can play is left out.
@@ -66,22 +56,26 @@ export function setProblem(
   const necks = new Map<string, SongNeck[]>();
   const plays: Play[] = [];
   const limited = new Map<string, readonly Guitar[]>();
+  let stand = atDoors;
   for (const entry of all) {
     const song = songs.get(entry.songId);
     const ways = song ? openNecks(entry, song) : [];
     const guitars = openGuitars(entry, repertoire.guitars);
-    const play = song ? presentPlay(entry, ways, guitars) : null;
+    const play = song ? presentPlay(entry, ways, guitars, stand, gig) : null;
     if (play) {
-      plays.push(play);
+      plays.push({ song: entry.id, guitar: play.guitar, neck: play.neck });
+      stand = standAfter(stand, play.on, play.way);
       necks.set(entry.id, ways);
       limited.set(entry.id, guitars);
     } else {
-      left.set(entry.id, whyLeft(song, guitars, ways, naming) ?? "No guitar can play this.");
+      left.set(
+        entry.id,
+        whyLeft(song, guitars, ways, naming, entry.pinned !== "none") ?? "No guitar can play this.",
+      );
     }
   }
   const entries = all.filter((entry) => necks.has(entry.id));
-  const opener = encoreOpener(gig, entries);
-  const into = straightInto(gig, entries);
+  const coverBefore = coversOf(gig, entries);
   const problem: Problem = {
     version: 1,
     crew: gig.crew,
@@ -108,16 +102,11 @@ export function setProblem(
       const song = songs.get(entry.songId)!;
       const allowed = limited.get(entry.id)!;
       const free = allowed.length === repertoire.guitars.length;
-      const cover = into.has(entry.id)
-        ? gig.times.intoCover
-        : entry.id === opener?.id
-          ? gig.times.encoreCover
-          : (entry.cover ?? song.cover);
       return {
         id: entry.id,
         seconds: song.seconds,
         section: entry.section,
-        cover,
+        cover: entry.cover ?? coverBefore(entry, song),
         necks: necks.get(entry.id)!.map((neck) => ({
           open: neck.open,
           capos: neck.capos,

@@ -16,17 +16,31 @@ function placeInSet(place: number, span: Span, songs: number): number {
 }
 
 /**
- * The song that opens the encore: the one a rule puts first there, else the one that stands first.
- * The applause before an encore belongs to the gap, the planner's cover to a song; so this song is always held, and
- * the two are the same.
+ * The song that opens the encore: the one that rules put first there, else the first in the present order that no rule
+ * keeps from it. The applause before an encore belongs to the gap, the planner's cover to a song; so this song is always
+ * held, and the two are the same.
  */
 export function encoreOpener(gig: Pick<Gig, "rules">, entries: readonly Entry[]): Entry | null {
   const encore = entries.filter((entry) => entry.section === 1);
   if (encore.length === 0 || encore.length === entries.length) return null;
-  const ruled = encore.find((entry) =>
-    gig.rules.some((rule) => rule.kind === "at" && rule.entry === entry.id && rule.place === 1),
+  const main = new Set(entries.flatMap((entry) => (entry.section === 1 ? [] : [entry.id])));
+  const later = new Set(encore.map((entry) => entry.id));
+  const opens = (place: number) => place === 1 || place === -encore.length;
+  const must = encore.find(({ id }) =>
+    gig.rules.some((rule) =>
+      rule.kind === "at"
+        ? rule.entry === id && opens(rule.place)
+        : rule.kind === "into" && rule.b === id && main.has(rule.a),
+    ),
   );
-  return ruled ?? encore[0] ?? null;
+  const may = encore.find(({ id }) =>
+    gig.rules.every((rule) =>
+      rule.kind === "at"
+        ? rule.entry !== id || opens(rule.place)
+        : rule.kind === "apart" || rule.b !== id || !later.has(rule.a),
+    ),
+  );
+  return must ?? may ?? encore[0] ?? null;
 }
 
 /** The songs that others go straight into, among those in the problem. */

@@ -1,4 +1,4 @@
-import type { Crew, Rule } from "#app/domain/gig/gig.ts";
+import type { Rule } from "#app/domain/gig/gig.ts";
 import type { Neck } from "#app/domain/music/neck.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import { raisedStrings } from "#app/domain/music/range.ts";
@@ -15,19 +15,21 @@ type Warned = {
   entry: { id: string };
   guitar: Guitar | null;
   neck: Neck | null;
-  gap: { work: Work[] } | null;
+  gap: { fromEntryId: string; work: Work[] } | null;
 };
 
 type Place = {
-  /** The song opens or closes a set or its encore. */
+  /** The song opens or closes the main part of a set or its encore. */
   ends: boolean;
   into: readonly Rule[];
   naming: Naming;
-  crew: Crew;
 };
 
-/** The three highest strings of a set are plain as a rule (common practice, no source). */
-const plainStrings = 3;
+/** How many of the highest strings are plain: three as a rule, none of a bass (common practice, no source). */
+function plainStrings(guitar: Guitar): number {
+  return guitar.kind === "bass" ? 0 : 3;
+}
+
 /** A peg turned this far in one gap drifts (common practice, no source). */
 const far = 4;
 
@@ -42,7 +44,9 @@ export function rowWarnings(row: Warned, { ends, into, naming }: Place): RowWarn
   const { guitar, neck, gap } = row;
   if (!guitar || !neck) return [];
   const warnings: RowWarning[] = [];
-  const raised = raisedStrings(neck.open, guitar.usual, naming).filter((one) => one.string <= plainStrings);
+  const raised = raisedStrings(neck.open, guitar.usual, naming).filter(
+    (one) => one.string <= plainStrings(guitar),
+  );
   if (raised.length > 0) {
     const strings = raised.map((one) => one.string);
     warnings.push({
@@ -55,9 +59,11 @@ export function rowWarnings(row: Warned, { ends, into, naming }: Place): RowWarn
   const wide = strings.filter((one) => Math.abs(one.to - one.from) >= far);
   if (wide.length > 0) {
     const most = Math.max(...wide.map((one) => Math.abs(one.to - one.from)));
+    const who = wide.length === 1 ? "String" : "Strings";
+    const turns = wide.length === 1 ? `turns ${most} semitones` : `turn as far as ${most} semitones`;
     warnings.push({
       code: "far",
-      message: `${wide.length === 1 ? `String ${wide[0]!.string} moves` : `Strings ${list(wide.map((one) => one.string))} move`} up to ${most} semitones in one gap: check again after the first verse.`,
+      message: `${who} ${list(wide.map((one) => one.string))} ${turns} in one gap: check again after the first verse.`,
     });
   }
   const up = strings.filter((one) => one.to > one.from);
@@ -67,8 +73,11 @@ export function rowWarnings(row: Warned, { ends, into, naming }: Place): RowWarn
       message: `${up.length === 1 ? "A string is" : `${up.length} strings are`} raised into a song that opens or closes: raised strings drift.`,
     });
   }
-  const straight = into.some((rule) => rule.kind === "into" && rule.b === row.entry.id);
-  if (straight && strings.length > 0) {
+  const straight = into.some(
+    (rule) => rule.kind === "into" && rule.b === row.entry.id && rule.a === gap?.fromEntryId,
+  );
+  const onStage = gap?.work.some((work) => work.guitar === guitar.id && work.by === "player");
+  if (straight && onStage && strings.length > 0) {
     warnings.push({
       code: "into-retuned",
       message: `Goes straight in, but ${strings.length === 1 ? "a string has" : `${strings.length} strings have`} to be retuned first.`,

@@ -123,7 +123,7 @@ describe("a gap in words", () => {
       { crew: "tech", times: defaultTimes.tech },
     );
     expect(gapSentence(row, "english")).toBe(
-      "Change to Alder. String 6 down 2, to D. The tech does this at the side. About 8 s, covered by the talk.",
+      "Change to Alder. String 6 down 2, to D. The tech does this at the side, once s0 is over. About 8 s, covered by the talk.",
     );
     expect(stageWords(row, "english")).toBe("");
   });
