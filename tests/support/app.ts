@@ -105,8 +105,8 @@ class TestServer {
       },
       stdio: ["ignore", "pipe", "pipe", "ipc"],
     });
-    child.stdout.on("data", (part: Buffer) => this.#read(part.toString()));
-    child.stderr.on("data", (part: Buffer) => this.#read(part.toString()));
+    child.stdout?.on("data", (part: Buffer) => this.#read(part.toString()));
+    child.stderr?.on("data", (part: Buffer) => this.#read(part.toString()));
     this.#child = child;
     this.#ended = ended(child);
     const failed = this.#ended.then((code) => {
