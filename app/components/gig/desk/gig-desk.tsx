@@ -93,6 +93,7 @@ export function GigDesk(props: GigDeskProps) {
               />
             ))}
             {tools.may.plan ? <AddSet gig={gig} /> : null}
+            {plan.note ? <p className="px-4 pt-3 text-grey-600 lg:px-0">{plan.note}</p> : null}
           </div>
           <aside
             aria-label="Less retuning"

@@ -4,6 +4,7 @@ import { AddDialog } from "#app/components/gig/dialogs/add-dialog.tsx";
 import { EntryDialog } from "#app/components/gig/dialogs/entry-dialog.tsx";
 import { SetDialog } from "#app/components/gig/dialogs/set-dialog.tsx";
 import type { Part } from "#app/components/gig/sets/moves.ts";
+import { usualCover } from "#app/domain/gig/cover.ts";
 import type { Edit } from "#app/domain/gig/edit.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { setsOf } from "#app/domain/gig/order.ts";
@@ -57,7 +58,7 @@ function Opened(props: GigDialogsProps) {
         gig={gig}
         parts={parts}
         titleOf={titleOf}
-        usualCover={song?.cover ?? gig.times.cover}
+        usualCover={song ? usualCover(gig, entry, song) : gig.times.cover}
         onClose={onClose}
       />
     );
