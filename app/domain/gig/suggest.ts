@@ -1,4 +1,6 @@
+import { certaintyWords } from "#app/domain/gig/certainty.ts";
 import type { Edit } from "#app/domain/gig/edit.ts";
+import { entryTitles } from "#app/domain/gig/entry-titles.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { leastChange } from "#app/domain/gig/least-change.ts";
 import { longestRising } from "#app/domain/gig/longest-rising.ts";
@@ -8,7 +10,7 @@ import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { caposWords } from "#app/domain/music/capo.ts";
 import { compactTuning } from "#app/domain/music/format-tuning.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
-import type { Answer, FoundAnswer, InfeasibleAnswer, Reason, Totals } from "#app/domain/planning/answer.ts";
+import type { Answer, FoundAnswer, Totals } from "#app/domain/planning/answer.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 
 /** How much a performer gives up: only the choice of guitars, or the order too. */
@@ -47,7 +49,7 @@ export type Suggested = {
   /** Seconds of dead air fewer than now. */
   saved: number;
   totals: Totals;
-  /** "Night Ploughing before Glasshouse" */
+  /** "Night Ploughing before Glasshouse", "Stonecrop, then Lamps to the end" */
   moves: string[];
   /** "To Birch: Salt on the Step, Stonecrop", "Low Meadow in DADGAD, no capo" */
   changes: string[];
@@ -56,18 +58,32 @@ export type Suggested = {
   certainty: string;
 };
 
+/** The songs that move, those that come to stand side by side in one line, with the song they then stand before. */
 function movesOf(
-  present: readonly string[],
+  { order: present, songs }: Problem,
   order: readonly string[],
   title: (id: string) => string,
 ): string[] {
   const places = new Map(present.map((id, index) => [id, index]));
+  const sections = new Map(songs.map((song) => [song.id, song.section]));
   const kept = new Set(longestRising(order.map((id) => places.get(id) ?? 0)).map((index) => order[index]));
-  return order.flatMap((id, index) => {
-    if (kept.has(id)) return [];
-    const next = order.slice(index + 1).find((other) => kept.has(other));
-    return [next === undefined ? `${title(id)} to the end` : `${title(id)} before ${title(next)}`];
+  const moves: string[] = [];
+  let run: string[] = [];
+  order.forEach((id, index) => {
+    if (kept.has(id)) return;
+    run.push(title(id));
+    const next = order[index + 1];
+    const here = next !== undefined && sections.get(next) === sections.get(id);
+    if (here && !kept.has(next)) return;
+    const where = here
+      ? `before ${title(next)}`
+      : next === undefined
+        ? "to the end"
+        : "just before the encore";
+    moves.push(`${run.join(", then ")} ${where}`);
+    run = [];
   });
+  return moves;
 }
 
 /** What each song takes up instead: one line a guitar, one a song that is played another way. */
@@ -94,17 +110,6 @@ function changesOf(
   return [...toGuitars, ...ways];
 }
 
-function certaintyOf(plan: SetPlan, answer: FoundAnswer, rung: Rung): string {
-  if (answer.status === "optimal") {
-    return rung === "any-order"
-      ? "Proven: nothing needs less than this."
-      : "Proven: no choice of guitars needs less in this order.";
-  }
-  const weight = plan.problem.aim.exposed || 1;
-  const less = Math.ceil((answer.total - answer.bound) / weight);
-  return `Not proven: at most ${less} s less may be possible.`;
-}
-
 /** Compares an answer with the set as it stands. */
 export function describeSuggestion(
   gig: Gig,
@@ -116,76 +121,18 @@ export function describeSuggestion(
     naming,
   }: { answer: FoundAnswer; rung: Rung; repertoire: Repertoire; naming: Naming },
 ): Suggested {
-  const title = titlesOf(gig, repertoire);
+  const title = entryTitles(gig, plan.set.id, repertoire);
   const answer = leastChange(plan.problem, plan.plays, found);
   const tolerance = 1e-6 * Math.max(1, plan.evaluation.total);
   return {
     gains: plan.evaluation.breaches.length > 0 || answer.total < plan.evaluation.total - tolerance,
     saved: plan.evaluation.totals.exposed - answer.totals.exposed,
     totals: answer.totals,
-    moves: movesOf(plan.problem.order, answer.order, title),
+    moves: movesOf(plan.problem, answer.order, title),
     changes: changesOf(plan, answer, repertoire, title, naming),
     proven: answer.status === "optimal",
-    certainty: certaintyOf(plan, answer, rung),
+    certainty: certaintyWords(plan.problem, answer, rung),
   };
-}
-
-function titlesOf(gig: Gig, repertoire: Repertoire): (entryId: string) => string {
-  const songs = new Map(repertoire.songs.map((song) => [song.id, song.title]));
-  const titles = new Map(gig.entries.map((entry) => [entry.id, songs.get(entry.songId) ?? "A song"]));
-  return (entryId) => titles.get(entryId) ?? "A song";
-}
-
-function placeWords(place: number, songs: number): string {
-  if (place > songs || place < 1) return "at a place the set does not have";
-  return place === 1 ? "first" : place === songs ? "last" : `at place ${place}`;
-}
-
-/** The rules among some songs, each in a few words. */
-function rulesAmong(problem: Problem, songs: readonly string[], title: (id: string) => string): string[] {
-  const among = new Set(songs);
-  const { at, before, into, apart } = problem.rules;
-  const pair =
-    (words: (a: string, b: string) => string) =>
-    ([a, b]: [string, string]) =>
-      among.has(a) && among.has(b) ? [words(title(a), title(b))] : [];
-  return [
-    ...Object.entries(at).flatMap(([id, place]) =>
-      among.has(id) ? [`${title(id)} ${placeWords(place, problem.songs.length)}`] : [],
-    ),
-    ...into.flatMap(pair((a, b) => `${a} straight into ${b}`)),
-    ...before.flatMap(pair((a, b) => `${a} before ${b}`)),
-    ...apart.flatMap(pair((a, b) => `${a} and ${b} apart`)),
-  ];
-}
-
-function reasonWords({ code, songs }: Reason, problem: Problem, title: (id: string) => string): string {
-  const names = songs.map(title).join(", ");
-  if (code === "no-guitar")
-    return `No guitar can play ${names}. Give it another tuning or widen a guitar's range.`;
-  if (code === "keeps") {
-    return `${names}: a guitar that keeps its tuning would have to be retuned. Move one to another guitar.`;
-  }
-  if (code === "moved")
-    return `${names}: the rules ask for more songs to move than this allows. Try any order.`;
-  const rules = rulesAmong(problem, songs, title);
-  const what = rules.length > 0 ? rules.join(", ") : names;
-  return `${what}: ${rules.length === 1 ? "this cannot be" : "these contradict each other"}. Free one of them.`;
-}
-
-/**
- * Why no order can be had, with the songs' titles and what to do.
- * @example infeasibleWords(gig, plan, answer, repertoire)
- *   // ["Ferry straight into Lamps, Lamps before Ferry: these contradict each other. Free one of them."]
- */
-export function infeasibleWords(
-  gig: Gig,
-  plan: SetPlan,
-  answer: InfeasibleAnswer,
-  repertoire: Repertoire,
-): string[] {
-  const title = titlesOf(gig, repertoire);
-  return answer.why.map((reason) => reasonWords(reason, plan.problem, title));
 }
 
 /** Whether an answer is an order at all. */

@@ -1,14 +1,9 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { applyEdits } from "#app/domain/gig/apply-edit.ts";
+import { infeasibleWords } from "#app/domain/gig/infeasible-words.ts";
 import { planGig } from "#app/domain/gig/plan.ts";
-import {
-  describeSuggestion,
-  infeasibleWords,
-  isFound,
-  rungProblem,
-  suggestionEdits,
-} from "#app/domain/gig/suggest.ts";
+import { describeSuggestion, isFound, rungProblem, suggestionEdits } from "#app/domain/gig/suggest.ts";
 import { solve } from "#app/domain/planning/solve.ts";
 import { gigOf, guitar, pairRule, repertoireOf, song } from "./build-gig.ts";
 

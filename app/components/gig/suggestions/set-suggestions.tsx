@@ -4,15 +4,10 @@ import { RungCard } from "#app/components/gig/suggestions/rung-card.tsx";
 import type { RungState } from "#app/components/gig/suggestions/use-suggestions.ts";
 import { Warning } from "#app/components/ui/warning.tsx";
 import type { Gig } from "#app/domain/gig/gig.ts";
+import { infeasibleWords } from "#app/domain/gig/infeasible-words.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
-import {
-  describeSuggestion,
-  infeasibleWords,
-  isFound,
-  type Rung,
-  type Suggested,
-} from "#app/domain/gig/suggest.ts";
+import { describeSuggestion, isFound, type Rung, type Suggested } from "#app/domain/gig/suggest.ts";
 import type { FoundAnswer } from "#app/domain/planning/answer.ts";
 
 type SetSuggestionsProps = {
