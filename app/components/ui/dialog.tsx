@@ -4,7 +4,8 @@ import { buttonClass } from "#app/components/ui/button.tsx";
 
 type DialogProps = {
   open: boolean;
-  onOpenChange: (open: boolean) => void;
+  /** `reason` is "close-press" where the close button was pressed, "escape-key" or "outside-press" otherwise. */
+  onOpenChange: (open: boolean, details: { reason: string }) => void;
   title: string;
   children: ReactNode;
   /** Shown before the close button, at the bottom. */

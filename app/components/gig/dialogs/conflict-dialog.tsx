@@ -8,7 +8,10 @@ type ConflictDialogProps = {
   keepTheirs: (id: string) => void;
 };
 
-/** Two people changed the same thing: what each wrote, and the choice between them. One at a time. */
+/**
+ * Two people changed the same thing: what each wrote, and the choice between them. One at a time. Only its buttons
+ * close it, so that nothing is decided by the way.
+ */
 export function ConflictDialog({ troubles, keepMine, keepTheirs }: ConflictDialogProps) {
   const trouble = troubles[0];
   if (!trouble) return null;
@@ -17,7 +20,7 @@ export function ConflictDialog({ troubles, keepMine, keepTheirs }: ConflictDialo
   return (
     <Dialog
       open
-      onOpenChange={(open) => (open ? null : keepTheirs(trouble.id))}
+      onOpenChange={(_, { reason }) => (reason === "close-press" ? keepTheirs(trouble.id) : null)}
       title={first ? `Two edits of the same thing: ${trouble.label}` : `Not applied: ${trouble.label}`}
       closeLabel={theirs}
       actions={

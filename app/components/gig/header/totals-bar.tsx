@@ -69,12 +69,12 @@ function Figure({ value, unit, change, label, short, strong, alarm }: FigureProp
         )}
       </dt>
       <dd
-        className={`tabular whitespace-nowrap font-semibold leading-tight ${strong ? "text-xl lg:text-[30px] lg:leading-8" : "text-lg lg:text-2xl lg:leading-8"} ${alarm ? "text-warning underline decoration-2 underline-offset-4" : ""}`}
+        className={`tabular relative w-fit whitespace-nowrap font-semibold leading-tight ${strong ? "text-xl lg:text-[30px] lg:leading-8" : "text-lg lg:text-2xl lg:leading-8"} ${alarm ? "text-warning underline decoration-2 underline-offset-4" : ""}`}
       >
         {shown(value)}
         {unit ? <span className="font-medium"> {unit}</span> : null}
         {change !== null ? (
-          <span className="absolute bottom-0 left-full pl-1 font-medium text-base text-grey-600 leading-6">
+          <span className="absolute bottom-0 left-full pl-1 max-lg:hidden font-medium text-base text-grey-600 leading-6">
             {signed(change)}
           </span>
         ) : null}
