@@ -30,8 +30,15 @@ function owned(kind: string, capos: readonly ActCapo[]): number {
   }, 0);
 }
 
-function words(kind: string): string {
-  return kind === "full" ? "full capos" : `capos over ${stringsInWords(kind.split(",").map(Number))}`;
+function words(kind: string, count: number): string {
+  const capos = count === 1 ? "capo" : "capos";
+  return kind === "full" ? `full ${capos}` : `${capos} over ${stringsInWords(kind.split(",").map(Number))}`;
+}
+
+function shortageWords(title: string, kind: string, count: number, have: number): string {
+  const what = `${count} ${words(kind, count)}`;
+  if (count === 1) return `${title} needs ${what}; the act has none. Borrow one, or play it another way.`;
+  return `At ${title} ${what} are on necks at once; the act has ${have === 0 ? "none" : have}. Take one off a resting guitar, or borrow one.`;
 }
 
 /**
@@ -60,8 +67,8 @@ export function capoShortages(
     for (const [kind, count] of needed) {
       const have = owned(kind, capos);
       if (count <= have || (found.get(kind)?.needed ?? 0) >= count) continue;
-      const message = `At ${song?.title ?? "this song"} ${count} ${words(kind)} are on necks at once; the act has ${have === 0 ? "none" : have}. Take one off a resting guitar, or borrow one.`;
-      found.set(kind, { entryId: entry.id, kind: words(kind), needed: count, owned: have, message });
+      const message = shortageWords(song?.title ?? "This song", kind, count, have);
+      found.set(kind, { entryId: entry.id, kind: words(kind, 2), needed: count, owned: have, message });
     }
   }
   return [...found.values()];

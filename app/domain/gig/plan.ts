@@ -51,6 +51,7 @@ export type Row = {
 /** What a set or a gig asks of hands and of the room. Seconds and counts. */
 export type Totals = {
   exposed: number;
+  /** The most dead air in one gap, as the gap's own line shows it. */
   longestGap: number;
   strings: number;
   semitones: number;
@@ -122,7 +123,7 @@ function totalsOf({ totals, gaps }: Evaluation): Totals {
     capoActions,
     swaps,
     seconds,
-    longestGap: Math.max(0, ...gaps.map((gap) => gap.seconds)),
+    longestGap: Math.max(0, ...gaps.map((gap) => gap.exposed)),
   };
 }
 

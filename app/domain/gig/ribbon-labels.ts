@@ -12,28 +12,31 @@ type Room = { y1: number; y2: number; width: number; labelWidth: number; labelHe
 
 /**
  * Places for the labels of one gap so that none covers another: beside its own step where that is free, else in a
- * second or third line, else pushed along.
+ * second or third line, else pushed along. Where the gap has no room for all, more lines stand closer to its neighbours.
  */
 export function placeLabels(
   labels: readonly Omit<StepLabel, "y">[],
   { y1, y2, width, labelWidth, labelHeight }: Room,
 ): StepLabel[] {
-  const middle = (y1 + y2) / 2;
-  const lines = Math.max(1, Math.floor((y2 - y1 + labelHeight * 0.6) / labelHeight));
-  const free = Array.from({ length: lines }, () => Number.NEGATIVE_INFINITY);
-  const inOrder = labels.toSorted((a, b) => a.x - b.x);
-  const placed = inOrder.map((label) => {
-    const line = free.findIndex((end) => end <= label.x);
-    const chosen = line >= 0 ? line : free.indexOf(Math.min(...free));
-    const x = Math.max(label.x, free[chosen]!);
-    free[chosen] = x + labelWidth;
-    return { label, line: chosen, x };
+  const fitting = Math.floor((y2 - y1 + labelHeight * 0.6) / labelHeight);
+  const inLine = Math.max(1, Math.floor(width / labelWidth));
+  const count = Math.max(1, fitting, Math.ceil(labels.length / inLine));
+  const lines: { label: Omit<StepLabel, "y">; x: number }[][] = Array.from({ length: count }, () => []);
+  const endOf = (line: readonly { x: number }[]) => (line.at(-1)?.x ?? Number.NEGATIVE_INFINITY) + labelWidth;
+  for (const label of labels.toSorted((a, b) => a.x - b.x)) {
+    const open = lines.filter((line) => line.length < inLine);
+    const shortest = open.reduce((best, line) => (endOf(line) < endOf(best) ? line : best), open[0]!);
+    const line = open.find((one) => endOf(one) <= label.x) ?? shortest;
+    line.push({ label, x: Math.max(label.x, endOf(line)) });
+  }
+  const used = lines.filter((line) => line.length > 0);
+  return used.flatMap((line, index) => {
+    let right = width;
+    const placed = line.toReversed().map(({ label, x }) => {
+      const left = Math.min(x, right - labelWidth);
+      right = left;
+      return { ...label, x: left, y: (y1 + y2) / 2 + (index - (used.length - 1) / 2) * labelHeight };
+    });
+    return placed.reverse();
   });
-  const used = Math.max(0, ...placed.map(({ line }) => line)) + 1;
-  const over = Math.max(0, ...placed.map(({ x }) => x + labelWidth - width));
-  return placed.map(({ label, line, x }) => ({
-    ...label,
-    x: Math.max(0, x - over),
-    y: middle + (line - (used - 1) / 2) * labelHeight,
-  }));
 }
