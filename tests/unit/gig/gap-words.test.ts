@@ -1,3 +1,4 @@
+import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { gapSentence, gapTokens, stageWords } from "#app/domain/gig/gap-words.ts";
 import { defaultTimes } from "#app/domain/gig/gig.ts";
@@ -129,6 +130,34 @@ describe("a gap in words", () => {
   });
 });
 
+describe("work that a tech cannot finish in time", () => {
+  // By hand: five strings down, 5 × 8 + (4 + 2 + 2 + 2 + 4 semitones) + check 5 = 59 s; s1 lasts 30 s, so 29 s are left.
+  const songs = [
+    song("s0", "EADGBE"),
+    song("s1", "EADGBE", { seconds: 30 }),
+    song("s2", "C2 G2 C3 G3 A3 C4"),
+  ];
+  const gig = gigOf(
+    [
+      [
+        { song: "s0", guitar: "alder" },
+        { song: "s1", guitar: "birch" },
+        { song: "s2", guitar: "alder" },
+      ],
+    ],
+    { crew: "tech", times: defaultTimes.tech },
+  );
+  const row = planGig(gig, repertoireOf(songs, [alder, birch])).sets[0]!.rows[2]!;
+
+  test("says from when the tech works, what is done and what is left for the stage", () => {
+    expect(gapSentence(row, "english")).toContain(
+      "The tech does 30 s of this at the side, once s0 is over; 29 s are left for the stage. About 37 s, 25 s longer than the talk covers.",
+    );
+    expect(gapTokens(row, "english").at(-1)).toEqual({ kind: "tech", words: "late at the side" });
+    expect(stageWords(row, "english")).toBe("5 down");
+  });
+});
+
 describe("what the stage sheet says", () => {
   test("counts of strings, since the letters to tune to stand beside them", () => {
     expect(stageWords(capoOffOneDown, "english")).toBe("capo off, 1 down");
@@ -167,6 +196,48 @@ describe("what the stage sheet says", () => {
     ).toBe("1 down, 6 reads E");
   });
 
+  test("a capo that moves over retuned strings comes off first and goes on last, so that the tuner reads the letters", () => {
+    expect(
+      stageWords(
+        rowOf([
+          ["DADGAD capo 5", "alder"],
+          ["DGDGBD capo 3", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("capo off, 1 down, 1 up, capo on 3");
+    expect(
+      stageWords(
+        rowOf([
+          ["DADGAD capo 5 leave 6", "alder"],
+          ["CADGAD capo 3 leave 6", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("1 down, capo to 3");
+    expect(
+      stageWords(
+        rowOf([
+          ["EADGBE capo 2", "alder"],
+          ["EADGBE capo 5", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("capo to 5");
+  });
+
+  test("of two capos the one that goes is told by its fret", () => {
+    expect(
+      stageWords(
+        rowOf([
+          ["EADGBE capo 2 capo 4 on 5-3", "alder"],
+          ["EADGBE capo 2", "alder"],
+        ]),
+        "english",
+      ),
+    ).toBe("capo off 4");
+  });
+
   test("a string that a partial capo leaves reads as itself", () => {
     expect(
       stageWords(
@@ -177,5 +248,50 @@ describe("what the stage sheet says", () => {
         "english",
       ),
     ).toBe("1 down");
+  });
+});
+
+describe("always", () => {
+  const ways = [
+    "EADGBE",
+    "DADGAD",
+    "DADGBE capo 2",
+    "DADGBE capo 5",
+    "CGCFFC capo 3 leave 6",
+    "EADGBE capo 2 capo 4 on 5-3",
+    "DGDGBD",
+  ];
+  const sets = fc.array(
+    fc.tuple(fc.constantFrom(...ways), fc.constantFrom("alder" as const, "birch" as const)),
+    { minLength: 2, maxLength: 10 },
+  );
+
+  test("words are never empty where there is work, tell every string, and hold no hole", () => {
+    fc.assert(
+      fc.property(sets, fc.constantFrom("alone" as const, "tech" as const), (picked, crew) => {
+        const songs = picked.map(([way], index) => song(`s${index}`, way, { seconds: 40 }));
+        const gig = gigOf([picked.map(([, on], index) => ({ song: `s${index}`, guitar: on }))], { crew });
+        for (const row of planGig(gig, repertoireOf(songs, [alder, birch])).sets[0]!.rows) {
+          const sentence = gapSentence(row, "english");
+          const tokens = gapTokens(row, "english");
+          expect(sentence + stageWords(row, "english")).not.toMatch(/undefined|NaN|null| {2}|,,|\.\./);
+          if (!row.gap) {
+            expect(sentence).toBe("");
+            continue;
+          }
+          expect(sentence).toMatch(/^[A-Z].*\.$/);
+          const strings = new Set(row.gap.work.flatMap((work) => work.strings.map((one) => one.string)));
+          expect(new Set(tokens.flatMap((one) => (one.kind === "string" ? [one.string] : [])))).toEqual(
+            strings,
+          );
+          for (const string of strings) expect(sentence).toContain(`String ${string} `);
+          if (row.gap.swap) expect(tokens[0]?.kind).toBe("swap");
+          const mine = row.gap.work.some((work) => work.by === "player");
+          expect(stageWords(row, "english") !== "").toBe(mine);
+          if (row.gap.work.length > 0) expect(tokens.length).toBeGreaterThan(0);
+        }
+      }),
+      { seed: 19, numRuns: 200 },
+    );
   });
 });

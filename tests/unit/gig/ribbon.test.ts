@@ -3,6 +3,7 @@ import { describe, expect, test } from "vitest";
 import { defaultTimes } from "#app/domain/gig/gig.ts";
 import { planGig } from "#app/domain/gig/plan.ts";
 import { type RibbonFrame, type RibbonLane, ribbonLanes } from "#app/domain/gig/ribbon.ts";
+import { placeLabels } from "#app/domain/gig/ribbon-labels.ts";
 import { gigOf, guitar, repertoireOf, song } from "./build-gig.ts";
 
 const guitars = [
@@ -169,17 +170,80 @@ describe("a ribbon", () => {
   });
 });
 
+describe("labels of one gap", () => {
+  const labels = (xs: number[]) =>
+    xs.map((x, index) => ({ string: index + 1, direction: "up" as const, semitones: 2, x, entryId: "e" }));
+  const room = { y1: 0, y2: 20, width: 160, labelWidth: 20, labelHeight: 11 };
+
+  test("stand beside their steps where these leave room", () => {
+    expect(placeLabels(labels([10, 60, 120]), room).map(({ x, y }) => [x, y])).toEqual([
+      [10, 10],
+      [60, 10],
+      [120, 10],
+    ]);
+  });
+
+  test("take a second line where two steps are close", () => {
+    expect(placeLabels(labels([10, 18]), room).map(({ x, y }) => [x, y])).toEqual([
+      [10, 4.5],
+      [18, 15.5],
+    ]);
+  });
+
+  test("of twelve strings in a narrow lane cover nobody and stay inside", () => {
+    const placed = placeLabels(labels(Array.from({ length: 12 }, (_, index) => 20 + index * 11)), room);
+    expect(placed).toHaveLength(12);
+    placed.forEach((a, index) => {
+      expect(a.x).toBeGreaterThanOrEqual(0);
+      expect(a.x + 20).toBeLessThanOrEqual(160);
+      for (const b of placed.slice(index + 1))
+        expect(Math.abs(a.x - b.x) >= 20 || Math.abs(a.y - b.y) >= 11).toBe(true);
+    });
+  });
+});
+
 describe("always", () => {
-  const ways = ["EADGBE", "DADGAD", "DADGBE capo 2", "CGCFFC capo 3 leave 6", "CGCGCE capo 4", "DGDGBD"];
+  const ways = [
+    "EADGBE",
+    "DADGAD",
+    "DADGBE capo 2",
+    "CGCFFC capo 3 leave 6",
+    "CGCGCE capo 4",
+    "DGDGBD",
+    "EADGBE capo 2 on 5-3",
+  ];
   const sets = fc.array(fc.tuple(fc.constantFrom(...ways), fc.constantFrom("alder", "birch", "cedar")), {
     minLength: 1,
     maxLength: 14,
   });
 
+  /** Fret and covered strings, read from the way as it is written. */
+  const coverOf = (way: string): [number, number[]] | [] => {
+    const read = /capo (\d+)( leave 6| on 5-3)?$/.exec(way);
+    if (!read) return [];
+    const covered = read[2] === " leave 6" ? [5, 4, 3, 2, 1] : read[2] ? [5, 4, 3] : [6, 5, 4, 3, 2, 1];
+    return [Number(read[1]), covered];
+  };
+
   test("strings are unbroken from top to bottom, labels never cover each other, nothing leaves its lane", () => {
     fc.assert(
       fc.property(sets, fc.constantFrom("alone" as const, "tech" as const), (songs, crew) => {
         for (const lane of lanesOf(songs, { crew })) {
+          const ofLane = songs.flatMap(([way, on], row) => (on === lane.guitar.id ? [{ way, row }] : []));
+          for (const { way, row } of ofLane) {
+            const bars = lane.capos.filter(
+              (bar) => bar.y1 < row * 64 + 40 && (bar.endY ?? bar.y2) > row * 64,
+            );
+            const [fret = 0, covered = []] = coverOf(way);
+            expect(bars.map((bar) => bar.fret)).toEqual(fret === 0 ? [] : [fret]);
+            for (const { string, pieces } of lane.strings) {
+              const piece = pieces.find((one) => one.y1 <= row * 64 + 20 && one.y2 >= row * 64 + 20);
+              const x = piece?.x1 ?? Number.NaN;
+              const under = bars.some((bar) => bar.runs.some((run) => x >= run.x1 && x <= run.x2));
+              expect(under, `${way}, string ${string}`).toBe(covered.includes(string));
+              expect(piece?.active).toBe(true);
+            }
+          }
           for (const { pieces } of lane.strings) {
             expect(pieces[0]?.y1).toBe(0);
             expect(pieces.at(-1)?.y2).toBe(songs.length * 64);
