@@ -22,6 +22,7 @@ import { partsOf } from "#app/components/gig/sets/moves.ts";
 import { SetBlock } from "#app/components/gig/sets/set-block.tsx";
 import { SuggestionsDialog, SuggestionsPanel } from "#app/components/gig/suggestions/suggestions-panel.tsx";
 import { useSuggestions } from "#app/components/gig/suggestions/use-suggestions.ts";
+import { ButtonLink } from "#app/components/ui/button.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
 
 /** Silences dnd-kit's own announcements: what happens is said in our words below. */
@@ -78,6 +79,7 @@ export function GigDesk(props: GigDeskProps) {
             <div role="alert">
               {edits.notice ? <Warning className="px-4 py-2 lg:px-0">{edits.notice}</Warning> : null}
             </div>
+            {repertoire.guitars.length === 0 ? <NoGuitars mayAdd={tools.may.prepare} /> : null}
             <PlanWarnings warnings={planWarnings(gig, plan)} />
             {plan.sets.map((setPlan, index) => (
               <SetBlock
@@ -144,6 +146,20 @@ function PlanWarnings({ warnings }: { warnings: string[] }) {
       {warnings.map((words) => (
         <Warning key={words}>{words}</Warning>
       ))}
+    </div>
+  );
+}
+
+/** Without a guitar nothing can be reckoned: the next step, said once. */
+function NoGuitars({ mayAdd }: { mayAdd: boolean }) {
+  return (
+    <div className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-3 lg:px-0">
+      <p>The act has no guitars yet, so no gap can be reckoned.</p>
+      {mayAdd ? (
+        <ButtonLink to="/guitars/new" small>
+          Add a guitar
+        </ButtonLink>
+      ) : null}
     </div>
   );
 }

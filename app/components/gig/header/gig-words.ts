@@ -16,10 +16,10 @@ export function timeAfter(startsAt: string, seconds: number, zone: string): stri
  */
 export function subLine(gig: Gig, songs: readonly number[]): string {
   const { date, time } = localTime(gig.startsAt, gig.zone);
-  const counts =
-    songs.length === 1
-      ? `one set of ${songs[0]}`
-      : `${songs.length} sets of ${songs.slice(0, -1).join(", ")} and ${songs.at(-1)}`;
+  const total = songs.reduce((sum, count) => sum + count, 0);
+  const sets = songs.length === 1 ? "one set" : `${songs.length} sets`;
+  const of = songs.length === 1 ? `${total}` : `${songs.slice(0, -1).join(", ")} and ${songs.at(-1)}`;
+  const counts = total === 0 ? `${sets}, no songs yet` : `${sets} of ${of}`;
   const facts = [
     counts,
     gig.slot === null ? null : `slot ${Math.round(gig.slot / 60)} min`,

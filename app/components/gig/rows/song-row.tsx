@@ -56,6 +56,7 @@ function RowBody({ row, set, first, last, troubles, plain = false }: RowBodyProp
   const { naming, may } = usePageTools();
   const { entry, song, neck } = row;
   const title = titleOfRow(row);
+  const shown = neck ?? song?.necks[0] ?? null;
   return (
     <>
       <div className="flex min-w-0 items-baseline gap-x-2 self-end pt-1.5 pr-2 pl-3 [grid-area:title] lg:self-center lg:pt-0 lg:pl-3.5">
@@ -83,13 +84,15 @@ function RowBody({ row, set, first, last, troubles, plain = false }: RowBodyProp
         <ChooserButton row={row} title={title} plain={plain || !may.prepare} />
       </div>
       <div className="-ml-1 min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:ml-0 lg:min-w-36 lg:self-center lg:p-0">
-        {neck ? (
-          <NeckCells neck={neck} songKey={song?.key ?? ""} naming={naming} changed={row.retuned} />
+        {shown ? (
+          <span className={neck ? "" : "text-grey-600"}>
+            <NeckCells neck={shown} songKey={song?.key ?? ""} naming={naming} changed={row.retuned} />
+          </span>
         ) : null}
       </div>
       <div className="flex items-center gap-1.5 pr-2 [grid-area:capo] lg:pr-0 lg:pl-3">
-        {neck?.capos.map((capo) => (
-          <CapoMark key={`${capo.fret}/${capo.strings.join()}`} capo={capo} strings={neck.open.length} />
+        {shown?.capos.map((capo) => (
+          <CapoMark key={`${capo.fret}/${capo.strings.join()}`} capo={capo} strings={shown.open.length} />
         ))}
       </div>
       <KeyAndLength songKey={song?.key ?? ""} seconds={song?.seconds ?? null} naming={naming} />

@@ -30,7 +30,7 @@ export function SetBlock(props: SetBlockProps) {
   const { may } = usePageTools();
   const headingId = useId();
   const column = useRef<HTMLDivElement>(null);
-  const troubles = useMemo(() => rowTroubles(plan), [plan]);
+  const troubles = useMemo(() => rowTroubles(plan, repertoire.guitars.length), [plan, repertoire.guitars]);
   const boxes = useRowBoxes(column, plan.rows, troubles);
   const firstId = plan.rows[0]?.entry.id;
   const lastId = plan.rows.at(-1)?.entry.id;

@@ -27,7 +27,9 @@ export const SuggestionsPanel = memo(function SuggestionsPanel(props: Suggestion
         </p>
       </noscript>
       {sets.length === 0 ? (
-        <p className="text-grey-600">A set needs two songs before its order matters.</p>
+        <p className="text-grey-600">
+          Order begins to matter with two songs in a set that a guitar of yours can play.
+        </p>
       ) : null}
       {plan.sets.map((setPlan) => {
         const found = sets.find((one) => one.setId === setPlan.set.id);
