@@ -89,6 +89,20 @@ async function makeHandler() {
   return createRequestHandler(build, "production");
 }
 
+export type Address = { path: string; reads: boolean; writes: boolean };
+
+/** Every address of the application, and whether it answers to reading and to posting. */
+export async function listAddresses(): Promise<Address[]> {
+  const routes = await addRoutes(await routeConfig, "root", {});
+  return Object.values(routes)
+    .filter((route) => route?.path && !route.path.includes("*"))
+    .map((route) => ({
+      path: `/${route!.path}`,
+      reads: route!.module.loader !== undefined || route!.module.default !== undefined,
+      writes: route!.module.action !== undefined,
+    }));
+}
+
 let handler: ReturnType<typeof makeHandler> | null = null;
 
 type Ask = {

@@ -90,14 +90,26 @@ export function ruleConflict(problem: Problem, effort: number): Reason {
     if (impossible(trial)) left = trial;
     else named.push(rule);
   }
+  const misplaced = sectionsMatter && left.maxMoved !== null ? misplacedSongs(problem) : [];
   const limit = left.maxMoved === null ? [] : [movedWords(left.maxMoved)];
   const sections = sectionsMatter ? ["the sections"] : [];
   const words = [...named.map((rule) => rule.words), ...sections, ...limit];
   return {
     code: left.maxMoved === null ? "rules" : "moved",
-    songs: [...new Set(named.flatMap((rule) => rule.songs))],
+    songs: [...new Set([...named.flatMap((rule) => rule.songs), ...misplaced])],
     message: `${words.join(", ")}: these contradict each other.`,
   };
+}
+
+/** Songs that stand before one of an earlier section, or after one of a later. */
+function misplacedSongs(problem: Problem): string[] {
+  const section = new Map(problem.songs.map((song) => [song.id, song.section]));
+  const sections = problem.order.map((id) => section.get(id)!);
+  return problem.order.filter(
+    (_, i) =>
+      sections.slice(i + 1).some((later) => later < sections[i]!) ||
+      sections.slice(0, i).some((earlier) => earlier > sections[i]!),
+  );
 }
 
 function movedWords(most: number): string {

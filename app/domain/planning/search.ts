@@ -55,8 +55,15 @@ function progress(run: Run): Progress {
   return { answer, bound: answer ? answer.bound : run.floor, effort: run.looks / LOOKS_PER_EFFORT };
 }
 
+/** As wide as a tenth of the effort allows, if every state had a child for each way of half the songs. */
+function beamWidth(model: Model, effort: number): number {
+  const ways = model.options.reduce((sum, options) => sum + options.length, 0);
+  const width = Math.floor((effort * LOOKS_PER_EFFORT) / (5 * model.songs * ways));
+  return Math.max(2, Math.min(16, width));
+}
+
 /** The present order if it holds, and what a narrow beam finds. */
-function* firstPlans(run: Run): Generator<Progress, void> {
+function* firstPlans(run: Run, effort: number): Generator<Progress, void> {
   const { model, rules, problem, space } = run;
   const present = Int32Array.from({ length: model.songs }, (_, song) => song);
   if (orderTest(rules, problem.maxMoved)(present)) {
@@ -65,7 +72,7 @@ function* firstPlans(run: Run): Generator<Progress, void> {
     if (plan) offer(run, plan);
     yield progress(run);
   }
-  const narrow = beam(space, 16);
+  const narrow = beam(space, beamWidth(model, effort));
   run.looks += narrow.reached;
   if (narrow.way) offer(run, space.planOf(narrow.way.moves));
   yield progress(run);
@@ -89,7 +96,8 @@ function* prove(run: Run, effort: number): Generator<Progress, void> {
   const before = run.looks;
   let changes = 0;
   let nextChanges = 40_000;
-  while (!proof.exhausted && (run.looks < effort * LOOKS_PER_EFFORT || !run.plan)) {
+  for (let first = true; !proof.exhausted; first = false) {
+    if (!first && run.plan && run.looks >= effort * LOOKS_PER_EFFORT) break;
     if (run.best) proof.setLimit(run.best.total * (1 - 5e-10));
     proof.run(PORTION);
     if (proof.found) offer(run, space.planOf(proof.found.moves));
@@ -130,7 +138,7 @@ export function* search(
     ? fixedOrderSpace(model, rules)
     : setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
   const run: Run = { problem, model, rules, space, best: null, plan: null, floor: 0, looks: 0 };
-  yield* firstPlans(run);
+  yield* firstPlans(run, effort);
   if (!run.plan) {
     const conflict = anyPlan(run);
     if (conflict) return { status: "infeasible", why: conflict };
