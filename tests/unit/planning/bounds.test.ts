@@ -1,0 +1,113 @@
+import { describe, expect, test } from "vitest";
+import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
+import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
+import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
+import { type Model, modelOf } from "#app/domain/planning/model.ts";
+import { compileRules, type OrderRules } from "#app/domain/planning/order-rules.ts";
+import type { Problem } from "#app/domain/planning/problem.ts";
+import { BestFirst } from "#app/domain/planning/search/best-first.ts";
+import { type SetSpace, setSpace } from "#app/domain/planning/set-space.ts";
+import { planExamples } from "#tests/support/planning-examples.ts";
+import { randomProblem, seededRandom } from "#tests/support/planning-random.ts";
+
+/*
+ * A bound that is too high may go unnoticed where the optimum is compared alone. Along every prefix of a proven optimal
+ * plan it must not exceed what remains of that plan's cost. The plan is found without any bound.
+ */
+
+const weights = ["none", "light", "heavy"] as const;
+
+function ready(problem: Problem): { model: Model; rules: OrderRules } | null {
+  const compiled = compileRules(problem);
+  const model = withoutRetuningKept(modelOf(problem));
+  if (!compiled.ok || model.options.some((options) => options.length === 0)) return null;
+  return { model, rules: compiled.rules };
+}
+
+/** Cheapest way, with each state on it and what it costs from there to the end. */
+function optimalStates(space: SetSpace): { state: Int32Array; depth: number; rest: number }[] | null {
+  const run = new BestFirst({ ...space, bound: () => 0 }, 400_000);
+  run.run(3_000_000);
+  if (!run.found) return null;
+  const states: { state: Int32Array; depth: number; rest: number }[] = [];
+  const child = new Int32Array(space.width);
+  let state = space.start;
+  let rest = run.found.cost;
+  for (const [depth, move] of run.found.moves.entries()) {
+    states.push({ state, depth, rest });
+    let least = Number.POSITIVE_INFINITY;
+    let next = state;
+    space.expand(state, depth, child, (cost, number) => {
+      if (number !== move || cost >= least) return;
+      least = cost;
+      next = child.slice();
+    });
+    state = next;
+    rest -= least;
+  }
+  states.push({ state, depth: space.depth, rest });
+  return states;
+}
+
+function expectBelow(space: SetSpace, name: string): number {
+  const states = optimalStates(space);
+  if (!states) return 0;
+  for (const { state, depth, rest } of states) {
+    const bound = space.bound(state, depth);
+    expect(bound, `${name}, after ${depth} songs`).toBeLessThanOrEqual(rest + 1e-6 * Math.max(1, rest));
+  }
+  return states.length;
+}
+
+function randomSet(seed: number, maxMoved: number | null): Problem {
+  const random = seededRandom(seed);
+  return randomProblem(random, {
+    songs: 3 + Math.floor(random() * 7),
+    guitars: 1 + Math.floor(random() * 3),
+    necks: 3 + Math.floor(random() * 5),
+    rules: weights[seed % 3]!,
+    maxMoved,
+    realistic: seed % 2 === 0,
+    longSongs: seed % 4 === 0,
+  });
+}
+
+describe("along every prefix of a plan proven optimal, the bound is at most what remains", () => {
+  test("needs shared out among the guitars", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 220; seed += 1) {
+      const problem = randomSet(seed, seed % 3 === 0 ? 2 : null);
+      const parts = ready(problem);
+      if (!parts) continue;
+      const { model, rules } = parts;
+      const space = setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
+      prefixes += expectBelow(space, `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(500);
+  });
+
+  test("prices for a set whose order stays", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 220; seed += 1) {
+      const parts = ready(randomSet(seed, 0));
+      if (parts) prefixes += expectBelow(fixedOrderSpace(parts.model, parts.rules), `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(200);
+  });
+
+  const examples = planExamples();
+  test.skipIf(examples === null)("the worked problems", () => {
+    let prefixes = 0;
+    for (const [i, { problem }] of (examples ?? []).entries()) {
+      const parts = ready(problem);
+      if (!parts || problem.songs.length > 12) continue;
+      const { model, rules } = parts;
+      const space =
+        problem.maxMoved === 0
+          ? fixedOrderSpace(model, rules)
+          : setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
+      prefixes += expectBelow(space, `example ${i}`);
+    }
+    expect(prefixes).toBeGreaterThan(400);
+  });
+});
