@@ -57,7 +57,7 @@ function signed(change: number): string {
 
 function Figure({ value, unit, change, label, short, strong, alarm }: FigureProps) {
   return (
-    <div className="flex min-w-0 flex-col-reverse justify-end">
+    <div className={`flex min-w-0 flex-col-reverse justify-end ${strong ? "lg:pr-3" : ""}`}>
       <dt className="truncate font-display font-medium text-grey-600 text-sm lg:text-[15px] lg:leading-tight">
         {short ? (
           <>

@@ -15,7 +15,7 @@ const longDeadAir = 20;
  * here and in the ribbon.
  */
 export function GapRow({ row, gap }: { row: Row; gap: Gap }) {
-  const { naming } = usePageTools();
+  const { naming, hand } = usePageTools();
   const sentence = [gapSentence(row, naming), ...row.warnings.map((warning) => warning.message)].join(" ");
   const tokens = gapTokens(row, naming);
   const exposed = Math.round(gap.exposed);
@@ -29,7 +29,7 @@ export function GapRow({ row, gap }: { row: Row; gap: Gap }) {
       className={`flex h-8 w-full cursor-default items-center gap-2.5 pr-3 pl-[58px] text-left font-display text-base lg:h-6 lg:pr-[36px] lg:pl-[66px] ${pointed ? "bg-grey-100" : ""} ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
       {...pointer}
     >
-      <GapStrokes row={row} gap={gap} />
+      <GapStrokes row={row} gap={gap} mirrored={hand === "left"} />
       <GapTokens tokens={tokens} />
       {row.warnings.length > 0 ? (
         <span className="inline-flex min-w-4 items-center gap-1 pl-1 text-warning">

@@ -1,16 +1,16 @@
 import { memo } from "react";
 import type { Gap, Row } from "#app/domain/gig/plan.ts";
 
-type GapStrokesProps = { row: Row; gap: Gap; mirrored?: boolean };
+type GapStrokesProps = { row: Row; gap: Gap; mirrored: boolean };
 
 const step = 10;
 const height = 18;
 
 /**
  * The ribbon folded into a gap line, for a phone: a short stroke for each string of the guitar that comes next, low
- * string on the left; a turned one is a triangle.
+ * string on the left, mirrored for the left hand; a turned one is a triangle.
  */
-export const GapStrokes = memo(function GapStrokes({ row, gap, mirrored = false }: GapStrokesProps) {
+export const GapStrokes = memo(function GapStrokes({ row, gap, mirrored }: GapStrokesProps) {
   const strings = row.guitar?.strings ?? 0;
   const turned = new Map(
     gap.work

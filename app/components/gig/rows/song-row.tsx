@@ -37,7 +37,7 @@ type SongRowProps = RowBodyProps & {
 };
 
 const areas =
-  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_40px_46px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
+  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_44px_44px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
 
 /** One song of a set. */
 export function SongRow({ number, ...body }: SongRowProps) {
@@ -113,12 +113,15 @@ function KeyAndLength({
   seconds: number | null;
   naming: Naming;
 }) {
+  const shown = nameKey(songKey, naming);
   return (
     <>
-      <div className="hidden font-display font-medium text-lg [grid-area:key] lg:block">
+      <div
+        className={`hidden whitespace-nowrap font-display font-medium [grid-area:key] lg:block ${shown.length > 3 ? "text-base" : "text-lg"}`}
+      >
         {songKey ? (
           <>
-            <span aria-hidden="true">{nameKey(songKey, naming)}</span>
+            <span aria-hidden="true">{shown}</span>
             <span className="sr-only">Key {spokenKey(songKey, naming)}</span>
           </>
         ) : null}
