@@ -211,6 +211,7 @@ describe("always", () => {
     "CGCGCE capo 4",
     "DGDGBD",
     "EADGBE capo 2 on 5-3",
+    "EADGAD capo 2 on 5-3",
   ];
   const sets = fc.array(fc.tuple(fc.constantFrom(...ways), fc.constantFrom("alder", "birch", "cedar")), {
     minLength: 1,
