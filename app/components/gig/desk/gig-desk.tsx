@@ -38,6 +38,7 @@ export function GigDesk(props: GigDeskProps) {
   const { repertoire, reader } = props;
   const desk = useGigDesk(props);
   const { edits, tools, latest, setDialog } = desk;
+  const asideId = useId();
   const list = useRef<HTMLDivElement>(null);
   const { drag, said, sensors, handlers } = useRowMoves(list, latest);
   const { gig, plan, kept } = useShownPlan(edits.gig, repertoire, reader.naming, drag);
@@ -98,9 +99,12 @@ export function GigDesk(props: GigDeskProps) {
             {plan.note ? <p className="px-4 pt-3 text-grey-600 lg:px-0">{plan.note}</p> : null}
           </div>
           <aside
-            aria-label="Less retuning"
+            aria-labelledby={asideId}
             className="sticky top-[81px] hidden h-[calc(100dvh-81px)] overflow-y-auto border-grey-200 border-l bg-white py-5 pr-4 pl-5 min-[85rem]:block"
           >
+            <h2 id={asideId} className="pb-1 font-semibold text-xl leading-tight">
+              Less retuning
+            </h2>
             <SuggestionsPanel {...panel} />
           </aside>
         </div>

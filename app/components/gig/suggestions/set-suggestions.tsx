@@ -46,7 +46,7 @@ export function SetSuggestionsBlock({ gig, plan, alone, repertoire, rungs, begun
   const now = Math.round(plan.totals.exposed);
   return (
     <section className="flex flex-col">
-      <h2 className="font-semibold text-xl leading-tight">{alone ? "Less retuning" : plan.set.name}</h2>
+      {alone ? null : <h3 className="font-semibold text-lg leading-tight">{plan.set.name}</h3>}
       <p className="pb-2 text-grey-600 leading-snug">
         Now {now} s of dead air.{heldWords(plan)}
       </p>
