@@ -37,7 +37,11 @@ function page(role: Role, shown: Gig = gig, naming: "english" | "german" = "engl
 
 /** The accessible names of all buttons, in their order. */
 function buttons(html: string): string[] {
-  return [...html.matchAll(/<button[^>]*aria-label="([^"]*)"/g)].map(([, name]) => name!);
+  return [...html.matchAll(/<button([^>]*)>(.*?)<\/button>/g)].map(([, attributes, content]) => {
+    const label = /aria-label="([^"]*)"/.exec(attributes!)?.[1];
+    const spoken = content!.replace(/<(\w+)[^>]*aria-hidden="true".*?<\/\1>/g, "").replace(/<[^>]*>/g, "");
+    return (label ?? spoken).replaceAll(/\s+/g, " ").trim();
+  });
 }
 
 describe("the page without JavaScript", () => {
@@ -76,7 +80,7 @@ describe("buttons are those the role may use", () => {
     expect(any(names, /^2, move Low Meadow$/)).toBe(true);
     expect(any(names, /^Low Meadow: more$/)).toBe(true);
     expect(any(names, /choose guitar and tuning for Low Meadow/)).toBe(true);
-    expect(any(names, /^Hold Harbour Lamps first$/)).toBe(true);
+    expect(any(names, /^held first: Harbour Lamps$/)).toBe(true);
     expect(any(names, /^Set 1: more$/)).toBe(true);
     expect(any(names, /^Undo/)).toBe(true);
     expect(page(role)).toContain("Add a song to Set 1");
@@ -87,13 +91,14 @@ describe("buttons are those the role may use", () => {
     expect(any(names, /choose guitar and tuning for Low Meadow/)).toBe(true);
     expect(any(names, /^Low Meadow: more$/)).toBe(true);
     expect(any(names, /^Undo/)).toBe(true);
-    expect(any(names, /move Low Meadow|^Hold |^Set 1: more|Gig details/)).toBe(false);
+    expect(any(names, /move Low Meadow|^held |^Set 1: more|Gig details/)).toBe(false);
     expect(page("tech")).not.toContain("Add a song to Set 1");
   });
 
   test("a guest reads", () => {
-    const names = of("guest").filter((name) => !name.startsWith("Before "));
-    expect(names).toEqual([]);
+    const gaps = of("guest").filter((name) => name !== "Less retuning");
+    expect(gaps).toHaveLength(2);
+    for (const name of gaps) expect(name).toMatch(/ Before (Low Meadow|Quarry Song)$/);
   });
 });
 

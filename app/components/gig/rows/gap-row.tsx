@@ -3,6 +3,7 @@ import { useIsPointed, usePointer } from "#app/components/gig/rows/gap-focus.tsx
 import { GapStrokes } from "#app/components/gig/rows/gap-strokes.tsx";
 import { GapTokens } from "#app/components/gig/rows/gap-tokens.tsx";
 import { warningWords } from "#app/components/gig/rows/row-warnings.tsx";
+import { titleOfRow } from "#app/components/gig/rows/song-row.tsx";
 import { Octagon } from "#app/components/ui/warning.tsx";
 import { gapSentence, gapTokens } from "#app/domain/gig/gap-words.ts";
 import type { Gap, Row } from "#app/domain/gig/plan.ts";
@@ -25,19 +26,21 @@ export function GapRow({ row, gap }: { row: Row; gap: Gap }) {
     <button
       type="button"
       data-gap={row.entry.id}
-      aria-label={`Before ${row.song?.title ?? "the next song"}: ${sentence}`}
       className={`flex h-8 w-full cursor-default items-center gap-2.5 pr-3 pl-[58px] text-left font-display text-base lg:h-6 lg:pr-[36px] lg:pl-[66px] ${pointed ? "bg-grey-100" : ""} ${exposed > 0 ? "font-semibold text-ink" : "font-medium text-grey-600"}`}
       {...pointer}
     >
+      <span className="sr-only">
+        {sentence} Before {titleOfRow(row)}
+      </span>
       <GapStrokes row={row} gap={gap} mirrored={hand === "left"} />
       <GapTokens tokens={tokens} />
       {row.warnings.length > 0 ? (
-        <span className="inline-flex min-w-4 items-center gap-1 pl-1 text-warning">
+        <span aria-hidden="true" className="inline-flex min-w-4 items-center gap-1 pl-1 text-warning">
           <Octagon size={13} />
           <span className="truncate font-medium max-lg:hidden">{warningWords(row.warnings)}</span>
         </span>
       ) : null}
-      <span className="tabular ml-auto w-12 shrink-0 text-right">
+      <span aria-hidden="true" className="tabular ml-auto w-12 shrink-0 text-right">
         {exposed > 0 ? (
           <span className={gap.exposed >= longDeadAir ? "border-ink border-b-2 font-bold" : ""}>
             {exposed} s

@@ -43,7 +43,12 @@ export function GapTokens({ tokens }: { tokens: GapToken[] }) {
   const first = tokens.findIndex((token) => token.kind === "string");
   const count = (direction: "up" | "down") => strings.filter((token) => token.direction === direction).length;
   const few = [counted(count("down"), "down"), counted(count("up"), "up")].filter(Boolean).join(", ");
-  if (tokens.length === 0) return <span className="text-grey-600">nothing to do</span>;
+  if (tokens.length === 0)
+    return (
+      <span aria-hidden="true" className="text-grey-600">
+        nothing to do
+      </span>
+    );
   return (
     <span
       className="flex min-w-0 items-baseline gap-x-1.5 overflow-hidden whitespace-nowrap"

@@ -87,7 +87,6 @@ function HoldTag({
       type="button"
       className={`${tag} group/hold hover:text-ink`}
       aria-pressed={held}
-      aria-label={`Hold ${title} ${end}`}
       title={
         held
           ? `Less retuning keeps this song ${end}. Press to free it.`
@@ -101,7 +100,11 @@ function HoldTag({
       }
     >
       <Icon size={12} aria-hidden="true" />
-      <span aria-hidden="true">{held ? "held" : "free"}</span>
+      {held ? "held" : "free"}
+      <span className="sr-only">
+        {" "}
+        {end}: {title}
+      </span>
     </button>
   );
 }

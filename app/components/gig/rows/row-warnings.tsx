@@ -25,10 +25,10 @@ export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: 
   return (
     <button
       type="button"
-      aria-label={sentence}
       className="inline-flex min-h-6 min-w-6 shrink-999 items-center gap-1 self-center whitespace-nowrap font-display font-medium text-[15px] text-warning"
       {...pointer}
     >
+      <span className="sr-only">{sentence}</span>
       <span className="shrink-0">
         <Octagon size={13} />
       </span>
