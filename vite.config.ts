@@ -40,21 +40,9 @@ export default defineConfig({
   plugins: [tailwindcss(), reactRouter(), serverEntries()],
   resolve: { tsconfigPaths: true },
   worker: { format: "es" },
+  // Packages found only when a page asks for them are prepared then, and the first page after a start breaks.
   optimizeDeps: {
-    include: [
-      "@base-ui/react/dialog",
-      "@base-ui/react/menu",
-      "@base-ui/react/popover",
-      "@base-ui/react/toast",
-      "@conform-to/react",
-      "@conform-to/zod/v4",
-      "@dnd-kit/core",
-      "@dnd-kit/sortable",
-      "@dnd-kit/utilities",
-      "fractional-indexing",
-      "nanoid",
-      "tonal",
-      "zod",
-    ],
+    entries: ["app/entry.client.tsx", "app/components/**/*.tsx", "app/workers/*.browser.ts"],
+    include: ["@conform-to/react", "@conform-to/zod/v4", "lucide-react"],
   },
 });

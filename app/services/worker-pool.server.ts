@@ -1,4 +1,5 @@
 import { Piscina } from "piscina";
+import { log } from "#app/services/log.server.ts";
 
 type PoolOptions = {
   maxThreads: number;
@@ -11,23 +12,28 @@ export class QueueFull extends Error {
   override name = "QueueFull";
 }
 
-/**
- * A pool of threads that run app/workers/`name`.node.ts, opened with its first job. Run from its source while
- * developing and testing, from beside the server once built.
- */
+/** Beside the server once built; from its source while developing and testing. */
+function fileOf(name: string): { filename: string; workerData?: string } {
+  const beside = (file: string) => new URL(file, import.meta.url).href;
+  const fromSource = import.meta.url.endsWith(".ts");
+  if (!fromSource) return { filename: beside(`./${name}.node.js`) };
+  return { filename: beside("../workers/from-source.mjs"), workerData: name };
+}
+
+/** A pool of threads that run app/workers/`name`.node.ts, opened with its first job. */
 export function workerPool<Job, Result>(name: string, options: () => PoolOptions) {
   let pool: Piscina<Job, Result> | null = null;
 
   function open(): Piscina<Job, Result> {
-    const fromSource = import.meta.url.endsWith(".ts");
-    return new Piscina({
-      filename: new URL(fromSource ? `../workers/${name}.node.ts` : `./${name}.node.js`, import.meta.url)
-        .href,
-      execArgv: fromSource ? ["--import", "tsx"] : [],
+    const opened = new Piscina<Job, Result>({
+      ...fileOf(name),
       minThreads: 0,
       idleTimeout: 30_000,
       ...options(),
     });
+    // A thread that breaks while it has no job: the next job gets another.
+    opened.on("error", (error) => log.error({ err: error, worker: name }, "a worker thread broke"));
+    return opened;
   }
 
   return {
