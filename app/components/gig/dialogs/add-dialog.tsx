@@ -1,7 +1,7 @@
 import { useState } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { AddSong } from "#app/components/gig/sets/add-song.tsx";
-import { type Part, partName } from "#app/components/gig/sets/moves.ts";
+import { type Part, partName, toPart } from "#app/components/gig/sets/moves.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { Dialog } from "#app/components/ui/dialog.tsx";
 import { SelectField } from "#app/components/ui/field.tsx";
@@ -52,7 +52,7 @@ export function AddDialog({ setId, parts, songs, standing, onAdd, onClose }: Add
           autoFocus
           songs={songs}
           standing={standing}
-          where={partName(part)}
+          where={toPart(part, 2)}
           onAdd={(song) => {
             onAdd(song, part);
             setAdded((before) => [song.title, ...before]);

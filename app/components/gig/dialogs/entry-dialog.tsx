@@ -7,6 +7,8 @@ import { Dialog } from "#app/components/ui/dialog.tsx";
 import { TextArea, TextField } from "#app/components/ui/field.tsx";
 import type { Entry, Gig } from "#app/domain/gig/gig.ts";
 
+const formId = "entry-form";
+
 type EntryDialogProps = {
   entry: Entry;
   topic: EntryTopic;
@@ -33,6 +35,13 @@ export function EntryDialog({ entry, topic, gig, parts, titleOf, usualCover, onC
       onOpenChange={(open) => (open ? null : onClose())}
       title={topics[topic](title)}
       closeLabel={topic === "rules" ? "Done" : "Cancel"}
+      actions={
+        topic === "rules" ? undefined : (
+          <Button type="submit" form={formId} look="primary">
+            Keep it
+          </Button>
+        )
+      }
     >
       {topic === "rules" ? <RulesForm entry={entry} gig={gig} parts={parts} titleOf={titleOf} /> : null}
       {topic === "cover" ? (
@@ -68,6 +77,7 @@ function CoverForm({
   const [error, setError] = useState<string>();
   return (
     <form
+      id={formId}
       className="flex flex-col items-start gap-4"
       onSubmit={(event) => {
         event.preventDefault();
@@ -94,9 +104,6 @@ function CoverForm({
         hint={`Work within the talk is no dead air. Empty: ${usual} s, as for the song or the gig.`}
         errors={error ? [error] : undefined}
       />
-      <Button type="submit" look="primary">
-        Keep it
-      </Button>
     </form>
   );
 }
@@ -109,6 +116,7 @@ function NoteForm({ entry, title, onDone }: { entry: Entry; title: string; onDon
   const [text, setText] = useState(entry.techNote);
   return (
     <form
+      id={formId}
       className="flex flex-col items-start gap-4"
       onSubmit={(event) => {
         event.preventDefault();
@@ -132,9 +140,6 @@ function NoteForm({ entry, title, onDone }: { entry: Entry; title: string; onDon
         onChange={(event) => setText(event.currentTarget.value)}
         hint={`For this song in this set. ${longestNote} characters at most.`}
       />
-      <Button type="submit" look="primary">
-        Keep it
-      </Button>
     </form>
   );
 }

@@ -37,8 +37,19 @@ export function SetDialog({ set, first, onClose }: SetDialogProps) {
     onClose();
   };
   return (
-    <Dialog open onOpenChange={(open) => (open ? null : onClose())} title={set.name} closeLabel="Cancel">
+    <Dialog
+      open
+      onOpenChange={(open) => (open ? null : onClose())}
+      title={set.name}
+      closeLabel="Cancel"
+      actions={
+        <Button type="submit" form="set-form" look="primary">
+          Keep it
+        </Button>
+      }
+    >
       <form
+        id="set-form"
         className="flex flex-col gap-4"
         onSubmit={(event) => {
           event.preventDefault();
@@ -64,9 +75,6 @@ export function SetDialog({ set, first, onClose }: SetDialogProps) {
             errors={errors.minutes ? [errors.minutes] : undefined}
           />
         )}
-        <Button type="submit" look="primary" className="self-start">
-          Keep it
-        </Button>
       </form>
     </Dialog>
   );

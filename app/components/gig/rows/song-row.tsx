@@ -37,7 +37,7 @@ type SongRowProps = RowBodyProps & {
 };
 
 const areas =
-  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_76px_auto_72px_44px_44px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
+  "grid grid-cols-[48px_minmax(0,1fr)_auto_auto_44px] [grid-template-areas:'num_title_capo_badge_menu'_'num_cells_capo_badge_menu'_'num_warn_warn_warn_warn'] lg:grid-cols-[52px_minmax(0,1fr)_82px_auto_72px_44px_44px_36px] lg:[grid-template-areas:'num_title_badge_cells_capo_key_len_menu'_'num_warn_warn_warn_warn_warn_warn_warn']";
 
 /** One song of a set. */
 export function SongRow({ number, ...body }: SongRowProps) {

@@ -1,7 +1,7 @@
 import { memo, useState } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { AddSong } from "#app/components/gig/sets/add-song.tsx";
-import { type Part, partName } from "#app/components/gig/sets/moves.ts";
+import { type Part, toPart } from "#app/components/gig/sets/moves.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import type { Section } from "#app/domain/gig/gig.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
@@ -21,7 +21,7 @@ export const AddLine = memo(function AddLine(props: AddLineProps) {
   const { openDialog } = usePageTools();
   const [chosen, setChosen] = useState<Section | null>(null);
   const section = hasEncore ? (chosen ?? 1) : 0;
-  const where = partName({ setName, section });
+  const where = toPart({ setName, section }, 2);
   return (
     <div className="hidden items-center gap-3 pl-[38px] lg:flex">
       <div className="min-w-0 flex-1">
