@@ -18,7 +18,13 @@ export function buttonClass(look: ButtonLook = "plain", small = false): string {
 
 type Look = { look?: ButtonLook; small?: boolean };
 
-export function Button({ look, small, className = "", type = "button", ...rest }: ComponentProps<"button"> & Look) {
+export function Button({
+  look,
+  small,
+  className = "",
+  type = "button",
+  ...rest
+}: ComponentProps<"button"> & Look) {
   return <button type={type} className={`${buttonClass(look, small)} ${className}`} {...rest} />;
 }
 

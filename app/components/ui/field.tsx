@@ -9,7 +9,11 @@ export function fieldIds(id: string): FieldIds {
   return { id, hintId: `${id}-hint`, errorId: `${id}-error` };
 }
 
-export function describedBy(ids: FieldIds, hint: ReactNode, errors: string[] | undefined): string | undefined {
+export function describedBy(
+  ids: FieldIds,
+  hint: ReactNode,
+  errors: string[] | undefined,
+): string | undefined {
   const parts = [hint ? ids.hintId : "", errors?.length ? ids.errorId : ""].filter(Boolean);
   return parts.length > 0 ? parts.join(" ") : undefined;
 }
@@ -54,7 +58,15 @@ const control =
 type ControlProps = { label: ReactNode; hint?: ReactNode; errors?: string[]; wrapClass?: string };
 
 /** A one-line text field with its label, hint and errors. `id` defaults to `name`. */
-export function TextField({ label, hint, errors, wrapClass, id, className = "", ...rest }: ComponentProps<"input"> & ControlProps) {
+export function TextField({
+  label,
+  hint,
+  errors,
+  wrapClass,
+  id,
+  className = "",
+  ...rest
+}: ComponentProps<"input"> & ControlProps) {
   const fieldId = id ?? rest.name ?? "";
   return (
     <Field label={label} id={fieldId} hint={hint} errors={errors} className={wrapClass}>
@@ -69,7 +81,15 @@ export function TextField({ label, hint, errors, wrapClass, id, className = "", 
   );
 }
 
-export function TextArea({ label, hint, errors, wrapClass, id, className = "", ...rest }: ComponentProps<"textarea"> & ControlProps) {
+export function TextArea({
+  label,
+  hint,
+  errors,
+  wrapClass,
+  id,
+  className = "",
+  ...rest
+}: ComponentProps<"textarea"> & ControlProps) {
   const fieldId = id ?? rest.name ?? "";
   return (
     <Field label={label} id={fieldId} hint={hint} errors={errors} className={wrapClass}>
@@ -84,7 +104,16 @@ export function TextArea({ label, hint, errors, wrapClass, id, className = "", .
   );
 }
 
-export function SelectField({ label, hint, errors, wrapClass, id, className = "", children, ...rest }: ComponentProps<"select"> & ControlProps) {
+export function SelectField({
+  label,
+  hint,
+  errors,
+  wrapClass,
+  id,
+  className = "",
+  children,
+  ...rest
+}: ComponentProps<"select"> & ControlProps) {
   const fieldId = id ?? rest.name ?? "";
   return (
     <Field label={label} id={fieldId} hint={hint} errors={errors} className={wrapClass}>
@@ -102,7 +131,12 @@ export function SelectField({ label, hint, errors, wrapClass, id, className = ""
 }
 
 /** A tick box with its label on the right and a hint below. */
-export function CheckField({ label, hint, id, ...rest }: ComponentProps<"input"> & { label: ReactNode; hint?: ReactNode }) {
+export function CheckField({
+  label,
+  hint,
+  id,
+  ...rest
+}: ComponentProps<"input"> & { label: ReactNode; hint?: ReactNode }) {
   const fieldId = id ?? rest.name ?? "";
   return (
     <div className="flex flex-col">

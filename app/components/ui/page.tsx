@@ -1,7 +1,15 @@
 import type { ReactNode } from "react";
 
 /** A page's heading with what belongs to it on the right: its one primary action. */
-export function PageHead({ title, sub, children }: { title: ReactNode; sub?: ReactNode; children?: ReactNode }) {
+export function PageHead({
+  title,
+  sub,
+  children,
+}: {
+  title: ReactNode;
+  sub?: ReactNode;
+  children?: ReactNode;
+}) {
   return (
     <header className="flex flex-wrap items-end justify-between gap-x-6 gap-y-3 border-grey-200 border-b px-4 pt-5 pb-4 md:px-6">
       <div>

@@ -3,8 +3,17 @@ export const badgeShapes = ["round", "square", "hexagon", "cut", "slant", "doubl
 export type BadgeShape = (typeof badgeShapes)[number];
 
 export const instrumentKinds = [
-  "acoustic", "electric", "classical", "resonator", "twelve-string", "baritone", "bass",
-  "ukulele", "mandolin", "banjo", "other",
+  "acoustic",
+  "electric",
+  "classical",
+  "resonator",
+  "twelve-string",
+  "baritone",
+  "bass",
+  "ukulele",
+  "mandolin",
+  "banjo",
+  "other",
 ] as const;
 export type InstrumentKind = (typeof instrumentKinds)[number];
 
