@@ -1,5 +1,7 @@
 import type { Answer, FoundAnswer, Reason } from "#app/domain/planning/answer.ts";
 import { answerOf, type NumberedPlan } from "#app/domain/planning/answer-of.ts";
+import { greatest } from "#app/domain/planning/bounds/greatest.ts";
+import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { fixedOrderSpace, planInOrder } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
@@ -144,6 +146,13 @@ export function* search(
     if (conflict) return { status: "infeasible", why: conflict };
   }
   const toTheEnd = model.songs <= SMALL_SET || (fixed && !model.tech);
+  if (!fixed && run.space.layout.limited && run.best) {
+    const target = run.best.total;
+    const rounds = Number((globalThis as any).ROUNDS ?? 60);
+    run.space = setSpace(model, rules, (layout) =>
+      greatest(partitionBound(model, rules, layout), keptOrderBound(model, layout, { target, rounds })),
+    );
+  }
   yield* prove(run, toTheEnd ? Math.max(effort, TO_THE_END) : effort);
   if (run.plan) return answerOf(problem, run.plan, run.floor);
   return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_LOOKS)] };

@@ -1,4 +1,5 @@
 import type { Model } from "#app/domain/planning/model.ts";
+import { raisePrices } from "#app/domain/planning/search/raise-prices.ts";
 import type { SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
 import { stepCost } from "#app/domain/planning/step-cost.ts";
@@ -6,7 +7,6 @@ import { stepCost } from "#app/domain/planning/step-cost.ts";
 /** A tech is never late in a bound. */
 const ENOUGH = Number.POSITIVE_INFINITY;
 const ROUNDS = 400;
-const STEADINESS = 0.85;
 
 type Way = { place: number; penalty: number };
 
@@ -74,8 +74,8 @@ function sweep(part: GuitarPart, prices: Float64Array): void {
   }
 }
 
-/** Counts how often each song is played when this guitar goes its cheapest way. */
-function trace(part: GuitarPart, prices: Float64Array, start: number, played: Int32Array): void {
+/** Follows this guitar's cheapest way, and takes off what each song lacks of being played. */
+function trace(part: GuitarPart, prices: Float64Array, start: number, lack: Float64Array): void {
   const { rows, ways, least, steps, most } = part;
   let place = part.places.get(start)!;
   let hand = 0;
@@ -90,7 +90,7 @@ function trace(part: GuitarPart, prices: Float64Array, start: number, played: In
     const w = ways[song]!.findIndex(
       (way, i) => value === steps[from + i]! - prices[song]! + least[(after + way.place) * 2 + 1]!,
     );
-    played[song]! += 1;
+    lack[song]! -= 1;
     place = ways[song]![w]!.place;
     hand = 1;
   }
@@ -110,39 +110,23 @@ function trace(part: GuitarPart, prices: Float64Array, start: number, played: In
  */
 export function fixedOrderBound(model: Model, layout: SetLayout, target: number): SetBound {
   const parts = Array.from({ length: model.guitars }, (_, guitar) => guitarPart(model, guitar));
-  const prices = new Float64Array(model.songs);
-  let best = { value: Number.NEGATIVE_INFINITY, prices: prices.slice() };
-  const heading = new Float64Array(model.songs);
-  let pace = 1;
-  let stale = 0;
-  for (let round = 0; round < ROUNDS; round += 1) {
-    const played = new Int32Array(model.songs);
-    let value = prices.reduce((sum, price) => sum + price, 0);
-    for (const [guitar, part] of parts.entries()) {
-      sweep(part, prices);
-      value += part.least[part.places.get(model.start[guitar]!)! * 2]!;
-      trace(part, prices, model.start[guitar]!, played);
-    }
-    stale = value > best.value ? 0 : stale + 1;
-    if (value > best.value) best = { value, prices: prices.slice() };
-    if (stale === 15) {
-      pace /= 2;
-      stale = 0;
-      prices.set(best.prices);
-      heading.fill(0);
-    }
-    if (value >= target || played.every((times) => times === 1)) break;
-    let length = 0;
-    for (let song = 0; song < prices.length; song += 1) {
-      heading[song] = 1 - played[song]! + STEADINESS * heading[song]!;
-      length += heading[song]! ** 2;
-    }
-    const step = (pace * (target - value)) / Math.max(length, 1e-9);
-    for (let song = 0; song < prices.length; song += 1) prices[song]! += step * heading[song]!;
-  }
-  for (const part of parts) sweep(part, best.prices);
+  const prices = raisePrices(
+    new Float64Array(model.songs),
+    (tried) => {
+      const lack = new Float64Array(model.songs).fill(1);
+      let value = tried.reduce((sum, price) => sum + price, 0);
+      for (const [guitar, part] of parts.entries()) {
+        sweep(part, tried);
+        value += part.least[part.places.get(model.start[guitar]!)! * 2]!;
+        trace(part, tried, model.start[guitar]!, lack);
+      }
+      return { value, lack };
+    },
+    { target, rounds: ROUNDS, free: model.songs },
+  );
+  for (const part of parts) sweep(part, prices);
   const rest = new Float64Array(model.songs + 1);
-  for (let song = model.songs - 1; song >= 0; song -= 1) rest[song] = rest[song + 1]! + best.prices[song]!;
+  for (let song = model.songs - 1; song >= 0; song -= 1) rest[song] = rest[song + 1]! + prices[song]!;
 
   return (state, depth) => {
     if (depth === model.songs) return 0;
