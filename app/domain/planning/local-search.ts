@@ -1,7 +1,9 @@
 import type { NumberedPlan } from "#app/domain/planning/answer-of.ts";
 import type { Model } from "#app/domain/planning/model.ts";
+import { changeRun } from "#app/domain/planning/moves/change-run.ts";
 import { changeWay, changeWayAndPlace } from "#app/domain/planning/moves/change-way.ts";
 import type { Draft, Move } from "#app/domain/planning/moves/draft.ts";
+import { moveAnother } from "#app/domain/planning/moves/move-another.ts";
 import { moveBlock } from "#app/domain/planning/moves/move-block.ts";
 import { swapSongs } from "#app/domain/planning/moves/swap-songs.ts";
 import { turnBlock } from "#app/domain/planning/moves/turn-block.ts";
@@ -11,17 +13,27 @@ import { scoreOf } from "#app/domain/planning/score.ts";
 import { anneal, type Neighbourhood } from "#app/domain/planning/search/annealing.ts";
 import { below, type Random } from "#app/domain/planning/search/random.ts";
 
-const moves: Move[] = [moveBlock, moveBlock, swapSongs, turnBlock, changeWay, changeWay, changeWayAndPlace];
+const anyOrder: Move[] = [
+  moveBlock,
+  moveBlock,
+  swapSongs,
+  turnBlock,
+  changeWay,
+  changeRun,
+  changeWayAndPlace,
+];
+const fewMoved: Move[] = [moveBlock, moveAnother, moveAnother, changeWay, changeWay, changeRun];
 
 /** One plan and its neighbours: every change is scored whole, and dropped where it breaks a rule. */
 function planNeighbourhood(model: Model, rules: OrderRules, plan: NumberedPlan) {
   const score = scoreOf(model);
-  const holds = orderTest(rules, model.problem.maxMoved);
-  const optionCounts = Int32Array.from(model.options, (options) => options.length);
+  const { maxMoved } = model.problem;
+  const holds = orderTest(rules, maxMoved);
+  const moves = maxMoved !== null && maxMoved < model.songs - 1 ? fewMoved : anyOrder;
   const ways = new Int32Array(model.songs);
   for (const [i, song] of plan.songs.entries()) ways[song] = model.options[song]!.indexOf(plan.options[i]!);
-  const now: Draft = { songs: Int32Array.from(plan.songs), ways, optionCounts };
-  const trial: Draft = { songs: now.songs.slice(), ways: now.ways.slice(), optionCounts };
+  const now: Draft = { songs: Int32Array.from(plan.songs), ways, model, rules };
+  const trial: Draft = { ...now, songs: now.songs.slice(), ways: now.ways.slice() };
   const best = { songs: now.songs.slice(), ways: now.ways.slice() };
   let proposed = Number.POSITIVE_INFINITY;
   const thing: Neighbourhood = {
@@ -54,16 +66,17 @@ function planNeighbourhood(model: Model, rules: OrderRules, plan: NumberedPlan) 
  * A plan at least as good as the given one, by trying small changes.
  *
  * @param steps changes to try
+ * @param heat how readily changes for the worse are taken at first, as a share of what a gap costs on average
  */
 export function improve(
   model: Model,
   rules: OrderRules,
   plan: NumberedPlan,
-  { random, steps }: { random: Random; steps: number },
+  { random, steps, heat }: { random: Random; steps: number; heat: number },
 ): NumberedPlan {
   if (model.songs < 2) return plan;
   const { thing, result } = planNeighbourhood(model, rules, plan);
-  const hot = Math.max(1e-6, (thing.cost / model.songs) * 0.5);
-  anneal(thing, { random, steps, hot, cold: hot / 200 });
+  const hot = Math.max(1e-6, (thing.cost / model.songs) * heat);
+  anneal(thing, { random, steps, hot, cold: hot / 300 });
   return result();
 }

@@ -80,7 +80,7 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       const parts = ready(problem);
       if (!parts) continue;
       const { model, rules } = parts;
-      const space = setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
+      const space = setSpace(model, rules, (layout) => partitionBound(model, rules, layout, "dear"));
       prefixes += expectBelow(space, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(500);
@@ -105,7 +105,7 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       const space =
         problem.maxMoved === 0
           ? fixedOrderSpace(model, rules)
-          : setSpace(model, rules, (layout) => partitionBound(model, rules, layout));
+          : setSpace(model, rules, (layout) => partitionBound(model, rules, layout, "dear"));
       prefixes += expectBelow(space, `example ${i}`);
     }
     expect(prefixes).toBeGreaterThan(400);

@@ -2,26 +2,21 @@ import type { Model, Option } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
 
 /**
- * Songs that ask for the same: same options, same cover, same windows of positions. As long as one of them is to be
- * played, some guitar must be brought into one of these states at least once more.
+ * Songs that ask for the same: same options, same section. As long as one of them is to be played, some guitar must be
+ * brought into one of these states once more. `cover` is the greatest of theirs.
  */
 export type Need = { songs: number[]; options: Option[]; cover: number };
 
 /** The needs that bounds count, and the songs that may lie between them without being counted. */
 export type Needs = {
   counted: Need[];
-  /** Songs that may be passed through: those of uncounted needs, and of counted needs of two songs or more. */
+  /** All songs but one of each counted need: the one that stands for it, of the greatest cover. */
   passing: number[];
   /** `first[b]` has bit a set where all songs of need a must be played before any of need b. */
   first: Int32Array;
 };
 
-function keyOf(model: Model, rules: OrderRules, song: number): string {
-  const options = model.options[song]!.map(
-    ({ guitar, neck, penalty }) => `${guitar}.${neck}.${penalty}`,
-  ).sort();
-  return `${options.join(" ")}|${model.cover[song]}|${rules.earliest[song]}-${rules.latest[song]}`;
-}
+type Draft = Need & { key: string };
 
 function comesFirst(rules: OrderRules, a: number, b: number): boolean {
   return rules.latest[a]! < rules.earliest[b]! || rules.predecessors[b]!.includes(a);
@@ -36,19 +31,40 @@ function comesForFree(need: Need, other: Need): boolean {
   );
 }
 
-/**
- * Groups the songs into needs and picks those that are worth counting: at most `most`, those that others serve by the way
- * last, then those with the fewest options first.
- */
-export function needsOf(model: Model, rules: OrderRules, most: number): Needs {
-  const groups = new Map<string, number[]>();
+/** Songs by options, section and cover; one with a place of its own stands alone. */
+function finest(model: Model, rules: OrderRules): Draft[] {
+  const section = new Map(model.problem.songs.map((song) => [song.id, song.section]));
+  const groups = new Map<string, Draft>();
   for (let song = 0; song < model.songs; song += 1) {
-    const key = keyOf(model, rules, song);
-    groups.set(key, [...(groups.get(key) ?? []), song]);
+    const options = model.options[song]!;
+    const words = options.map(({ guitar, neck, penalty }) => `${guitar}.${neck}.${penalty}`).sort();
+    const fixed = rules.earliest[song] === rules.latest[song] ? song : "";
+    const key = `${words.join(" ")}|${section.get(model.problem.order[song]!)}|${fixed}`;
+    const cover = model.cover[song]!;
+    const known = groups.get(`${key}|${cover}`);
+    if (known) known.songs.push(song);
+    else groups.set(`${key}|${cover}`, { key, songs: [song], options, cover });
   }
-  const needs = [...groups.values()].map(
-    (songs): Need => ({ songs, options: model.options[songs[0]!]!, cover: model.cover[songs[0]!]! }),
-  );
+  return [...groups.values()];
+}
+
+/** Makes one need of the two that differ in cover alone, and in that the least; null where there are none. */
+function mergeClosest(needs: Draft[]): Draft[] | null {
+  let closest: { a: Draft; b: Draft; apart: number } | null = null;
+  for (const [i, a] of needs.entries()) {
+    for (const b of needs.slice(i + 1)) {
+      const apart = Math.abs(a.cover - b.cover);
+      if (a.key === b.key && (!closest || apart < closest.apart)) closest = { a, b, apart };
+    }
+  }
+  if (!closest) return null;
+  const { a, b } = closest;
+  const merged = { ...a, songs: [...a.songs, ...b.songs], cover: Math.max(a.cover, b.cover) };
+  return needs.flatMap((need) => (need === a ? [merged] : need === b ? [] : [need]));
+}
+
+/** The `most` needs that are worth counting: those that others serve by the way last, those with few options first. */
+function worthCounting(needs: Draft[], most: number): Draft[] {
   const free = needs.map((need, i) =>
     needs.some((other, k) => k !== i && comesForFree(need, other) && (!comesForFree(other, need) || k < i)),
   );
@@ -59,8 +75,22 @@ export function needsOf(model: Model, rules: OrderRules, most: number): Needs {
         Number(free[a]) - Number(free[b]) || needs[a]!.options.length - needs[b]!.options.length || a - b,
     );
   const chosen = new Set(ranked.slice(0, most));
-  const counted = needs.filter((_, i) => chosen.has(i));
-  const passing = needs.flatMap((need, i) => (chosen.has(i) && need.songs.length === 1 ? [] : need.songs));
+  return needs.filter((_, i) => chosen.has(i));
+}
+
+/** At most `most` needs that are worth counting: first those that differ in cover alone become one, then some are left out. */
+export function needsOf(model: Model, rules: OrderRules, most: number): Needs {
+  let needs = finest(model, rules);
+  while (needs.length > most) {
+    const fewer = mergeClosest(needs);
+    if (!fewer) break;
+    needs = fewer;
+  }
+  const counted = worthCounting(needs, most);
+  const standing = new Set(
+    counted.map(({ songs, cover }) => songs.find((song) => model.cover[song] === cover)!),
+  );
+  const passing = model.options.map((_, song) => song).filter((song) => !standing.has(song));
   const first = Int32Array.from(counted, (need) =>
     counted.reduce(
       (bits, other, i) =>

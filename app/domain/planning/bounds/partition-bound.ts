@@ -6,11 +6,16 @@ import { StateTable } from "#app/domain/planning/search/state-table.ts";
 import type { SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
 
+/** Cheap tables are made in some milliseconds, dear ones in some hundred. */
+export type TableSize = "cheap" | "dear";
+
 /** How many needs are counted: their subsets are gone through for every guitar. */
-function countedNeeds(guitars: number): number {
-  if (guitars === 1) return 15;
-  if (guitars === 2) return 12;
-  return guitars <= 4 ? 10 : 8;
+function countedNeeds(guitars: number, size: TableSize): number {
+  const dear = size === "dear";
+  if (guitars === 1) return dear ? 16 : 12;
+  if (guitars === 2) return dear ? 13 : 11;
+  if (guitars <= 4) return dear ? 11 : 9;
+  return dear ? 9 : 7;
 }
 
 const MOST_FOLDS_MEMORY = 4_000_000;
@@ -22,8 +27,13 @@ const MOST_FOLDS_MEMORY = 4_000_000;
  * Why it bounds: every open need is served by some guitar; what the steps of different guitars cost never overlaps, since
  * each gap belongs to the song that it leads into. See `pathTables` for one guitar's part.
  */
-export function partitionBound(model: Model, rules: OrderRules, layout: SetLayout): SetBound {
-  const needs = needsOf(model, rules, countedNeeds(model.guitars));
+export function partitionBound(
+  model: Model,
+  rules: OrderRules,
+  layout: SetLayout,
+  size: TableSize,
+): SetBound {
+  const needs = needsOf(model, rules, countedNeeds(model.guitars, size));
   const tables = Array.from({ length: model.guitars }, (_, guitar) => pathTables(model, needs, guitar));
   const sets = 1 << needs.counted.length;
   const masks = needs.counted.map(({ songs }) => {

@@ -55,9 +55,9 @@ function closure(count: number, step: (from: number, to: number) => number): Flo
 /**
  * The tables of one guitar.
  *
- * Why they bound: in any plan, take the songs that this guitar plays from here on, and of each need of the set the first
- * one. Between two of these lie only songs whose need was served before (so it has two songs or more) or is not counted:
- * passing songs, each at the cover of its own. The tables take the cheapest such chain, each need once, in any order that
+ * Why they bound: in any plan, each open need has a song that stands for it from here on: the one of the greatest cover,
+ * or, if that has been played, any other. Take those that this guitar plays, in the plan's order. Between two of them lie
+ * passing songs only, each at a cover of its own. The tables take the cheapest such chain, each need once, in any order that
  * the rules between whole needs allow; the plan's own chain is one of them, and costs no less.
  */
 export function pathTables(model: Model, needs: Needs, guitar: number): PathTables {

@@ -1,8 +1,8 @@
-import type { Draft, Move } from "#app/domain/planning/moves/draft.ts";
+import { type Draft, type Move, shift } from "#app/domain/planning/moves/draft.ts";
 import { below, type Random } from "#app/domain/planning/search/random.ts";
 
-function anotherWay({ ways, optionCounts }: Draft, song: number, random: Random): boolean {
-  const count = optionCounts[song]!;
+function anotherWay({ ways, model }: Draft, song: number, random: Random): boolean {
+  const count = model.options[song]!.length;
   if (count < 2) return false;
   ways[song] = (ways[song]! + 1 + below(random, count - 1)) % count;
   return true;
@@ -16,11 +16,7 @@ export const changeWay: Move = (draft, random) =>
 export const changeWayAndPlace: Move = (draft, random) => {
   const { songs } = draft;
   const from = below(random, songs.length);
-  const song = songs[from]!;
-  const to = below(random, songs.length);
-  if (!anotherWay(draft, song, random)) return false;
-  if (to > from) songs.copyWithin(from, from + 1, to + 1);
-  else songs.copyWithin(to + 1, to, from);
-  songs[to] = song;
+  if (!anotherWay(draft, songs[from]!, random)) return false;
+  shift(songs, from, 1, below(random, songs.length));
   return true;
 };
