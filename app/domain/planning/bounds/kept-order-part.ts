@@ -66,7 +66,9 @@ export function keptOrderPart(model: Model, guitar: number, most: number): KeptO
   const stateOf = (followed: number, inserted: number, skipped: number, place: number, hand: number) =>
     (((followed * counts + inserted) * counts + skipped) * rows + place) * 2 + hand;
   const least = new Float64Array((songs + 1) * counts * counts * rows * 2);
-  const cheapest = insertions.map(() => ({ cost: 0, song: 0 }));
+  const insertionPlace = Int32Array.from(insertions, ({ place }) => place);
+  const cheapestCost = new Float64Array(insertions.length);
+  const cheapestSong = new Int32Array(insertions.length);
 
   function priceInsertions(prices: Float64Array, insertionPrice: number): void {
     for (const [i, insertion] of insertions.entries()) {
@@ -75,7 +77,8 @@ export function keptOrderPart(model: Model, guitar: number, most: number): KeptO
         const cost = penalty - prices[song]! + insertionPrice;
         if (cost < best.cost) best = { cost, song };
       }
-      cheapest[i] = best;
+      cheapestCost[i] = best.cost;
+      cheapestSong[i] = best.song;
     }
   }
 
@@ -129,11 +132,55 @@ export function keptOrderPart(model: Model, guitar: number, most: number): KeptO
         const going = ground
           ? step(place, insertion.place, insertion.cover, 0, true)
           : insertionStep[from + i]!;
-        const cost = going + cheapest[i]!.cost + least[next]!;
-        if (cost < value) take(cost, cheapest[i]!.song, true, next);
+        const cost = going + cheapestCost[i]! + least[next]!;
+        if (cost < value) take(cost, cheapestSong[i]!, true, next);
       }
     }
     return value;
+  }
+
+  /** Fills one neck's two states where the set has been followed and counted so far; not for the very first song. */
+  function fill(
+    prices: Float64Array,
+    followed: number,
+    inserted: number,
+    skipped: number,
+    place: number,
+  ): void {
+    const at = stateOf(followed, inserted, skipped, place, 0);
+    const leave = followed < songs ? least[stateOf(followed + 1, inserted, skipped, place, 0)]! : 0;
+    let resting = leave;
+    let inHand = leave;
+    if (followed < songs) {
+      if (skipped < most) {
+        const passed = stateOf(followed + 1, inserted, skipped + 1, place, 0);
+        resting = Math.min(resting, least[passed]!);
+        inHand = Math.min(inHand, least[passed + 1]!);
+      }
+      const list = kept[followed]!;
+      const from = (followed * rows + place) * 2 * mostWays;
+      for (let w = 0; w < list.length; w += 1) {
+        const next = stateOf(followed + 1, inserted, skipped, list[w]!.place, 1);
+        const rest = least[next]! - prices[followed]!;
+        const picked = keptStep[from + w]! + rest;
+        const stayed = keptStep[from + mostWays + w]! + rest;
+        if (picked < resting) resting = picked;
+        if (stayed < inHand) inHand = stayed;
+      }
+    }
+    if (inserted < most) {
+      const from = place * 2 * insertions.length;
+      const base = stateOf(followed, inserted + 1, skipped, 0, 1);
+      for (let i = 0; i < insertions.length; i += 1) {
+        const rest = cheapestCost[i]! + least[base + insertionPlace[i]! * 2]!;
+        const picked = insertionStep[from + i]! + rest;
+        const stayed = insertionStep[from + insertions.length + i]! + rest;
+        if (picked < resting) resting = picked;
+        if (stayed < inHand) inHand = stayed;
+      }
+    }
+    least[at] = resting;
+    least[at + 1] = Math.min(inHand, resting);
   }
 
   function sweep(prices: Float64Array, insertionPrice: number): void {
@@ -141,17 +188,10 @@ export function keptOrderPart(model: Model, guitar: number, most: number): KeptO
     for (let followed = songs; followed >= 0; followed -= 1)
       for (let inserted = most; inserted >= 0; inserted -= 1)
         for (let skipped = most; skipped >= 0; skipped -= 1)
-          for (let place = 0; place < rows; place += 1)
-            for (let hand = 0; hand < 2; hand += 1)
-              least[stateOf(followed, inserted, skipped, place, hand)] = best(
-                prices,
-                followed,
-                inserted,
-                skipped,
-                place,
-                hand,
-                null,
-              );
+          for (let place = 0; place < rows; place += 1) fill(prices, followed, inserted, skipped, place);
+    for (let place = 0; place < rows; place += 1)
+      for (let hand = 0; hand < 2; hand += 1)
+        least[stateOf(0, 0, 0, place, hand)] = best(prices, 0, 0, 0, place, hand, null);
   }
 
   function trace(prices: Float64Array, insertionPrice: number, lack: Float64Array): void {
