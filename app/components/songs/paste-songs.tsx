@@ -42,6 +42,11 @@ export function PasteSongs({ naming, choices, library, answer: posted, onKept }:
   const [usual, setUsual] = useState(answer?.usual ?? usualCode(choices[0]!.usual));
   const [length, setLength] = useState(answer?.length ?? formatDuration(assumedSeconds));
   const reuse = onKept !== undefined;
+  const box = useRef<HTMLTextAreaElement>(null);
+  // What was typed or pasted before the page came alive counts too.
+  useEffect(() => {
+    if (box.current?.value) setText(box.current.value);
+  }, []);
   const told = useRef<PasteAnswer | null>(null);
   useEffect(() => {
     if (!fetcher.data || told.current === fetcher.data) return;
@@ -74,6 +79,7 @@ export function PasteSongs({ naming, choices, library, answer: posted, onKept }:
       <div className="flex flex-col gap-4">
         <TextArea
           id="paste-text"
+          ref={box}
           name="text"
           label="Your list"
           hint="One song a line: title, then tuning, capo, key and length in any order."

@@ -56,8 +56,12 @@ export function addDays(date: string, days: number): string {
   return new Date(Date.parse(`${date}T00:00:00.000Z`) + days * 24 * 60 * minute).toISOString().slice(0, 10);
 }
 
-/** The time on the wall as if it were UTC, in milliseconds. */
-function wallClock(instant: number, zone: string): number {
+/** Formats by zone: making one costs more than a hundred uses of it. */
+const formats = new Map<string, Intl.DateTimeFormat>();
+
+function formatFor(zone: string): Intl.DateTimeFormat {
+  const known = formats.get(zone);
+  if (known) return known;
   const format = new Intl.DateTimeFormat("en-GB", {
     timeZone: zone,
     calendar: "gregory",
@@ -69,6 +73,13 @@ function wallClock(instant: number, zone: string): number {
     minute: "2-digit",
     second: "2-digit",
   });
+  formats.set(zone, format);
+  return format;
+}
+
+/** The time on the wall as if it were UTC, in milliseconds. */
+function wallClock(instant: number, zone: string): number {
+  const format = formatFor(zone);
   const parts = new Map(format.formatToParts(instant).map((part) => [part.type, Number(part.value)]));
   const [year, month, day, hour, minutes, second] = ["year", "month", "day", "hour", "minute", "second"].map(
     (type) => parts.get(type as Intl.DateTimeFormatPartTypes) ?? 0,
