@@ -15,11 +15,13 @@ type PasteDialogProps = {
 
 /**
  * A pasted list, straight into a set. Songs the library lacks are kept there first; they join the set as soon as the
- * repertoire that comes back has them. The box stays open while lines are left in it.
+ * repertoire that comes back has them. The box stays open while lines are left in it,
+ * and until every song that was kept stands in the set.
  */
 export function PasteDialog({ where, repertoire, onAdd, onClose }: PasteDialogProps) {
   const { naming } = usePageTools();
   const [waiting, setWaiting] = useState<PasteAnswer["kept"]>([]);
+  const [closing, setClosing] = useState(false);
   const done = useRef(false);
   useEffect(() => {
     if (waiting.length === 0 || done.current) return;
@@ -28,12 +30,13 @@ export function PasteDialog({ where, repertoire, onAdd, onClose }: PasteDialogPr
     done.current = true;
     onAdd(songs);
     setWaiting([]);
-  }, [waiting, repertoire.songs, onAdd]);
+    if (closing) onClose();
+  }, [waiting, repertoire.songs, onAdd, onClose, closing]);
   return (
     <Dialog
       wide
       open
-      onOpenChange={(open) => (open ? null : onClose())}
+      onOpenChange={() => (waiting.length > 0 ? setClosing(true) : onClose())}
       title={`Paste a list into ${where}`}
       closeLabel="Done"
     >
