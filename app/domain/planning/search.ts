@@ -2,6 +2,7 @@ import type { Answer, Reason } from "#app/domain/planning/answer.ts";
 import { answerOf } from "#app/domain/planning/answer-of.ts";
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
+import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { fixedOrderSpace, planInOrder } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
@@ -35,7 +36,9 @@ const TO_THE_END = 500_000_000;
 
 /** What is tried with the cheap bound before the dear one is made. */
 const CHEAP_LOOKS = 60_000;
-const PRICE_ROUNDS = 60;
+const MOST_ROUNDS = 60;
+const FEWEST_ROUNDS = 10;
+const SWEEP_STEPS = 100_000_000;
 
 const ORDER_LOOKS = 200_000;
 const CONFLICT_LOOKS = 50_000;
@@ -71,7 +74,11 @@ function dearSpace(run: Run): SetSpace {
   return setSpace(model, rules, (layout) => {
     const shared = partitionBound(model, rules, layout, "dear");
     if (!layout.limited) return shared;
-    return greatest(shared, keptOrderBound(model, layout, { target, rounds: PRICE_ROUNDS }));
+    const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
+    const rounds = Math.min(MOST_ROUNDS, affordable);
+    return rounds < FEWEST_ROUNDS
+      ? shared
+      : greatest(shared, keptOrderBound(model, layout, { target, rounds }));
   });
 }
 

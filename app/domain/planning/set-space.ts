@@ -93,6 +93,7 @@ export function setSpace(
     song: number,
     kept: number,
     moved: number,
+    leaves: boolean,
     child: Int32Array,
     emit: (cost: number, move: number) => void,
   ): void {
@@ -120,7 +121,7 @@ export function setSpace(
         child[layout.moved] = moved;
       }
       for (const group of groups) sortTwins(child, layout, group);
-      emit(step + option.penalty, song * most + i);
+      emit(step + option.penalty, (song * most + i) * 2 + (leaves ? 1 : 0));
     }
   }
 
@@ -132,18 +133,18 @@ export function setSpace(
     emit: (cost: number, move: number) => void,
   ): void {
     if (!layout.limited) {
-      play(state, depth, song, 0, 0, child, emit);
+      play(state, depth, song, 0, 0, false, child, emit);
       return;
     }
     const kept = state[layout.kept]!;
     const moved = state[layout.moved]!;
     if (song < kept) {
-      play(state, depth, song, kept, moved, child, emit);
+      play(state, depth, song, kept, moved, true, child, emit);
       return;
     }
     const skipped = moved + leftBehind(state, kept, song);
-    if (skipped <= maxMoved) play(state, depth, song, song + 1, skipped, child, emit);
-    if (moved + 1 <= maxMoved) play(state, depth, song, kept, moved + 1, child, emit);
+    if (skipped <= maxMoved) play(state, depth, song, song + 1, skipped, false, child, emit);
+    if (moved + 1 <= maxMoved) play(state, depth, song, kept, moved + 1, true, child, emit);
   }
 
   function expand(
@@ -169,8 +170,9 @@ export function setSpace(
     const child = new Int32Array(layout.width);
     const plan = { songs: [] as number[], options: [] as Option[] };
     for (const [depth, move] of moves.entries()) {
-      const song = Math.floor(move / most);
-      const slot = model.options[song]![move % most]!;
+      const way = Math.floor(move / 2);
+      const song = Math.floor(way / most);
+      const slot = model.options[song]![way % most]!;
       plan.songs.push(song);
       plan.options.push(
         model.options[song]!.find(

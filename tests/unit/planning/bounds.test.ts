@@ -1,4 +1,5 @@
 import { describe, expect, test } from "vitest";
+import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
@@ -84,6 +85,21 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       prefixes += expectBelow(space, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(500);
+  });
+
+  test("prices for a set of which some songs may move", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 240; seed += 1) {
+      const problem = randomSet(seed, 1 + (seed % 3));
+      const parts = ready(problem);
+      if (!parts || problem.maxMoved! >= problem.songs.length - 1) continue;
+      const { model, rules } = parts;
+      const plain = optimalStates(setSpace(model, rules, () => () => 0));
+      const target = plain?.[0]?.rest ?? 0;
+      const space = setSpace(model, rules, (layout) => keptOrderBound(model, layout, { target, rounds: 20 }));
+      prefixes += expectBelow(space, `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(300);
   });
 
   test("prices for a set whose order stays", () => {

@@ -25,6 +25,22 @@ export type KeptOrderPart = {
   trace(prices: Float64Array, insertionPrice: number, lack: Float64Array): void;
 };
 
+/**
+ * Steps that one sweep over all guitars takes, about: what a bound made of these parts costs for each round.
+ */
+export function sweepSteps(model: Model, most: number): number {
+  let steps = 0;
+  for (let guitar = 0; guitar < model.guitars; guitar += 1) {
+    const own = model.options.flatMap((options, song) =>
+      options.filter((option) => option.guitar === guitar).map(({ neck }) => ({ neck, song })),
+    );
+    const necks = new Set(own.map(({ neck }) => neck)).size + 1;
+    const insertions = new Set(own.map(({ neck, song }) => `${neck} ${model.cover[song]}`)).size;
+    steps += (model.songs + 1) * (most + 1) ** 2 * necks * (insertions * 2 + 4);
+  }
+  return steps;
+}
+
 export function keptOrderPart(model: Model, guitar: number, most: number): KeptOrderPart {
   const { songs } = model;
   const ways = model.options.map((options, song) =>
