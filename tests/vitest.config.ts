@@ -51,6 +51,7 @@ export default defineConfig({
           ...withDatabase,
           globalSetup: ["tests/support/start-build.ts", ...withDatabase.globalSetup],
           name: "browser",
+          expect: { poll: { timeout: 10_000 } },
           include: ["tests/browser/**/*.test.ts"],
           testTimeout: 60_000,
           hookTimeout: 60_000,
