@@ -1,6 +1,7 @@
 import type { Answer, Reason } from "#app/domain/planning/answer.ts";
 import { answerOf } from "#app/domain/planning/answer-of.ts";
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
+import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
@@ -72,13 +73,15 @@ function dearSpace(run: Run): SetSpace {
   const { model, rules } = run;
   const target = run.best?.total ?? 0;
   return setSpace(model, rules, (layout) => {
-    const shared = partitionBound(model, rules, layout, "dear");
-    if (!layout.limited) return shared;
-    const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
-    const rounds = Math.min(MOST_ROUNDS, affordable);
-    return rounds < FEWEST_ROUNDS
-      ? shared
-      : greatest(shared, keptOrderBound(model, layout, { target, rounds }));
+    const bounds = [partitionBound(model, rules, layout, "dear")];
+    const joint = model.guitars > 1 ? jointBound(model, rules, layout) : null;
+    if (joint) bounds.push(joint);
+    if (layout.limited) {
+      const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
+      const rounds = Math.min(MOST_ROUNDS, affordable);
+      if (rounds >= FEWEST_ROUNDS) bounds.push(keptOrderBound(model, layout, { target, rounds }));
+    }
+    return greatest(...bounds);
   });
 }
 

@@ -1,4 +1,5 @@
 import { describe, expect, test } from "vitest";
+import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
@@ -82,6 +83,18 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       if (!parts) continue;
       const { model, rules } = parts;
       const space = setSpace(model, rules, (layout) => partitionBound(model, rules, layout, "dear"));
+      prefixes += expectBelow(space, `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(500);
+  });
+
+  test("all guitars followed together", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 220; seed += 1) {
+      const parts = ready(randomSet(seed, seed % 3 === 0 ? 2 : null));
+      if (!parts) continue;
+      const { model, rules } = parts;
+      const space = setSpace(model, rules, (layout) => jointBound(model, rules, layout) ?? (() => 0));
       prefixes += expectBelow(space, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(500);

@@ -1,4 +1,5 @@
 import { needsOf } from "#app/domain/planning/bounds/needs.ts";
+import { openNeedsOf } from "#app/domain/planning/bounds/open-needs.ts";
 import { type PathTables, pathTables } from "#app/domain/planning/bounds/path-tables.ts";
 import { type Model, UNUSED } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
@@ -36,12 +37,7 @@ export function partitionBound(
   const needs = needsOf(model, rules, countedNeeds(model.guitars, size));
   const tables = Array.from({ length: model.guitars }, (_, guitar) => pathTables(model, needs, guitar));
   const sets = 1 << needs.counted.length;
-  const masks = needs.counted.map(({ songs }) => {
-    const words = new Int32Array(layout.playedWords);
-    for (const song of songs) words[song >>> 5]! |= 1 << (song & 31);
-    return words;
-  });
-
+  const openNeeds = openNeedsOf(needs, layout);
   const places = new Int32Array(model.guitars);
   const othersKey = new Int32Array(model.guitars);
   const folds = new StateTable(model.guitars);
@@ -49,19 +45,6 @@ export function partitionBound(
   const valueKey = new Int32Array(model.guitars + 2);
   const known = new StateTable(model.guitars + 2);
   let values = new Float64Array(1024);
-
-  function openNeeds(state: Int32Array): number {
-    let open = 0;
-    for (const [need, words] of masks.entries()) {
-      for (let word = 0; word < words.length; word += 1) {
-        if ((words[word]! & ~state[layout.played + word]!) !== 0) {
-          open |= 1 << need;
-          break;
-        }
-      }
-    }
-    return open;
-  }
 
   /** Cheapest service of every set of needs by all guitars but one, which all rest. */
   function others(current: number): Float64Array {

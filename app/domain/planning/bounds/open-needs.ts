@@ -1,0 +1,24 @@
+import type { Needs } from "#app/domain/planning/bounds/needs.ts";
+import type { SetLayout } from "#app/domain/planning/set-layout.ts";
+
+/** Reads out of a state which of the counted needs have songs still to be played, as bits. */
+export function openNeedsOf(needs: Needs, layout: SetLayout): (state: Int32Array) => number {
+  const masks = needs.counted.map(({ songs }) => {
+    const words = new Int32Array(layout.playedWords);
+    for (const song of songs) words[song >>> 5]! |= 1 << (song & 31);
+    return words;
+  });
+  return (state) => {
+    let open = 0;
+    for (let need = 0; need < masks.length; need += 1) {
+      const words = masks[need]!;
+      for (let word = 0; word < words.length; word += 1) {
+        if ((words[word]! & ~state[layout.played + word]!) !== 0) {
+          open |= 1 << need;
+          break;
+        }
+      }
+    }
+    return open;
+  };
+}
