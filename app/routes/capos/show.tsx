@@ -31,6 +31,7 @@ export async function loader({ params, context, url }: Route.LoaderArgs) {
 export async function action({ request, params, context, url }: Route.ActionArgs) {
   const member = requireMember(context, url);
   requireCan(member, "prepare");
+  if (!(await findCapo(getDb(), member, params.capoId))) notFound("capo");
   const form = await request.formData();
   const submission = parseWithZod(form, { schema: capoFormSchema() });
   if (submission.status !== "success") {
