@@ -5,6 +5,7 @@ import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
+import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace, planInOrder } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
 import { modelOf } from "#app/domain/planning/model.ts";
@@ -74,14 +75,14 @@ function dearSpace(run: Run): SetSpace {
   const target = run.best?.total ?? 0;
   return setSpace(model, rules, (layout) => {
     const bounds = [partitionBound(model, rules, layout, "dear")];
-    const joint = model.guitars > 1 ? jointBound(model, rules, layout) : null;
+    const joint = jointBound(model, rules, layout);
     if (joint) bounds.push(joint);
     if (layout.limited) {
       const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
       const rounds = Math.min(MOST_ROUNDS, affordable);
       if (rounds >= FEWEST_ROUNDS) bounds.push(keptOrderBound(model, layout, { target, rounds }));
     }
-    return greatest(...bounds);
+    return throughChains(model, rules, layout, greatest(...bounds));
   });
 }
 

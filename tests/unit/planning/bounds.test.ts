@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
+import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
 import { type Model, modelOf } from "#app/domain/planning/model.ts";
@@ -94,7 +95,10 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       const parts = ready(randomSet(seed, seed % 3 === 0 ? 2 : null));
       if (!parts) continue;
       const { model, rules } = parts;
-      const space = setSpace(model, rules, (layout) => jointBound(model, rules, layout) ?? (() => 0));
+      const space = setSpace(model, rules, (layout) => {
+        const joint = jointBound(model, rules, layout) ?? (() => 0);
+        return throughChains(model, rules, layout, joint);
+      });
       prefixes += expectBelow(space, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(500);

@@ -1,8 +1,8 @@
-import { type Needs, needsOf } from "#app/domain/planning/bounds/needs.ts";
+import { chainsOf, needsOf, precedence } from "#app/domain/planning/bounds/needs.ts";
 import { openNeedsOf } from "#app/domain/planning/bounds/open-needs.ts";
-import { type Model, UNUSED } from "#app/domain/planning/model.ts";
+import { type Model, type Option, UNUSED } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
-import type { SetLayout } from "#app/domain/planning/set-layout.ts";
+import { NOBODY, type SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
 import { stepCost } from "#app/domain/planning/step-cost.ts";
 
@@ -47,40 +47,55 @@ function jointStates(model: Model): Joint {
   return { count, necks, strides, rows, current };
 }
 
-/** One way to go on: a guitar comes to a row. Costs stand at `row it comes from × 2`, plus 1 where it is in hand. */
-type Target = { guitar: number; row: number; costs: Float64Array };
+type Step = { guitar: number; neck: number; cover: number; penalty: number };
 
-function targetOf(
-  model: Model,
-  joint: Joint,
-  guitar: number,
-  neck: number,
-  songs: Iterable<[number, number]>,
-): Target {
-  const necks = joint.necks[guitar]!;
-  const costs = new Float64Array(necks.length * 2).fill(Number.POSITIVE_INFINITY);
-  for (const [cover, penalty] of songs) {
-    for (const [row, from] of necks.entries()) {
-      for (let hand = 0; hand < 2; hand += 1) {
-        const cost = stepCost(model, guitar, from, neck, cover, false, hand === 0, ENOUGH) + penalty;
-        if (cost < costs[row * 2 + hand]!) costs[row * 2 + hand] = cost;
-      }
+/** One way to go on: what it costs from each joint state, and which state it leads to. */
+type Target = { costs: Float64Array; next: Int32Array };
+
+function stepOf(model: Model, song: number, option: Option): Step {
+  return { guitar: option.guitar, neck: option.neck, cover: model.cover[song]!, penalty: option.penalty };
+}
+
+/** Songs played one right after the other, each in one of its ways. */
+function targetOf(model: Model, joint: Joint, steps: Step[]): Target {
+  const costs = new Float64Array(joint.count);
+  const next = Int32Array.from(costs, (_, j) => j);
+  for (const { guitar, neck, cover, penalty } of steps) {
+    const necks = joint.necks[guitar]!;
+    const row = necks.indexOf(neck);
+    for (let j = 0; j < joint.count; j += 1) {
+      const at = next[j]!;
+      const from = joint.rows[at * model.guitars + guitar]!;
+      const changing = joint.current[at] !== guitar;
+      costs[j]! += stepCost(model, guitar, necks[from]!, neck, cover, false, changing, ENOUGH) + penalty;
+      next[j] = at + (row - from) * joint.strides[guitar]! + guitar - joint.current[at]!;
     }
   }
-  return { guitar, row: necks.indexOf(neck), costs };
+  return { costs, next };
 }
 
 /** For each neck of each guitar that a passing song can bring about, the cheapest way to it. */
-function passingTargets(model: Model, joint: Joint, needs: Needs): Target[] {
-  return joint.necks.flatMap((necks, guitar) =>
-    necks.flatMap((neck) => {
-      const songs = needs.passing.flatMap((song) =>
-        model.options[song]!.filter((o) => o.guitar === guitar && o.neck === neck).map(
-          (o): [number, number] => [model.cover[song]!, o.penalty],
-        ),
-      );
-      return songs.length > 0 ? [targetOf(model, joint, guitar, neck, songs)] : [];
-    }),
+function passingTargets(model: Model, joint: Joint, passing: number[]): Target[] {
+  const targets = new Map<string, Target>();
+  for (const song of passing) {
+    for (const option of model.options[song]!) {
+      const target = targetOf(model, joint, [stepOf(model, song, option)]);
+      const key = `${option.guitar} ${option.neck}`;
+      const known = targets.get(key);
+      if (!known) targets.set(key, target);
+      else
+        for (let j = 0; j < joint.count; j += 1) known.costs[j] = Math.min(known.costs[j]!, target.costs[j]!);
+    }
+  }
+  return [...targets.values()];
+}
+
+/** Every way to play a chain of songs. */
+function chainSteps(model: Model, songs: number[]): Step[][] {
+  return songs.reduce<Step[][]>(
+    (ways, song) =>
+      ways.flatMap((way) => model.options[song]!.map((option) => [...way, stepOf(model, song, option)])),
+    [[]],
   );
 }
 
@@ -92,27 +107,23 @@ function affordableNeeds(joint: Joint): number {
   return Math.min(MOST_NEEDS, Math.floor(Math.min(steps, cells)));
 }
 
-function fill(model: Model, joint: Joint, needs: Needs): Float64Array {
-  const { count, rows, current, strides } = joint;
-  const { guitars } = model;
-  const sets = 1 << needs.counted.length;
+/** What is to be served, each once: a chain or a need, with the ways to do it. */
+type Unit = { songs: number[]; openWith: number[]; targets: Target[] };
+
+function fill(joint: Joint, units: Unit[], first: Int32Array, passing: Target[]): Float64Array {
+  const { count } = joint;
+  const sets = 1 << units.length;
   const least = new Float64Array(sets * count);
-  const passing = passingTargets(model, joint, needs);
-  const serving = needs.counted.map(({ options, cover }) =>
-    options.map(({ guitar, neck, penalty }) => targetOf(model, joint, guitar, neck, [[cover, penalty]])),
-  );
 
   /** Takes what one target offers to every joint state of a set, if it then is in set `after`; whether any gained. */
-  function offer({ guitar, row, costs }: Target, set: number, after: number): boolean {
+  function offer({ costs, next }: Target, set: number, after: number): boolean {
     let gained = false;
-    const stride = strides[guitar]!;
+    const here = set * count;
+    const there = after * count;
     for (let j = 0; j < count; j += 1) {
-      const from = rows[j * guitars + guitar]!;
-      const hand = current[j] === guitar ? 1 : 0;
-      const next = j + (row - from) * stride + guitar - current[j]!;
-      const cost = costs[from * 2 + hand]! + least[after * count + next]!;
-      if (cost < least[set * count + j]!) {
-        least[set * count + j] = cost;
+      const cost = costs[j]! + least[there + next[j]!]!;
+      if (cost < least[here + j]!) {
+        least[here + j] = cost;
         gained = true;
       }
     }
@@ -121,9 +132,9 @@ function fill(model: Model, joint: Joint, needs: Needs): Float64Array {
 
   for (let set = 1; set < sets; set += 1) {
     least.fill(Number.POSITIVE_INFINITY, set * count, (set + 1) * count);
-    for (const [need, targets] of serving.entries()) {
-      if (((set >> need) & 1) === 0 || (needs.first[need]! & set) !== 0) continue;
-      for (const target of targets) offer(target, set, set & ~(1 << need));
+    for (const [unit, { targets }] of units.entries()) {
+      if (((set >> unit) & 1) === 0 || (first[unit]! & set) !== 0) continue;
+      for (const target of targets) offer(target, set, set & ~(1 << unit));
     }
     for (let gained = true; gained; ) {
       gained = false;
@@ -135,11 +146,14 @@ function fill(model: Model, joint: Joint, needs: Needs): Float64Array {
 
 /**
  * Every open need is served once, by whichever guitar, in any order that rules between whole needs allow, with passing
- * songs in between wherever they help; necks of all guitars and the guitar in hand are followed together.
+ * songs in between wherever they help; necks of all guitars and the guitar in hand are followed together. Songs that lead
+ * straight into each other are one need, served in one go.
  *
  * Why it bounds: from a half-built set on, let each open need be represented by its song of the greatest cover, or any
- * other if that has been played. The rest of the plan is a sequence of such songs and of passing songs, and each step
- * costs what it costs here, or more: the same necks, the same guitar in hand, at most that cover (and a tech never late).
+ * other if that has been played, and each chain that is not begun by all of its songs. The rest of the plan is a sequence
+ * of these and of passing songs, and each step costs what it costs here, or more: the same necks, the same guitar in hand,
+ * at most that cover (and a tech never late). The rest of a chain that is begun is left out, which only lowers the sum;
+ * `throughChains` looks to its end.
  *
  * @returns null where there are too many joint states for the tables to count enough needs
  */
@@ -147,9 +161,29 @@ export function jointBound(model: Model, rules: OrderRules, layout: SetLayout): 
   const joint = jointStates(model);
   const most = affordableNeeds(joint);
   if (most < FEWEST_NEEDS) return null;
-  const needs = needsOf(model, rules, most);
-  const least = fill(model, joint, needs);
-  const openNeeds = openNeedsOf(needs, layout);
+  const chains = chainsOf(model, rules).slice(0, Math.floor(most / 2));
+  const inChains = new Set(chains.flatMap(({ songs }) => songs));
+  const needs = needsOf(model, rules, most - chains.length, inChains);
+  const units: Unit[] = [
+    ...chains.map(({ songs }) => ({
+      songs,
+      openWith: songs.slice(0, 1),
+      targets: chainSteps(model, songs).map((steps) => targetOf(model, joint, steps)),
+    })),
+    ...needs.counted.map(({ songs, options, cover }) => ({
+      songs,
+      openWith: songs,
+      targets: options.map((option) => targetOf(model, joint, [{ ...option, cover }])),
+    })),
+  ];
+  const least = fill(joint, units, precedence(rules, units), passingTargets(model, joint, needs.passing));
+  const leastOfAll = Float64Array.from({ length: 1 << units.length }, (_, set) =>
+    least.subarray(set * joint.count, (set + 1) * joint.count).reduce((a, b) => Math.min(a, b)),
+  );
+  const openUnits = openNeedsOf(
+    units.map(({ openWith }) => openWith),
+    layout,
+  );
   const rowOf = joint.necks.map((necks) => new Map(necks.map((neck, row) => [neck, row])));
 
   return (state, depth) => {
@@ -157,6 +191,9 @@ export function jointBound(model: Model, rules: OrderRules, layout: SetLayout): 
     let j = state[layout.current]!;
     for (let guitar = 0; guitar < model.guitars; guitar += 1)
       j += rowOf[guitar]!.get(state[layout.necks + guitar]!)! * joint.strides[guitar]!;
-    return least[openNeeds(state) * joint.count + j]!;
+    const open = openUnits(state);
+    const last = state[layout.last]!;
+    const begun = last !== NOBODY && rules.next[last] !== -1 && inChains.has(last);
+    return begun ? leastOfAll[open]! : least[open * joint.count + j]!;
   };
 }

@@ -7,6 +7,9 @@ import type { OrderRules } from "#app/domain/planning/order-rules.ts";
  */
 export type Need = { songs: number[]; options: Option[]; cover: number };
 
+/** Songs that lead straight into each other, to be served as one. */
+export type Chain = { songs: number[] };
+
 /** The needs that bounds count, and the songs that may lie between them without being counted. */
 export type Needs = {
   counted: Need[];
@@ -17,6 +20,19 @@ export type Needs = {
 };
 
 type Draft = Need & { key: string };
+
+const MOST_CHAIN_WAYS = 64;
+
+/** Songs that lead straight into each other, as far as there are not too many ways to play a chain. */
+export function chainsOf(model: Model, rules: OrderRules): Chain[] {
+  return model.options.flatMap((_, song): Chain[] => {
+    if (rules.previous[song] !== -1 || rules.next[song] === -1) return [];
+    const songs = [song];
+    for (let at = rules.next[song]!; at !== -1; at = rules.next[at]!) songs.push(at);
+    const ways = songs.reduce((product, one) => product * model.options[one]!.length, 1);
+    return ways <= MOST_CHAIN_WAYS ? [{ songs }] : [];
+  });
+}
 
 function comesFirst(rules: OrderRules, a: number, b: number): boolean {
   return rules.latest[a]! < rules.earliest[b]! || rules.predecessors[b]!.includes(a);
@@ -32,10 +48,11 @@ function comesForFree(need: Need, other: Need): boolean {
 }
 
 /** Songs by options, section and cover; one with a place of its own stands alone. */
-function finest(model: Model, rules: OrderRules): Draft[] {
+function finest(model: Model, rules: OrderRules, apart: Set<number>): Draft[] {
   const section = new Map(model.problem.songs.map((song) => [song.id, song.section]));
   const groups = new Map<string, Draft>();
   for (let song = 0; song < model.songs; song += 1) {
+    if (apart.has(song)) continue;
     const options = model.options[song]!;
     const words = options.map(({ guitar, neck, penalty }) => `${guitar}.${neck}.${penalty}`).sort();
     const fixed = rules.earliest[song] === rules.latest[song] ? song : "";
@@ -78,9 +95,26 @@ function worthCounting(needs: Draft[], most: number): Draft[] {
   return needs.filter((_, i) => chosen.has(i));
 }
 
-/** At most `most` needs that are worth counting: first those that differ in cover alone become one, then some are left out. */
-export function needsOf(model: Model, rules: OrderRules, most: number): Needs {
-  let needs = finest(model, rules);
+/** For each set of songs, the bits of those that must all be played before any of it. */
+export function precedence(rules: OrderRules, units: { songs: number[] }[]): Int32Array {
+  return Int32Array.from(units, (unit) =>
+    units.reduce(
+      (bits, other, i) =>
+        other !== unit && other.songs.every((a) => unit.songs.every((b) => comesFirst(rules, a, b)))
+          ? bits | (1 << i)
+          : bits,
+      0,
+    ),
+  );
+}
+
+/**
+ * At most `most` needs that are worth counting: first those that differ in cover alone become one, then some are left out.
+ *
+ * @param apart songs that are served in some other way: they are in no need, and not passed through
+ */
+export function needsOf(model: Model, rules: OrderRules, most: number, apart = new Set<number>()): Needs {
+  let needs = finest(model, rules, apart);
   while (needs.length > most) {
     const fewer = mergeClosest(needs);
     if (!fewer) break;
@@ -90,15 +124,8 @@ export function needsOf(model: Model, rules: OrderRules, most: number): Needs {
   const standing = new Set(
     counted.map(({ songs, cover }) => songs.find((song) => model.cover[song] === cover)!),
   );
-  const passing = model.options.map((_, song) => song).filter((song) => !standing.has(song));
-  const first = Int32Array.from(counted, (need) =>
-    counted.reduce(
-      (bits, other, i) =>
-        other !== need && other.songs.every((a) => need.songs.every((b) => comesFirst(rules, a, b)))
-          ? bits | (1 << i)
-          : bits,
-      0,
-    ),
-  );
-  return { counted, passing, first };
+  const passing = model.options
+    .map((_, song) => song)
+    .filter((song) => !standing.has(song) && !apart.has(song));
+  return { counted, passing, first: precedence(rules, counted) };
 }

@@ -1,9 +1,8 @@
-import type { Needs } from "#app/domain/planning/bounds/needs.ts";
 import type { SetLayout } from "#app/domain/planning/set-layout.ts";
 
-/** Reads out of a state which of the counted needs have songs still to be played, as bits. */
-export function openNeedsOf(needs: Needs, layout: SetLayout): (state: Int32Array) => number {
-  const masks = needs.counted.map(({ songs }) => {
+/** Reads out of a state which of these sets of songs have one that is still to be played, as bits. */
+export function openNeedsOf(sets: number[][], layout: SetLayout): (state: Int32Array) => number {
+  const masks = sets.map((songs) => {
     const words = new Int32Array(layout.playedWords);
     for (const song of songs) words[song >>> 5]! |= 1 << (song & 31);
     return words;

@@ -37,7 +37,10 @@ export function partitionBound(
   const needs = needsOf(model, rules, countedNeeds(model.guitars, size));
   const tables = Array.from({ length: model.guitars }, (_, guitar) => pathTables(model, needs, guitar));
   const sets = 1 << needs.counted.length;
-  const openNeeds = openNeedsOf(needs, layout);
+  const openNeeds = openNeedsOf(
+    needs.counted.map(({ songs }) => songs),
+    layout,
+  );
   const places = new Int32Array(model.guitars);
   const othersKey = new Int32Array(model.guitars);
   const folds = new StateTable(model.guitars);
