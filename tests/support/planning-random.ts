@@ -85,6 +85,7 @@ export function randomProblem(random: () => number, size: RandomSize): Problem {
       keeps: size.kept !== false && !plain && maybe(size.realistic ? 0.2 : 0.15),
     };
   });
+  const encore = size.songs - (size.realistic ? below(3) : 2);
   const songs = Array.from({ length: size.songs }, (_, i): ProblemSong => {
     const way = (penalty: number): NeckChoice => ({
       ...copy(pick(pool)),
@@ -95,7 +96,7 @@ export function randomProblem(random: () => number, size: RandomSize): Problem {
     return {
       id: `s${i + 1}`,
       seconds: size.longSongs ? 150 + below(150) : below(120),
-      section: size.rules === "none" ? 0 : Number(i >= size.songs - 2 && maybe(0.6)),
+      section: size.rules === "none" ? 0 : Number(i >= encore && (size.realistic || maybe(0.6))),
       cover: maybe(0.75) ? null : below(4) * 15,
       necks: [way(0), ...second],
     };

@@ -41,6 +41,7 @@ const CHEAP_LOOKS = 60_000;
 const MOST_ROUNDS = 60;
 const FEWEST_ROUNDS = 10;
 const SWEEP_STEPS = 100_000_000;
+const STEPS_PER_LOOK = 150;
 
 const ORDER_LOOKS = 200_000;
 const CONFLICT_LOOKS = 50_000;
@@ -69,6 +70,13 @@ function anyPlan(run: Run): Reason | null {
   return null;
 }
 
+/** Where the room for states was used up before any order that holds was met, or was ruled out. */
+function undecided({ order }: Problem): Reason {
+  const message =
+    "No order that keeps all rules was found, though none was ruled out: there are too many to try.";
+  return { code: "rules", songs: [...order], message };
+}
+
 /** The space with all that is known about bounds. */
 function dearSpace(run: Run): SetSpace {
   const { model, rules } = run;
@@ -80,7 +88,10 @@ function dearSpace(run: Run): SetSpace {
     if (layout.limited) {
       const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
       const rounds = Math.min(MOST_ROUNDS, affordable);
-      if (rounds >= FEWEST_ROUNDS) bounds.push(keptOrderBound(model, layout, { target, rounds }));
+      if (rounds >= FEWEST_ROUNDS) {
+        bounds.push(keptOrderBound(model, layout, { target, rounds }));
+        run.looks += (rounds * sweepSteps(model, run.problem.maxMoved!)) / STEPS_PER_LOOK;
+      }
     }
     return throughChains(model, rules, layout, greatest(...bounds));
   });
@@ -128,5 +139,9 @@ export function* search(
     yield* prove(run, dear, looks, true);
   }
   if (run.plan) return answerOf(problem, run.plan, run.floor);
-  return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_LOOKS)] };
+  const decided = run.floor === Number.POSITIVE_INFINITY;
+  return {
+    status: "infeasible",
+    why: [decided ? ruleConflict(problem, CONFLICT_LOOKS) : undecided(problem)],
+  };
 }
