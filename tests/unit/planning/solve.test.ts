@@ -175,7 +175,7 @@ test("a hundred songs on twelve guitars get a valid plan and a true bound", () =
     realistic: true,
     maxMoved: null,
   });
-  const answer = solve(problem, { effort: 5_000 });
+  const answer = solve(problem, { effort: 40_000 });
   if (answer.status === "infeasible") throw new Error(answer.why[0]!.message);
   expect(check(problem, answer)).toEqual([]);
   expect(answer.bound).toBeGreaterThan(0);

@@ -12,6 +12,7 @@ const MOST_NEEDS = 16;
 const FEWEST_NEEDS = 6;
 const TABLE_STEPS = 60_000_000;
 const MOST_CELLS = 8_000_000;
+const MOST_JOINT_STATES = 20_000;
 
 /** All necks of all guitars and the guitar in hand, as one number. */
 type Joint = {
@@ -24,7 +25,7 @@ type Joint = {
   current: Int32Array;
 };
 
-function jointStates(model: Model): Joint {
+function jointStates(model: Model): Joint | null {
   const necks = Array.from({ length: model.guitars }, (_, guitar) => {
     const own = model.options.flatMap((list) =>
       list.filter((o) => o.guitar === guitar).map(({ neck }) => neck),
@@ -37,6 +38,7 @@ function jointStates(model: Model): Joint {
     strides.push(count);
     count *= list.length;
   }
+  if (count > MOST_JOINT_STATES) return null;
   const rows = new Int32Array(count * model.guitars);
   const current = new Int32Array(count);
   for (let j = 0; j < count; j += 1) {
@@ -159,8 +161,8 @@ function fill(joint: Joint, units: Unit[], first: Int32Array, passing: Target[])
  */
 export function jointBound(model: Model, rules: OrderRules, layout: SetLayout): SetBound | null {
   const joint = jointStates(model);
-  const most = affordableNeeds(joint);
-  if (most < FEWEST_NEEDS) return null;
+  const most = joint ? affordableNeeds(joint) : 0;
+  if (!joint || most < FEWEST_NEEDS) return null;
   const chains = chainsOf(model, rules).slice(0, Math.floor(most / 2));
   const inChains = new Set(chains.flatMap(({ songs }) => songs));
   const needs = needsOf(model, rules, most - chains.length, inChains);

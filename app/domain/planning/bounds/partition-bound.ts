@@ -15,11 +15,13 @@ function countedNeeds(guitars: number, size: TableSize): number {
   const dear = size === "dear";
   if (guitars === 1) return dear ? 16 : 12;
   if (guitars === 2) return dear ? 13 : 11;
-  if (guitars <= 4) return dear ? 11 : 9;
+  if (guitars === 3) return dear ? 11 : 9;
+  if (guitars === 4) return dear ? 10 : 8;
   return dear ? 9 : 7;
 }
 
-const MOST_FOLDS_MEMORY = 4_000_000;
+const MOST_FOLDED_CELLS = 6_000_000;
+const MOST_VALUES = 1_000_000;
 
 /**
  * The needs that are still open are shared out among the guitars, each serves its own by the cheapest way: the least sum
@@ -42,44 +44,59 @@ export function partitionBound(
     layout,
   );
   const places = new Int32Array(model.guitars);
-  const othersKey = new Int32Array(model.guitars);
-  const folds = new StateTable(model.guitars);
+  const othersKey = new Int32Array(model.guitars + 1);
+  const folds = new StateTable(model.guitars + 1);
   let folded: Float64Array[] = [];
+  let foldedCells = 0;
   const valueKey = new Int32Array(model.guitars + 2);
   const known = new StateTable(model.guitars + 2);
   let values = new Float64Array(1024);
 
-  /** Cheapest service of every set of needs by all guitars but one, which all rest. */
-  function others(current: number): Float64Array {
-    for (let guitar = 0; guitar < model.guitars; guitar += 1)
-      othersKey[guitar] = guitar === current ? -1 : places[guitar]!;
-    const number = folds.find(othersKey);
-    if (number !== -1) return folded[number]!;
-    let sum: Float64Array | null = null;
-    for (let guitar = 0; guitar < model.guitars; guitar += 1) {
-      if (guitar === current) continue;
-      const table = tables[guitar]!;
-      const own = table.resting.subarray(places[guitar]! * sets, (places[guitar]! + 1) * sets);
-      sum = sum ? shareOut(sum, own) : own;
-    }
-    const made = sum ?? new Float64Array(sets).fill(Number.POSITIVE_INFINITY);
-    if (!sum) made[0] = 0;
-    if ((folded.length + 1) * sets > MOST_FOLDS_MEMORY) {
-      folds.clear();
-      folded = [];
-    }
-    folds.add(othersKey);
-    folded.push(made);
-    return made;
+  /** A resting guitar's row of its table, for the subsets of `open` alone, smallest first. */
+  function restingRow(guitar: number, open: number): Float64Array {
+    const { resting } = tables[guitar]!;
+    const base = places[guitar]! * sets;
+    const row = new Float64Array(1 << bitCount(open));
+    for (let part = open, i = row.length - 1; i >= 0; part = (part - 1) & open, i -= 1)
+      row[i] = resting[base + part]!;
+    return row;
   }
 
+  /** Cheapest service of each subset of the open needs by all guitars but one, which all rest. */
+  function others(current: number, open: number): Float64Array {
+    for (let guitar = 0; guitar < model.guitars; guitar += 1)
+      othersKey[guitar] = guitar === current ? -1 : places[guitar]!;
+    othersKey[model.guitars] = open;
+    const number = folds.find(othersKey);
+    if (number !== -1) return folded[number]!;
+    let sum: Float64Array = new Float64Array(1 << bitCount(open)).fill(Number.POSITIVE_INFINITY);
+    sum[0] = 0;
+    let alone = true;
+    for (let guitar = 0; guitar < model.guitars; guitar += 1) {
+      if (guitar === current) continue;
+      const row = restingRow(guitar, open);
+      sum = alone ? row : shareOut(sum, row);
+      alone = false;
+    }
+    if (foldedCells + sum.length > MOST_FOLDED_CELLS) {
+      folds.clear();
+      folded = [];
+      foldedCells = 0;
+    }
+    folds.add(othersKey);
+    folded.push(sum);
+    foldedCells += sum.length;
+    return sum;
+  }
+
+  /** The guitar in hand takes some of the open needs, the others take the rest. */
   function leastSum(open: number, hand: Float64Array, base: number, rest: Float64Array): number {
     let least = Number.POSITIVE_INFINITY;
-    for (let own = open; ; own = (own - 1) & open) {
-      const sum = hand[base + own]! + rest[open ^ own]!;
+    for (let own = open, left = 0; left < rest.length; own = (own - 1) & open, left += 1) {
+      const sum = hand[base + own]! + rest[left]!;
       if (sum < least) least = sum;
-      if (own === 0) return least;
     }
+    return least;
   }
 
   return (state, depth) => {
@@ -94,7 +111,8 @@ export function partitionBound(
     valueKey[model.guitars + 1] = open;
     const number = known.find(valueKey);
     if (number !== -1) return values[number]!;
-    const value = leastSum(open, tables[current]!.inHand, places[current]! * sets, others(current));
+    const value = leastSum(open, tables[current]!.inHand, places[current]! * sets, others(current, open));
+    if (known.count === MOST_VALUES) known.clear();
     if (known.count === values.length) {
       const larger = new Float64Array(values.length * 2);
       larger.set(values);
@@ -107,6 +125,12 @@ export function partitionBound(
 
 function placeOf(table: PathTables, neck: number): number {
   return neck === UNUSED ? table.unusedPlace : table.places.get(neck)!;
+}
+
+function bitCount(bits: number): number {
+  let count = 0;
+  for (let left = bits; left !== 0; left &= left - 1) count += 1;
+  return count;
 }
 
 /** Cheapest sum over all ways to split each set in two. */
