@@ -6,6 +6,7 @@ import { ask } from "#tests/support/ask.ts";
 import { useDatabase } from "#tests/support/database.ts";
 import { makeAct } from "#tests/support/factories.ts";
 import { makeGig } from "#tests/support/gigs.ts";
+import { workedExample } from "#tests/support/planning-worked-example.ts";
 import { createAct } from "#tests/support/repertoire.ts";
 import { signInAs } from "#tests/support/sign-in.ts";
 
@@ -17,56 +18,6 @@ async function owner() {
   const { cookie } = await signInAs(database.db, wren.personId);
   return { wren, cookie };
 }
-
-/** The worked example of the planning format: one guitar, two songs, one string and one capo to move, 9 s exposed. */
-const example = {
-  version: 1,
-  crew: "alone",
-  times: { string: 8, semitone: 1, capoMove: 6, capoOn: 5, capoOff: 3, swap: 15, check: 5, cover: 12 },
-  aim: { exposed: 1, seconds: 0, strings: 0, semitones: 0, capoActions: 0, swaps: 0 },
-  guitars: [
-    {
-      id: "a",
-      strings: 6,
-      lowest: [34, 39, 44, 49, 53, 58],
-      highest: [42, 47, 52, 57, 60, 65],
-      start: null,
-      keeps: false,
-    },
-  ],
-  songs: [
-    {
-      id: "s1",
-      seconds: 215,
-      section: 0,
-      cover: 30,
-      necks: [
-        {
-          open: [36, 43, 48, 53, 53, 60],
-          capos: [{ fret: 3, strings: [1, 2, 3, 4, 5] }],
-          guitars: null,
-          penalty: 0,
-        },
-      ],
-    },
-    {
-      id: "s2",
-      seconds: 190,
-      section: 0,
-      necks: [
-        {
-          open: [38, 43, 48, 53, 53, 60],
-          capos: [{ fret: 5, strings: [1, 2, 3, 4, 5] }],
-          guitars: null,
-          penalty: 0,
-        },
-      ],
-    },
-  ],
-  order: ["s1", "s2"],
-  rules: { at: { s1: 1 }, before: [], into: [], apart: [] },
-  maxMoved: null,
-};
 
 function plan(cookie: string, body: unknown, query = "") {
   return ask(`/api/plan${query}`, {
@@ -137,9 +88,9 @@ describe("GET /api/gigs/:gigId/plan-problem", () => {
 });
 
 describe("POST /api/plan", () => {
-  test("answers a problem with the proven plan, as the format's worked example has it", async () => {
+  test("answers a problem with the proven plan, as the format's worked workedExample has it", async () => {
     const { cookie } = await owner();
-    const answer = await plan(cookie, example, "?effort=1000");
+    const answer = await plan(cookie, workedExample, "?effort=1000");
     expect(answer.status).toBe(200);
     expect(JSON.parse(answer.text)).toMatchObject({
       status: "optimal",
@@ -148,15 +99,15 @@ describe("POST /api/plan", () => {
       totals: { exposed: 9, seconds: 21, strings: 1, semitones: 2, capoActions: 1, swaps: 0, moved: 0 },
       order: ["s1", "s2"],
     });
-    const again = await plan(cookie, example);
+    const again = await plan(cookie, workedExample);
     const { order, plays } = JSON.parse(again.text);
-    const parsed = parseProblem(example);
+    const parsed = parseProblem(workedExample);
     if (parsed.ok) expect(evaluate(parsed.problem, order, plays).totals.exposed).toBe(9);
   });
 
   test("answers 200 where there is no plan, and says why", async () => {
     const { cookie } = await owner();
-    const answer = await plan(cookie, { ...example, guitars: [] });
+    const answer = await plan(cookie, { ...workedExample, guitars: [] });
     expect(answer.status).toBe(200);
     expect(JSON.parse(answer.text)).toMatchObject({
       status: "infeasible",
@@ -178,12 +129,14 @@ describe("POST /api/plan", () => {
       }
       return problems;
     };
-    expect(await bad({ ...example, version: 2 })).toMatchObject([{ path: "version" }]);
-    expect((await bad({ ...example, order: ["s1"], songs: "none" })).length).toBeGreaterThan(0);
+    expect(await bad({ ...workedExample, version: 2 })).toMatchObject([{ path: "version" }]);
+    expect((await bad({ ...workedExample, order: ["s1"], songs: "none" })).length).toBeGreaterThan(0);
     expect(await bad("{half")).toMatchObject([{ code: "json", path: "" }]);
     expect(await bad("")).toMatchObject([{ code: "json" }]);
     for (const effort of ["0", "-1", "1.5", "lots", "1e3", "99999999999"]) {
-      expect(await bad(example, `?effort=${effort}`)).toMatchObject([{ code: "effort", path: "effort" }]);
+      expect(await bad(workedExample, `?effort=${effort}`)).toMatchObject([
+        { code: "effort", path: "effort" },
+      ]);
     }
   });
 
@@ -192,7 +145,7 @@ describe("POST /api/plan", () => {
     const answer = await plan(cookie, `"${"x".repeat(1024 * 1024)}"`);
     expect(answer.status).toBe(413);
     expect(JSON.parse(answer.text).problems).toHaveLength(1);
-    expect((await plan("", example)).status).toBe(401);
+    expect((await plan("", workedExample)).status).toBe(401);
     expect((await ask("/api/plan", { cookie })).status).toBe(405);
     expect((await ask("/api/plan")).status).toBe(401);
   });
