@@ -88,7 +88,7 @@ describe("GET /api/gigs/:gigId/plan-problem", () => {
 });
 
 describe("POST /api/plan", () => {
-  test("answers a problem with the proven plan, as the format's worked workedExample has it", async () => {
+  test("answers a problem with the proven plan, as the format's worked example has it", async () => {
     const { cookie } = await owner();
     const answer = await plan(cookie, workedExample, "?effort=1000");
     expect(answer.status).toBe(200);
