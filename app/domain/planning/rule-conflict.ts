@@ -1,4 +1,5 @@
 import type { Reason } from "#app/domain/planning/answer.ts";
+import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { modelOf } from "#app/domain/planning/model.ts";
 import { compileRules } from "#app/domain/planning/order-rules.ts";
 import type { Problem, Rules } from "#app/domain/planning/problem.ts";
@@ -33,7 +34,9 @@ export function orderThatHolds(problem: Problem, effort: number): number[] | nul
   const bare = orderOnly(problem);
   const compiled = compileRules(bare);
   if (!compiled.ok) return null;
-  const space = setSpace(modelOf(bare), compiled.rules, () => () => 0);
+  const space = setSpace(modelOf(bare), compiled.rules, (layout) =>
+    layout.limited ? movesLeft(compiled.rules, layout, problem.maxMoved!) : () => 0,
+  );
   const run = new BestFirst(space, effort);
   run.run(effort);
   if (run.found) return space.planOf(run.found.moves).songs;

@@ -30,6 +30,7 @@ export const LOOKS_PER_EFFORT = 10;
 /** Looks between two moments at which a search may be stopped: some milliseconds. */
 export const PORTION = 20_000;
 
+const PATIENCE = 6_000_000;
 const STATE_MEMORY = 180_000_000;
 const FIRST_IMPROVEMENT = 200_000;
 const IMPROVEMENT = 20_000;
@@ -80,7 +81,7 @@ export function* tryChanges(run: Run, steps: number): Generator<Progress, void> 
  * Goes through a space best first until its cheapest way is proven, or so many looks are spent in all. Where that takes
  * long, a better plan is looked for in between: what costs more than a known plan need not be kept.
  *
- * @param patient whether to go on beyond `looks` while there is no plan at all
+ * @param patient whether to go on beyond `looks`, within reason, while there is no plan at all
  */
 export function* prove(
   run: Run,
@@ -91,7 +92,8 @@ export function* prove(
   const proof = new BestFirst(space, Math.floor(STATE_MEMORY / (60 + 6 * space.width)));
   let nextChanges = FIRST_IMPROVEMENT;
   for (let first = true; !proof.exhausted; first = false) {
-    if (!first && run.looks >= looks && (run.plan || !patient)) break;
+    const enough = run.plan || !patient ? looks : Math.max(looks, PATIENCE);
+    if (!first && run.looks >= enough) break;
     if (run.best) proof.setLimit(run.best.total * (1 - 5e-10));
     const before = proof.reached;
     proof.run(PORTION);

@@ -4,6 +4,7 @@ import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
+import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace, planInOrder } from "#app/domain/planning/fixed-order.ts";
@@ -77,6 +78,14 @@ function undecided({ order }: Problem): Reason {
   return { code: "rules", songs: [...order], message };
 }
 
+/** The space with bounds that are made in no time. */
+function cheapSpace({ model, rules, problem }: Run): SetSpace {
+  return setSpace(model, rules, (layout) => {
+    const shared = partitionBound(model, rules, layout, "cheap");
+    return layout.limited ? greatest(movesLeft(rules, layout, problem.maxMoved!), shared) : shared;
+  });
+}
+
 /** The space with all that is known about bounds. */
 function dearSpace(run: Run): SetSpace {
   const { model, rules } = run;
@@ -86,6 +95,7 @@ function dearSpace(run: Run): SetSpace {
     const joint = jointBound(model, rules, layout);
     if (joint) bounds.push(joint);
     if (layout.limited) {
+      bounds.unshift(movesLeft(rules, layout, run.problem.maxMoved!));
       const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
       const rounds = Math.min(MOST_ROUNDS, affordable);
       if (rounds >= FEWEST_ROUNDS) {
@@ -120,9 +130,7 @@ export function* search(
   const fixed = problem.maxMoved === 0;
   const small = model.songs <= SMALL_SET;
   const looks = Math.max(effort * LOOKS_PER_EFFORT, small || (fixed && !model.tech) ? TO_THE_END : 0);
-  const space = fixed
-    ? fixedOrderSpace(model, rules)
-    : setSpace(model, rules, (layout) => partitionBound(model, rules, layout, "cheap"));
+  const space = fixed ? fixedOrderSpace(model, rules) : cheapSpace(run);
 
   yield* firstPlans(run, space, looks);
   if (!run.plan) {

@@ -1,6 +1,8 @@
 import { describe, expect, test } from "vitest";
+import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
+import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
@@ -113,7 +115,12 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       const { model, rules } = parts;
       const plain = optimalStates(setSpace(model, rules, () => () => 0));
       const target = plain?.[0]?.rest ?? 0;
-      const space = setSpace(model, rules, (layout) => keptOrderBound(model, layout, { target, rounds: 20 }));
+      const space = setSpace(model, rules, (layout) =>
+        greatest(
+          movesLeft(rules, layout, problem.maxMoved!),
+          keptOrderBound(model, layout, { target, rounds: 20 }),
+        ),
+      );
       prefixes += expectBelow(space, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(300);

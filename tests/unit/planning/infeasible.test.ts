@@ -137,6 +137,14 @@ describe("songs that may not move", () => {
     expect(solve(setOf(five, rules, { maxMoved: 2 })).status).toBe("optimal");
   });
 
+  test("more neighbours to part than moves can part are seen at once", () => {
+    const many = Array.from({ length: 30 }, (_, i) => song(`s${i}`));
+    const apart = many.slice(1).map((one, i): [string, string] => [many[i]!.id, one.id]);
+    const [reason] = whyNot(setOf(many, { apart }, { maxMoved: 5 }));
+    expect(reason).toMatchObject({ code: "moved" });
+    expect(reason!.songs.length).toBeLessThan(30);
+  });
+
   test("sections out of order are named too", () => {
     const songs = [song("ferry"), song("lamps", 40, { section: 1 }), song("mill")];
     const [reason] = whyNot(setOf(songs, {}, { maxMoved: 0 }));
