@@ -1,7 +1,7 @@
 import type { NumberedPlan } from "#app/domain/planning/answer-of.ts";
 import { fixedOrderBound } from "#app/domain/planning/bounds/fixed-order-bound.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
-import { type Model, modelOf } from "#app/domain/planning/model.ts";
+import { type Model, modelOf, type Option } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
 import { beam } from "#app/domain/planning/search/beam.ts";
 import { BestFirst } from "#app/domain/planning/search/best-first.ts";
@@ -29,6 +29,27 @@ export function fixedOrderSpace(model: Model, rules: OrderRules): SetSpace {
 }
 
 /**
+ * The space of plans in some other order. It has a model of its own, in which that order is the present one; its plans are
+ * told in the numbers of the model given.
+ *
+ * @param songs song numbers of the model in the order wanted
+ */
+export function spaceInOrder(model: Model, songs: number[]): SetSpace {
+  const { problem } = model;
+  const order = songs.map((song) => problem.order[song]!);
+  const fixed = withoutRetuningKept(modelOf({ ...problem, order, maxMoved: 0 }));
+  const space = fixedOrderSpace(fixed, rulesOfOrder(model.songs));
+  const planOf = (moves: number[]): NumberedPlan => {
+    const options = space.planOf(moves).options.map((option, i) => {
+      const same = (other: Option) => other.guitar === option.guitar && other.choice === option.choice;
+      return model.options[songs[i]!]!.find(same)!;
+    });
+    return { songs, options };
+  };
+  return { ...space, planOf };
+}
+
+/**
  * Guitars and necks for an order that is given: the cheapest where `effort` suffices, else good ones.
  *
  * @param songs song numbers of the model in the order wanted
@@ -39,18 +60,19 @@ export function planInOrder(
   songs: number[],
   effort: number,
 ): { plan: NumberedPlan | null; spent: number } {
-  const { problem } = model;
-  const order = songs.map((song) => problem.order[song]!);
-  const fixed = withoutRetuningKept(modelOf({ ...problem, order, maxMoved: 0 }));
-  const space = fixedOrderSpace(fixed, rulesOfOrder(model.songs));
+  const space = spaceInOrder(model, songs);
   const run = new BestFirst(space, effort);
   run.run(effort);
   const moves = run.found?.moves ?? beam(space, 30).way?.moves;
-  if (!moves) return { plan: null, spent: run.reached };
-  const { options } = space.planOf(moves);
-  const ways = options.map((option, i) => {
-    const same = (other: typeof option) => other.guitar === option.guitar && other.choice === option.choice;
-    return model.options[songs[i]!]!.find(same)!;
-  });
-  return { plan: { songs, options: ways }, spent: run.reached };
+  return { plan: moves ? space.planOf(moves) : null, spent: run.reached };
+}
+
+/** The one order that the windows of the rules leave, in song numbers; null where they leave more. */
+export function onlyOrder({ earliest, latest }: OrderRules): number[] | null {
+  const songs = new Array<number>(earliest.length).fill(-1);
+  for (const [song, position] of earliest.entries()) {
+    if (position !== latest[song] || songs[position] !== -1) return null;
+    songs[position] = song;
+  }
+  return songs;
 }

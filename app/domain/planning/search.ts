@@ -7,7 +7,7 @@ import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
-import { fixedOrderSpace, planInOrder } from "#app/domain/planning/fixed-order.ts";
+import { fixedOrderSpace, onlyOrder, planInOrder, spaceInOrder } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
 import { modelOf } from "#app/domain/planning/model.ts";
 import { orderTest } from "#app/domain/planning/order-holds.ts";
@@ -127,10 +127,13 @@ export function* search(
   const model = withoutRetuningKept(everyWay);
   const { rules } = compiled;
   const run = startRun(problem, model, rules);
-  const fixed = problem.maxMoved === 0;
+  const only = onlyOrder(rules);
+  if (only && !orderTest(rules, problem.maxMoved)(Int32Array.from(only)))
+    return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_LOOKS)] };
+  const fixed = only !== null || problem.maxMoved === 0;
   const small = model.songs <= SMALL_SET;
   const looks = Math.max(effort * LOOKS_PER_EFFORT, small || (fixed && !model.tech) ? TO_THE_END : 0);
-  const space = fixed ? fixedOrderSpace(model, rules) : cheapSpace(run);
+  const space = only ? spaceInOrder(model, only) : fixed ? fixedOrderSpace(model, rules) : cheapSpace(run);
 
   yield* firstPlans(run, space, looks);
   if (!run.plan) {
