@@ -151,3 +151,44 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
     expect(prefixes).toBeGreaterThan(400);
   });
 });
+
+test("sets of 9 and 10 songs have the same optimum without a bound and with all of them", () => {
+  let compared = 0;
+  for (let seed = 1; compared < 24; seed += 1) {
+    const random = seededRandom(seed * 7);
+    const problem = randomProblem(random, {
+      songs: 9 + (seed % 2),
+      guitars: 1 + (seed % 3),
+      necks: 4 + (seed % 4),
+      rules: weights[seed % 3]!,
+      maxMoved: [null, 1, 2, 3][seed % 4]!,
+      realistic: seed % 2 === 0,
+    });
+    const parts = ready(problem);
+    if (!parts) continue;
+    const { model, rules } = parts;
+    const plain = new BestFirst(
+      setSpace(model, rules, () => () => 0),
+      400_000,
+    );
+    plain.run(2_000_000);
+    if (!plain.found) continue;
+    compared += 1;
+    const target = plain.found.cost * 1.1;
+    const space = setSpace(model, rules, (layout) => {
+      const bounds = [
+        partitionBound(model, rules, layout, "dear"),
+        jointBound(model, rules, layout) ?? (() => 0),
+      ];
+      if (layout.limited) {
+        bounds.push(movesLeft(rules, layout, problem.maxMoved!));
+        bounds.push(keptOrderBound(model, layout, { target, rounds: 15 }));
+      }
+      return throughChains(model, rules, layout, greatest(...bounds));
+    });
+    const bounded = new BestFirst(space, 400_000);
+    bounded.run(2_000_000);
+    expect(bounded.found?.cost, `seed ${seed}`).toBeCloseTo(plain.found.cost, 6);
+    expect(bounded.reached).toBeLessThanOrEqual(plain.reached);
+  }
+});
