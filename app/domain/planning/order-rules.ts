@@ -1,4 +1,10 @@
 import type { Reason } from "#app/domain/planning/answer.ts";
+import {
+  narrow,
+  propagateWindows,
+  sectionWindows,
+  type Windows,
+} from "#app/domain/planning/order-windows.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 
 /** Song numbers are those of the model: places in the present order. Positions count from 0. */
@@ -17,7 +23,7 @@ export type OrderRules = {
 
 export type CompiledRules = { ok: true; rules: OrderRules } | { ok: false; why: Reason[] };
 
-type Draft = OrderRules & { problem: Problem; after: Set<number>[]; why: Reason[] };
+type Draft = OrderRules & Windows & { problem: Problem; why: Reason[] };
 
 function refuse(draft: Draft, songs: number[], message: string): void {
   const ids = [...new Set(songs)].map((song) => draft.problem.order[song]!);
@@ -25,17 +31,6 @@ function refuse(draft: Draft, songs: number[], message: string): void {
 }
 
 const quoted = (draft: Draft, song: number) => JSON.stringify(draft.problem.order[song]!);
-
-function sectionWindows(problem: Problem): { earliest: Int32Array; latest: Int32Array } {
-  const section = new Map(problem.songs.map((song) => [song.id, song.section]));
-  const sections = problem.order.map((id) => section.get(id)!);
-  const lower = sections.map((own) => sections.filter((other) => other < own).length);
-  const same = sections.map((own) => sections.filter((other) => other === own).length);
-  return {
-    earliest: Int32Array.from(lower),
-    latest: Int32Array.from(lower, (first, i) => first + same[i]! - 1),
-  };
-}
 
 function linkChains(draft: Draft, into: [number, number][]): void {
   const { next, previous } = draft;
@@ -132,14 +127,6 @@ function closeBefore(draft: Draft): void {
     for (const b of followers) draft.predecessors[b]!.push(a);
 }
 
-function narrow(draft: Draft, song: number, from: number, to: number): boolean {
-  const { earliest, latest } = draft;
-  const changed = from > earliest[song]! || to < latest[song]!;
-  earliest[song] = Math.max(earliest[song]!, from);
-  latest[song] = Math.min(latest[song]!, to);
-  return changed;
-}
-
 function placeFixed(draft: Draft, at: [number, number][]): void {
   const count = draft.after.length;
   const holder = new Map<number, number>();
@@ -168,48 +155,6 @@ function placeFixed(draft: Draft, at: [number, number][]): void {
     } else {
       holder.set(position, song);
       narrow(draft, song, position, position);
-    }
-  }
-}
-
-/** Positions that a fixed song holds are no others', so windows that begin or end there shrink. */
-function stepOverFixed(draft: Draft): boolean {
-  const { earliest, latest } = draft;
-  const holder = new Map<number, number>();
-  for (const [song, first] of earliest.entries()) if (first === latest[song]) holder.set(first, song);
-  const taken = (position: number, song: number) => holder.has(position) && holder.get(position) !== song;
-  let changed = false;
-  for (let song = 0; song < earliest.length; song += 1) {
-    while (earliest[song]! < latest[song]! && taken(earliest[song]!, song)) {
-      earliest[song]! += 1;
-      changed = true;
-    }
-    while (latest[song]! > earliest[song]! && taken(latest[song]!, song)) {
-      latest[song]! -= 1;
-      changed = true;
-    }
-  }
-  return changed;
-}
-
-/** Positions narrowed by neighbours in a chain and by how many songs must come before and after. */
-function propagateWindows(draft: Draft): void {
-  const { earliest, latest, next, predecessors, after } = draft;
-  const count = after.length;
-  for (let changed = true; changed; ) {
-    changed = stepOverFixed(draft);
-    for (let song = 0; song < count; song += 1) {
-      const before = predecessors[song]!;
-      const soonest = Math.max(before.length, ...before.map((other) => earliest[other]! + 1));
-      const followers = [...after[song]!];
-      const last = Math.min(count - 1 - followers.length, ...followers.map((other) => latest[other]! - 1));
-      changed = narrow(draft, song, soonest, last) || changed;
-      if (next[song]! !== -1) {
-        const follower = next[song]!;
-        changed = narrow(draft, song, earliest[follower]! - 1, latest[follower]! - 1) || changed;
-        changed = narrow(draft, follower, earliest[song]! + 1, latest[song]! + 1) || changed;
-      }
-      if (earliest[song]! > latest[song]!) return;
     }
   }
 }
