@@ -44,5 +44,7 @@ export default defineConfig({
   optimizeDeps: {
     entries: ["app/entry.client.tsx", "app/components/**/*.tsx", "app/workers/*.browser.ts"],
     include: ["@conform-to/react", "@conform-to/zod/v4", "lucide-react"],
+    // Routes import these on the server alone; preparing them for the browser would reload the first page.
+    exclude: ["knex", "pino", "piscina", "rate-limiter-flexible", "remix-auth", "remix-auth-form"],
   },
 });
