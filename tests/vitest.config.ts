@@ -14,6 +14,13 @@ const base = {
     PASSWORD_PEPPER: secret,
     PASSWORD_COST: "4",
     LOG_LEVEL: "silent",
+    // As nobody has set them, whatever this machine's environment says.
+    HOST: "",
+    PORT: "",
+    PUBLIC_URL: "",
+    TRUST_PROXY: "",
+    DATABASE_CONNECTIONS: "",
+    PLANNER_THREADS: "",
   },
 };
 
