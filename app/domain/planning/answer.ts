@@ -6,10 +6,13 @@ export type Play = { song: string; guitar: string; neck: number };
 /** One string retuned: its number (1 is the highest-sounding side) and MIDI pitches. */
 export type StringWork = { string: number; from: number; to: number };
 
-/** One capo action; `from` and `to` are frets. */
+/**
+ * One capo action; `from` and `to` are frets. `takenFrom`: the resting guitar that the capo is taken off first, an action
+ * of its own whose seconds are in this work; left out where a loose one is put on.
+ */
 export type CapoWork =
   | { action: "move"; strings: number[]; from: number; to: number }
-  | { action: "on"; strings: number[]; to: number }
+  | { action: "on"; strings: number[]; to: number; takenFrom?: string }
   | { action: "off"; strings: number[]; from: number };
 
 /** Work on one guitar. Of a job that the tech could not finish, one item each says what each of the two spends. */
@@ -24,7 +27,10 @@ export type Work = {
 /** What happens before a song. `seconds` is what the audience waits, cover included: guitar swap and work on stage. */
 export type Gap = { into: string; swap: boolean; seconds: number; work: Work[] };
 
-/** Totals over the whole set, whoever does the work. `moved`: songs that left the present order. */
+/**
+ * Totals over the whole set, whoever does the work. `moved`: songs that left the present order. `wishes`: seconds that
+ * broken wishes count as, where the problem has any.
+ */
 export type Totals = {
   exposed: number;
   seconds: number;
@@ -33,7 +39,11 @@ export type Totals = {
   capoActions: number;
   swaps: number;
   moved: number;
+  wishes?: number;
 };
+
+/** A wish that a plan breaks: its number in the problem, the songs in the order of the set, what it counts as. */
+export type BrokenWish = { wish: number; songs: string[]; seconds: number };
 
 /** The neck a guitar has when the set begins. */
 export type GuitarBefore = { guitar: string } & Neck;
@@ -48,6 +58,8 @@ export type FoundAnswer = {
   plays: Play[];
   before: GuitarBefore[];
   gaps: Gap[];
+  /** Where the problem has wishes: those that this plan breaks. */
+  broken?: BrokenWish[];
 };
 
 export type ReasonCode = "no-guitar" | "rules" | "keeps" | "moved";

@@ -37,7 +37,7 @@ function totalFaults(answer: FoundAnswer, counted: Recount): Fault[] {
   const faults: Fault[] = [];
   for (const [name, value] of Object.entries(counted.totals)) {
     const stated = answer.totals[name as keyof typeof counted.totals];
-    if (!same(stated, value)) faults.push({ path: `totals.${name}`, message: `this comes to ${value}` });
+    if (!same(stated ?? 0, value)) faults.push({ path: `totals.${name}`, message: `this comes to ${value}` });
   }
   if (!same(answer.total, counted.total))
     faults.push({ path: "total", message: `this comes to ${counted.total}` });

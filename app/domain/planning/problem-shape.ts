@@ -1,12 +1,25 @@
 import { z } from "zod";
 
-export const LIMITS = { songs: 100, guitars: 12, strings: 12, necks: 12, fret: 24 } as const;
+export const LIMITS = {
+  songs: 100,
+  guitars: 12,
+  strings: 12,
+  necks: 12,
+  fret: 24,
+  capoKinds: 40,
+  capoCount: 1000,
+  wishes: 20,
+} as const;
 
 const whole = z.number().refine(Number.isInteger, { params: { code: "not-whole" } });
 const notNegative = z.number().nonnegative();
 const wholeBetween = (low: number, high: number) =>
   z.number().refine((value) => Number.isInteger(value) && value >= low && value <= high, {
     params: { code: "out-of-range", low, high },
+  });
+const between = (low: number, high: number) =>
+  z.number().refine((value) => value >= low && value <= high, {
+    params: { code: "out-of-range", low, high, number: true },
   });
 
 const midi = wholeBetween(0, 127);
@@ -37,6 +50,25 @@ const song = z.strictObject({
     .max(LIMITS.necks),
 });
 
+const record = () =>
+  z.custom<Record<string, number>>(isPlainRecord, { params: { code: "wrong-type", wanted: "an object" } });
+
+const capoKind = z.strictObject({
+  strings: z.array(wholeBetween(1, LIMITS.strings)).min(1),
+  count: wholeBetween(0, LIMITS.capoCount),
+});
+
+const wish = z.discriminatedUnion("kind", [
+  z.strictObject({ kind: z.literal("run"), most: wholeBetween(1, LIMITS.songs), seconds: notNegative }),
+  z.strictObject({ kind: z.literal("apart"), groups: z.array(z.array(z.string())), seconds: notNegative }),
+  z.strictObject({
+    kind: z.literal("energy"),
+    levels: record(),
+    curve: z.array(between(1, 5)).min(1).max(LIMITS.songs),
+    seconds: notNegative,
+  }),
+]);
+
 const pair = z.tuple([z.string(), z.string()]);
 
 /** The shape of a problem; what needs two fields to be seen is in `problem-cross-checks.ts`. */
@@ -65,14 +97,14 @@ export const problemShape = z.strictObject({
   songs: z.array(song).max(LIMITS.songs),
   order: z.array(z.string()),
   rules: z.strictObject({
-    at: z.custom<Record<string, number>>(isPlainRecord, {
-      params: { code: "wrong-type", wanted: "an object" },
-    }),
+    at: record(),
     before: z.array(pair),
     into: z.array(pair),
     apart: z.array(pair),
   }),
   maxMoved: whole.nonnegative().nullable(),
+  capos: z.array(capoKind).max(LIMITS.capoKinds).optional(),
+  wishes: z.array(wish).max(LIMITS.wishes).optional(),
 });
 
 function isPlainRecord(value: unknown): boolean {

@@ -62,6 +62,15 @@ export type Rules = {
   apart: [string, string][];
 };
 
+/** A kind of capo, known by the strings it covers, and how many of it there are. A kind not listed is unlimited. */
+export type CapoKind = { strings: number[]; count: number };
+
+/** What a set should rather be like, and the seconds that each break of it counts as. See DEVELOPERS.md. */
+export type Wish =
+  | { kind: "run"; most: number; seconds: number }
+  | { kind: "apart"; groups: string[][]; seconds: number }
+  | { kind: "energy"; levels: Record<string, number>; curve: number[]; seconds: number };
+
 /** One set to be planned: what `parseProblem` returns, with nothing left out. */
 export type Problem = {
   version: 1;
@@ -73,6 +82,8 @@ export type Problem = {
   order: string[];
   rules: Rules;
   maxMoved: number | null;
+  capos?: CapoKind[];
+  wishes?: Wish[];
 };
 
 export type ParsedProblem = { ok: true; problem: Problem } | { ok: false; problems: BadProblem[] };

@@ -33,13 +33,8 @@ function custom(issue: Issue & { code: "custom" }, input: unknown): BadProblem {
   if (params.code === "not-whole")
     return bad("not-whole", issue.path, "This is not a whole number.", "Give a whole number.");
   if (params.code === "out-of-range") {
-    const range = `${params.low} to ${params.high}`;
-    return bad(
-      "out-of-range",
-      issue.path,
-      `This is not a whole number from ${range}.`,
-      `Give a whole number from ${range}.`,
-    );
+    const wanted = `${params.number ? "number" : "whole number"} from ${params.low} to ${params.high}`;
+    return bad("out-of-range", issue.path, `This is not a ${wanted}.`, `Give a ${wanted}.`);
   }
   const missing = valueAt(input, issue.path) === undefined;
   return missing
@@ -83,6 +78,8 @@ export function shapeProblems(issue: Issue, input: unknown): BadProblem[] {
             "Name the strings it covers, or remove the capo.",
           ),
         ];
+      if (path.at(-1) === "curve")
+        return [bad("empty", path, "This curve has no values.", "Give levels from 1 to 5.")];
       return [bad("wrong-length", path, "This list is too short.", "Give a list of two song ids.")];
     case "too_big":
       if (path.length > 2 && path[0] === "rules")
