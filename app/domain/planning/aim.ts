@@ -23,6 +23,7 @@ export function weigh(aim: Aim, totals: Totals): number {
     aim.strings * totals.strings +
     aim.semitones * totals.semitones +
     aim.capoActions * totals.capoActions +
-    aim.swaps * totals.swaps
+    aim.swaps * totals.swaps +
+    (aim.seconds + aim.exposed) * (totals.wishes ?? 0)
   );
 }

@@ -22,7 +22,7 @@ export function answerOf(problem: Problem, plan: NumberedPlan, bound: number): F
     guitar: problem.guitars[guitar]!.id,
     neck: choice,
   }));
-  const { total, totals, before, gaps, breaches } = evaluate(problem, order, plays);
+  const { total, totals, before, gaps, breaches, broken } = evaluate(problem, order, plays);
   if (breaches.length > 0) throw new Error(`The search broke a rule: ${breaches[0]!.message}`);
   const proven = bound >= total - PROVEN_WITHIN * Math.max(1, total);
   return {
@@ -34,6 +34,7 @@ export function answerOf(problem: Problem, plan: NumberedPlan, bound: number): F
     plays,
     before: before.map(({ guitar, open, capos }) => ({ guitar, open: [...open], capos: copyCapos(capos) })),
     gaps: gaps.map(({ into, swap, seconds, work }): Gap => ({ into, swap, seconds, work })),
+    ...(broken ? { broken } : {}),
   };
 }
 

@@ -1,7 +1,17 @@
 import type { Neck } from "#app/domain/music/neck.ts";
 import { weigh } from "#app/domain/planning/aim.ts";
-import type { Gap, GuitarBefore, Play, Totals, Work } from "#app/domain/planning/answer.ts";
+import type {
+  BrokenWish,
+  CapoWork,
+  Gap,
+  GuitarBefore,
+  Play,
+  Totals,
+  Work,
+} from "#app/domain/planning/answer.ts";
 import { type Breach, orderBreaches } from "#app/domain/planning/breaches.ts";
+import { followNecks, type Taken } from "#app/domain/planning/capo-hands.ts";
+import { caposSuffice, kindOf } from "#app/domain/planning/capo-kinds.ts";
 import {
   changeSeconds,
   isChange,
@@ -13,6 +23,7 @@ import { movedSongs } from "#app/domain/planning/moved.ts";
 import { coverInto, mayPlay } from "#app/domain/planning/playable.ts";
 import type { NeckChoice, Problem, ProblemGuitar, ProblemSong } from "#app/domain/planning/problem.ts";
 import { type TechJob, techShift } from "#app/domain/planning/tech-shift.ts";
+import { brokenWishes, wishSeconds } from "#app/domain/planning/wishes.ts";
 
 /** A gap with what talk covers of it and what is left as dead air, both in seconds. */
 export type EvaluatedGap = Gap & { cover: number; exposed: number };
@@ -26,17 +37,24 @@ export type Evaluation = {
   before: GuitarBefore[];
   gaps: EvaluatedGap[];
   breaches: Breach[];
+  /** Where the problem has wishes: those that this order breaks. */
+  broken?: BrokenWish[];
 };
 
 type Step = { song: ProblemSong; guitar: ProblemGuitar; neck: NeckChoice; play: Play };
 
-/** A change that falls due in the gap into position `at`; `from` is the first song during which a tech may do it. */
+/**
+ * A change that falls due in the gap into position `at`; `from` is the first song during which a tech may do it. `taken`
+ * capos come from other guitars; `waits` is what of the work nobody can do before the gap.
+ */
 type Due = {
   at: number;
   from: number;
   guitar: string;
   change: NeckChange;
+  taken: number;
   seconds: number;
+  waits: number;
   resting: boolean;
 };
 
@@ -61,34 +79,55 @@ function stepsOf(problem: Problem, order: string[], plays: Play[]): Step[] {
 
 const bareNeck = (neck: Neck): Neck => ({ open: neck.open, capos: neck.capos });
 
+/** Names the guitars that give capos: the last of a kind to go on are those that were not loose. */
+function namingGivers(capos: CapoWork[], taken: Taken[], guitars: readonly ProblemGuitar[]): CapoWork[] {
+  if (taken.length === 0) return capos;
+  const open = [...taken];
+  return capos
+    .toReversed()
+    .map((capo): CapoWork => {
+      const at = capo.action === "on" ? open.findLastIndex(({ kind }) => kind === kindOf(capo.strings)) : -1;
+      return at === -1
+        ? capo
+        : ({ ...capo, takenFrom: guitars[open.splice(at, 1)[0]!.from]!.id } as CapoWork);
+    })
+    .toReversed();
+}
+
 /** Every change of a neck during the set, and the necks when it begins. */
 function changesOf(problem: Problem, steps: Step[]) {
+  const { times } = problem;
+  const number = new Map(problem.guitars.map(({ id }, i) => [id, i]));
+  const follow = followNecks(problem);
   const lastUse = new Map<string, number>();
   const first = new Map<string, Neck>();
   const dues: Due[] = [];
   const breaches: Breach[] = [];
   for (const [at, { song, guitar, neck }] of steps.entries()) {
     const last = lastUse.get(guitar.id);
-    const was = last === undefined ? guitar.start : steps[last]!.neck;
-    if (last === undefined) first.set(guitar.id, guitar.start ?? neck);
+    const { from: was, taken } = follow(number.get(guitar.id)!, neck);
+    if (last === undefined) first.set(guitar.id, guitar.start ?? was ?? neck);
     lastUse.set(guitar.id, at);
     if (was === null || was === neck) continue;
-    const change = neckChange(was, neck);
-    if (!isChange(change)) continue;
-    if (guitar.keeps && change.strings.length > 0) {
+    const plain = neckChange(was, neck);
+    if (!isChange(plain)) continue;
+    if (guitar.keeps && plain.strings.length > 0) {
       const songs = last === undefined ? [song.id] : [steps[last]!.song.id, song.id];
       const message = `"${song.id}" would have this guitar retuned, and it keeps its tuning during the set.`;
       breaches.push({ code: "keeps", songs, message });
     }
     if (at === 0 && problem.crew === "tech") continue;
     const resting = problem.crew === "tech" && last !== at - 1;
-    const from = last === undefined ? 0 : last + 1;
+    const inHand = resting ? number.get(steps[at - 1]!.guitar.id)! : -1;
+    const fromHand = taken.filter(({ from }) => from === inHand).length;
     dues.push({
       at,
-      from,
+      from: last === undefined ? 0 : last + 1,
       guitar: guitar.id,
-      change,
-      seconds: changeSeconds(problem.times, change),
+      change: { strings: plain.strings, capos: namingGivers(plain.capos, taken, problem.guitars) },
+      taken: taken.length,
+      seconds: changeSeconds(times, plain) + taken.length * times.capoOff,
+      waits: fromHand * (times.capoOff + times.capoOn),
       resting,
     });
   }
@@ -122,7 +161,7 @@ export function evaluate(problem: Problem, order: string[], plays: Play[]): Eval
   const jobs: TechJob[] = dues.map((due) => ({
     from: due.from,
     due: due.at,
-    seconds: due.resting ? due.seconds : 0,
+    seconds: due.resting ? due.seconds - due.waits : 0,
   }));
   const done = techShift(
     steps.map(({ song }) => song.seconds),
@@ -143,7 +182,7 @@ export function evaluate(problem: Problem, order: string[], plays: Play[]): Eval
   for (const [at, { song, guitar, neck, play }] of steps.entries()) {
     totals.seconds += neck.penalty;
     totals.exposed += neck.penalty;
-    if (!mayPlay(guitar, neck)) {
+    if (!mayPlay(guitar, neck) || !caposSuffice(problem, neck)) {
       const message = `"${song.id}" cannot be played in way ${play.neck + 1} on the guitar chosen for it.`;
       breaches.push({ code: "no-guitar", songs: [song.id], message });
     }
@@ -155,7 +194,7 @@ export function evaluate(problem: Problem, order: string[], plays: Play[]): Eval
       next += 1;
       totals.strings += due.change.strings.length;
       totals.semitones += semitonesOf(due.change);
-      totals.capoActions += due.change.capos.length;
+      totals.capoActions += due.change.capos.length + due.taken;
     }
     const seconds = onStage + (swap ? problem.times.swap : 0);
     const cover = coverInto(problem.times, song);
@@ -165,6 +204,11 @@ export function evaluate(problem: Problem, order: string[], plays: Play[]): Eval
     totals.swaps += swap ? 1 : 0;
     gaps.push({ into: song.id, swap, seconds, work, cover, exposed });
   }
+  const broken = brokenWishes(
+    problem,
+    steps.map(({ song, neck }) => ({ song: song.id, open: neck.open })),
+  );
+  if (problem.wishes) totals.wishes = wishSeconds(broken);
   return {
     total: weigh(problem.aim, totals),
     totals,
@@ -173,5 +217,6 @@ export function evaluate(problem: Problem, order: string[], plays: Play[]): Eval
     before,
     gaps,
     breaches: [...orderBreaches(problem, order, totals.moved), ...breaches],
+    ...(problem.wishes ? { broken } : {}),
   };
 }

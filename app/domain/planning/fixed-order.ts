@@ -1,5 +1,6 @@
 import type { NumberedPlan } from "#app/domain/planning/answer-of.ts";
 import { fixedOrderBound } from "#app/domain/planning/bounds/fixed-order-bound.ts";
+import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
 import { type Model, modelOf, type Option } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
@@ -25,7 +26,11 @@ export function fixedOrderSpace(model: Model, rules: OrderRules): SetSpace {
   const plain = setSpace(model, rules, () => () => 0);
   const first = beam(plain, 20);
   const target = first.way?.cost ?? 0;
-  return setSpace(model, rules, (layout) => fixedOrderBound(model, layout, target));
+  return setSpace(
+    model,
+    rules,
+    overLooseCapos(model, (plain, layout) => fixedOrderBound(plain, layout, target)),
+  );
 }
 
 /**

@@ -1,4 +1,4 @@
-import { type Model, UNUSED } from "#app/domain/planning/model.ts";
+import type { Model } from "#app/domain/planning/model.ts";
 
 /*
  * How much a tech can do for a guitar by the time it is due, without keeping a list of jobs.
@@ -45,19 +45,6 @@ export function freeAfterSong(
  * More free seconds than this are as good as this: every guitar's longest job together. A resting guitar can lose what
  * is free now to at most one job of each other guitar, since a job that starts later uses only later seconds.
  */
-export function freeCeiling(model: Model): number {
-  let sum = 0;
-  for (let guitar = 0; guitar < model.guitars; guitar += 1) {
-    const necks = new Set(
-      model.options.flatMap((options) =>
-        options.filter((option) => option.guitar === guitar).map((option) => option.neck),
-      ),
-    );
-    const from = model.start[guitar] === UNUSED ? [...necks] : [...necks, model.start[guitar]!];
-    let longest = 0;
-    for (const x of from)
-      for (const y of necks) longest = Math.max(longest, model.changes.seconds[x * model.changes.size + y]!);
-    sum += longest;
-  }
-  return sum;
+export function freeCeiling({ longestJobs }: Model): number {
+  return longestJobs.reduce((sum, job) => sum + job, 0);
 }

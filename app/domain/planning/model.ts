@@ -1,7 +1,10 @@
 import type { Neck } from "#app/domain/music/neck.ts";
+import { caposSuffice } from "#app/domain/planning/capo-kinds.ts";
+import { type CapoTables, capoTables, lessAndLess, mostTaken } from "#app/domain/planning/capo-tables.ts";
 import { type ChangeTable, changeTable } from "#app/domain/planning/change-table.ts";
 import { coverInto, mayPlay } from "#app/domain/planning/playable.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
+import { type WishTables, wishTables } from "#app/domain/planning/wish-tables.ts";
 
 /** One way to play a song: guitar and neck as numbers of the model, `choice` its place in the song's `necks`. */
 export type Option = { guitar: number; neck: number; choice: number; penalty: number };
@@ -25,8 +28,17 @@ export type Model = {
   seconds: Float64Array;
   start: Int32Array;
   keeps: Uint8Array;
-  /** Whether a tech can fail to finish a job at all; if not, free time need not be counted. */
+  /** Seconds that changing each guitar can take at most. */
+  longestJobs: number[];
+  /**
+   * Whether a tech can fail to finish a job at all; if not, free time need not be counted. A job always finishes if none is
+   * longer than the shortest song: the song before it is the tech's alone.
+   */
   mayBeLate: boolean;
+  /** What is counted of capos; null where there are enough of every kind. */
+  capos: CapoTables | null;
+  /** What the set should rather be like; null where nothing is wished. */
+  wishes: WishTables | null;
 };
 
 function neckKey({ open, capos }: Neck): string {
@@ -62,19 +74,23 @@ function cheapest(options: Option[]): Option[] {
   );
 }
 
-/** A job always finishes if no job is longer than the shortest song: the song before it is the tech's alone. */
-function jobsMayBeLate(changes: ChangeTable, options: Option[][], start: Int32Array, seconds: Float64Array) {
-  const shortest = Math.min(...seconds);
-  return start.some((first, guitar) => {
-    const used = new Set(
-      options
-        .flat()
-        .filter((option) => option.guitar === guitar)
-        .map(({ neck }) => neck),
-    );
-    const from = first === UNUSED ? [...used] : [...used, first];
-    return from.some((x) => [...used].some((y) => changes.seconds[x * changes.size + y]! > shortest));
-  });
+/** Seconds that one change of a guitar can take at most, with all that has to be taken from others for it. */
+function longestJob(
+  { problem, options, start, changes, capos }: Omit<Model, "longestJobs" | "mayBeLate">,
+  guitar: number,
+) {
+  const own = options.flat().filter((option) => option.guitar === guitar);
+  const used = [...new Set(own.map(({ neck }) => neck))];
+  const first = start[guitar]!;
+  const whole = first === UNUSED ? used : [...used, first];
+  const from = capos ? [...new Set(whole.flatMap((neck) => lessAndLess(capos, neck)))] : whole;
+  let longest = 0;
+  for (const x of from)
+    for (const y of used) {
+      const taking = capos ? mostTaken(capos, y) * problem.times.capoOff : 0;
+      longest = Math.max(longest, changes.seconds[x * changes.size + y]! + taking);
+    }
+  return longest;
 }
 
 /** The problem as numbers. Songs that no guitar can play have no options; see `why-infeasible.ts`. */
@@ -87,7 +103,7 @@ export function modelOf(problem: Problem): Model {
     cheapest(
       problem.guitars.flatMap((guitar, g) =>
         song.necks.flatMap((neck, choice) =>
-          mayPlay(guitar, neck)
+          mayPlay(guitar, neck) && caposSuffice(problem, neck)
             ? [{ guitar: g, neck: numberOf(neck), choice, penalty: weight * neck.penalty }]
             : [],
         ),
@@ -95,10 +111,11 @@ export function modelOf(problem: Problem): Model {
     ),
   );
   const start = Int32Array.from(problem.guitars, ({ start }) => (start ? numberOf(start) : UNUSED));
+  const capos = capoTables(problem, necks, numberOf);
   const changes = changeTable(problem, necks);
   const seconds = Float64Array.from(songs, (song) => song.seconds);
   const tech = problem.crew === "tech";
-  return {
+  const model: Omit<Model, "longestJobs" | "mayBeLate"> = {
     problem,
     songs: songs.length,
     guitars: problem.guitars.length,
@@ -110,6 +127,10 @@ export function modelOf(problem: Problem): Model {
     seconds,
     start,
     keeps: Uint8Array.from(problem.guitars, ({ keeps }) => (keeps ? 1 : 0)),
-    mayBeLate: tech && songs.length > 0 && jobsMayBeLate(changes, options, start, seconds),
+    capos,
+    wishes: wishTables(problem, necks),
   };
+  const longestJobs = problem.guitars.map((_, guitar) => longestJob(model, guitar));
+  const shortest = Math.min(...seconds);
+  return { ...model, longestJobs, mayBeLate: tech && longestJobs.some((job) => job > shortest) };
 }

@@ -1,20 +1,8 @@
 import { type BadProblem, bad } from "#app/domain/planning/bad-problem.ts";
+import { checkStock, checkWishes } from "#app/domain/planning/extension-cross-checks.ts";
+import { field, idsOf, list, record } from "#app/domain/planning/raw-values.ts";
 
 type Place = readonly (string | number)[];
-
-/*
- * These checks read the raw value, so that they also run where its shape is wrong elsewhere: all that is wrong is
- * listed at once. What has the wrong type is passed over here, since the shape's own check names it.
- */
-const record = (value: unknown): Record<string, unknown> =>
-  typeof value === "object" && value !== null && !Array.isArray(value)
-    ? (value as Record<string, unknown>)
-    : {};
-const list = (value: unknown): unknown[] => (Array.isArray(value) ? value : []);
-const field = (value: unknown, name: string): unknown =>
-  Object.hasOwn(record(value), name) ? record(value)[name] : undefined;
-const idsOf = (values: unknown[]): string[] =>
-  values.map((value) => field(value, "id")).filter((id) => typeof id === "string");
 
 function repeatedIds(values: unknown[], name: string): BadProblem[] {
   const seen = new Set<unknown>();
@@ -215,5 +203,7 @@ export function crossCheck(input: unknown): BadProblem[] {
     ...songs.flatMap((song, i) => checkSong(song, i, guitarIds)),
     ...checkOrder(list(field(input, "order")), songIds),
     ...checkRules(field(input, "rules"), songIds),
+    ...checkStock(input),
+    ...checkWishes(field(input, "wishes"), new Set(songIds)),
   ];
 }

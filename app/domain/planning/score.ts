@@ -1,6 +1,7 @@
 import { freeAfterSong, freeCeiling, takeFree } from "#app/domain/planning/free-time.ts";
 import { type Model, UNUSED } from "#app/domain/planning/model.ts";
-import { NOBODY } from "#app/domain/planning/set-layout.ts";
+import { NOBODY, setLayout, startState } from "#app/domain/planning/set-layout.ts";
+import { setStep } from "#app/domain/planning/set-step.ts";
 
 /** Total of a plan: songs in order, and for each song number which of its options it takes. */
 export type Score = (songs: Int32Array, ways: Int32Array) => number;
@@ -12,6 +13,7 @@ export type Score = (songs: Int32Array, ways: Int32Array) => number;
  * @example scoreOf(model)(songs, ways) // equals evaluate(problem, order, plays).total
  */
 export function scoreOf(model: Model): Score {
+  if (model.capos || model.wishes) return scoreByStep(model);
   const { changes, cover, problem, tech, keeps } = model;
   const { aim, times } = problem;
   const size = changes.size;
@@ -63,6 +65,26 @@ export function scoreOf(model: Model): Score {
       necks[guitar] = to;
       current = guitar;
       if (model.mayBeLate) freeAfterSong(free, guitar, model.seconds[song]!, ceiling, rests);
+    }
+    return total;
+  };
+}
+
+/** The same where capos are scarce or something is wished: by the steps that the search itself takes, one song at a time. */
+function scoreByStep(model: Model): Score {
+  const layout = setLayout(model);
+  const step = setStep(model, layout);
+  const start = startState(model, layout);
+  let state = new Int32Array(layout.width);
+  let next = new Int32Array(layout.width);
+  return (songs, ways) => {
+    state.set(start);
+    let total = 0;
+    for (let position = 0; position < songs.length; position += 1) {
+      const song = songs[position]!;
+      total += step(state, position, song, model.options[song]![ways[song]!]!, next);
+      if (total === Number.POSITIVE_INFINITY) return total;
+      [state, next] = [next, state];
     }
     return total;
   };

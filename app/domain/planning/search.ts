@@ -4,6 +4,7 @@ import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
+import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
@@ -80,17 +81,18 @@ function undecided({ order }: Problem): Reason {
 
 /** The space with bounds that are made in no time. */
 function cheapSpace({ model, rules, problem }: Run): SetSpace {
-  return setSpace(model, rules, (layout) => {
-    const shared = partitionBound(model, rules, layout, "cheap");
+  const bound = overLooseCapos(model, (plain, layout) => {
+    const shared = partitionBound(plain, rules, layout, "cheap");
     return layout.limited ? greatest(movesLeft(rules, layout, problem.maxMoved!), shared) : shared;
   });
+  return setSpace(model, rules, bound);
 }
 
 /** The space with all that is known about bounds. */
 function dearSpace(run: Run): SetSpace {
-  const { model, rules } = run;
+  const { rules } = run;
   const target = run.best?.total ?? 0;
-  return setSpace(model, rules, (layout) => {
+  const bound = overLooseCapos(run.model, (model, layout) => {
     const bounds = [partitionBound(model, rules, layout, "dear")];
     const joint = jointBound(model, rules, layout);
     if (joint) bounds.push(joint);
@@ -105,6 +107,7 @@ function dearSpace(run: Run): SetSpace {
     }
     return throughChains(model, rules, layout, greatest(...bounds));
   });
+  return setSpace(run.model, rules, bound);
 }
 
 /**

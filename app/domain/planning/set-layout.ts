@@ -7,7 +7,9 @@ export const NOBODY = -1;
  * Where each part of a half-built set stands in a row of whole numbers: the tech's free seconds of each guitar (two words,
  * one floating-point number, each), the songs played (a bit each), the neck of each guitar, the guitar in hand, the last
  * song as long as a rule about it is open, and where only some songs may move: how far the present order has been
- * followed and how many songs have left it.
+ * followed and how many songs have left it. Where capos are scarce, the order in which guitars were laid aside and the capos
+ * that nobody touched yet; where songs in a row in one tuning count, how many there are. These stand last, so that a state
+ * without them is the first part of a state with them.
  */
 export type SetLayout = {
   width: number;
@@ -21,6 +23,10 @@ export type SetLayout = {
   kept: number;
   moved: number;
   limited: boolean;
+  laidAside: number;
+  untouched: number;
+  row: number;
+  rowCount: number;
 };
 
 /** The layout of a model's states; parts that its problem does not need take no room. */
@@ -34,9 +40,12 @@ export function setLayout(model: Model): SetLayout {
   const current = necks + model.guitars;
   const last = current + 1;
   const kept = last + 1;
-  const width = limited ? kept + 2 : kept;
+  const laidAside = limited ? kept + 2 : kept;
+  const untouched = laidAside + (model.capos?.ordered ? model.guitars : 0);
+  const row = untouched + (model.capos?.kinds ?? 0);
+  const rowCount = (model.wishes?.runs.length ?? 0) > 0 ? 1 : 0;
   return {
-    width,
+    width: row + rowCount,
     free: 0,
     freeCount,
     played,
@@ -47,6 +56,10 @@ export function setLayout(model: Model): SetLayout {
     kept,
     moved: kept + 1,
     limited,
+    laidAside,
+    untouched,
+    row,
+    rowCount,
   };
 }
 
@@ -57,6 +70,16 @@ export function startState(model: Model, layout: SetLayout): Int32Array {
     state[layout.necks + guitar] = model.start[guitar] ?? UNUSED;
   state[layout.current] = NOBODY;
   state[layout.last] = NOBODY;
+  if (model.capos) {
+    const { kinds, counts, carried } = model.capos;
+    for (let kind = 0; kind < kinds; kind += 1) {
+      const onStarts = model.start.reduce(
+        (sum, neck) => (neck === UNUSED ? sum : sum + carried[neck * kinds + kind]!),
+        0,
+      );
+      state[layout.untouched + kind] = counts[kind]! - onStarts;
+    }
+  }
   return state;
 }
 

@@ -1,19 +1,10 @@
-import { freeAfterSong, freeCeiling, takeFree } from "#app/domain/planning/free-time.ts";
-import { type Model, type Option, UNUSED } from "#app/domain/planning/model.ts";
+import type { Model, Option } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
 import type { Space } from "#app/domain/planning/search/space.ts";
-import {
-  isPlayed,
-  markPlayed,
-  NOBODY,
-  readFree,
-  type SetLayout,
-  setLayout,
-  startState,
-  writeFree,
-} from "#app/domain/planning/set-layout.ts";
-import { stepCost } from "#app/domain/planning/step-cost.ts";
+import { isPlayed, NOBODY, type SetLayout, setLayout, startState } from "#app/domain/planning/set-layout.ts";
+import { setStep } from "#app/domain/planning/set-step.ts";
 import { elderTwins, sortTwins, twinGuitars } from "#app/domain/planning/twins.ts";
+import { wishesAbout } from "#app/domain/planning/wish-tables.ts";
 
 /** A lower bound on what the rest of a half-built set costs. */
 export type SetBound = (state: Int32Array, depth: number) => number;
@@ -45,9 +36,7 @@ export function setSpace(
     if (rules.earliest[song] === rules.latest[song]) fixedAt[rules.earliest[song]!] = song;
   const maxMoved = model.problem.maxMoved ?? songs;
 
-  const ceiling = freeCeiling(model);
-  const free = new Float64Array(layout.freeCount);
-  const freeAfter = new Float64Array(layout.freeCount);
+  const step = setStep(model, layout);
 
   function mayFollow(state: Int32Array, depth: number, song: number, last: number): boolean {
     if (fixedAt[depth] !== NOBODY && fixedAt[depth] !== song) return false;
@@ -60,7 +49,11 @@ export function setSpace(
   }
 
   function lastMatters(state: Int32Array, song: number): boolean {
-    return rules.next[song] !== -1 || rules.apart[song]!.some((other) => !isPlayed(layout, state, other));
+    if (rules.next[song] !== -1 || rules.apart[song]!.some((other) => !isPlayed(layout, state, other)))
+      return true;
+    return (
+      model.wishes !== null && wishesAbout(model.wishes, song, (other) => !isPlayed(layout, state, other))
+    );
   }
 
   /** Songs from `from` to `to` of the present order that have not been played: they are left behind. */
@@ -68,23 +61,6 @@ export function setSpace(
     let count = 0;
     for (let song = from; song < to; song += 1) if (!isPlayed(layout, state, song)) count += 1;
     return count;
-  }
-
-  /** Everything that one more song changes but the bits about the order: neck, guitar in hand, the tech's time. */
-  function take(state: Int32Array, depth: number, song: number, option: Option, child: Int32Array): void {
-    const { guitar, neck } = option;
-    child.set(state);
-    markPlayed(layout, child, song);
-    child[layout.necks + guitar] = neck;
-    child[layout.current] = guitar;
-    if (layout.freeCount === 0) return;
-    const from = state[layout.necks + guitar]!;
-    const job = from !== UNUSED && depth > 0 && state[layout.current] !== guitar;
-    freeAfter.set(free);
-    if (job) takeFree(freeAfter, guitar, model.changes.seconds[from * model.changes.size + neck]!);
-    const rests = (other: number) => child[layout.necks + other] !== UNUSED;
-    freeAfterSong(freeAfter, guitar, model.seconds[song]!, ceiling, rests);
-    writeFree(layout, child, freeAfter);
   }
 
   function play(
@@ -97,31 +73,16 @@ export function setSpace(
     child: Int32Array,
     emit: (cost: number, move: number) => void,
   ): void {
-    const current = state[layout.current]!;
-    const options = model.options[song]!;
-    for (const [i, option] of options.entries()) {
-      const { guitar, neck } = option;
-      const from = state[layout.necks + guitar]!;
-      const idle = layout.freeCount > 0 ? free[guitar]! : Number.POSITIVE_INFINITY;
-      const step = stepCost(
-        model,
-        guitar,
-        from,
-        neck,
-        model.cover[song]!,
-        depth === 0,
-        current !== guitar,
-        idle,
-      );
-      if (step === Number.POSITIVE_INFINITY) continue;
-      take(state, depth, song, option, child);
+    for (const [i, option] of model.options[song]!.entries()) {
+      const cost = step(state, depth, song, option, child);
+      if (cost === Number.POSITIVE_INFINITY) continue;
       child[layout.last] = lastMatters(child, song) ? song : NOBODY;
       if (layout.limited) {
         child[layout.kept] = kept;
         child[layout.moved] = moved;
       }
       for (const group of groups) sortTwins(child, layout, group);
-      emit(step + option.penalty, (song * most + i) * 2 + (leaves ? 1 : 0));
+      emit(cost, (song * most + i) * 2 + (leaves ? 1 : 0));
     }
   }
 
@@ -153,7 +114,6 @@ export function setSpace(
     child: Int32Array,
     emit: (cost: number, move: number) => void,
   ): void {
-    readFree(layout, state, free);
     const last = state[layout.last]!;
     const forced = last !== NOBODY && rules.next[last] !== -1 ? rules.next[last]! : fixedAt[depth]!;
     if (forced !== NOBODY) {
@@ -182,8 +142,7 @@ export function setSpace(
             option.penalty === slot.penalty,
         )!,
       );
-      readFree(layout, row, free);
-      take(row, depth, song, slot, child);
+      step(row, depth, song, slot, child);
       for (const group of groups) sortTwins(child, layout, group, owner);
       row.set(child);
     }

@@ -17,6 +17,8 @@ export function gapCost({ problem: { aim } }: Model, seconds: number, cover: num
  * @param changing whether the song before was on another guitar
  * @param from neck of the guitar so far, `UNUSED` where it is prepared freely
  * @param free seconds a tech has free for this guitar since it was laid aside (nothing counts them otherwise)
+ * @param taken capos that other guitars give for this change
+ * @param fromHand how many of them the guitar in hand gives: nobody can take those before the gap
  */
 export function stepCost(
   model: Model,
@@ -27,6 +29,8 @@ export function stepCost(
   first: boolean,
   changing: boolean,
   free: number,
+  taken = 0,
+  fromHand = 0,
 ): number {
   const { changes, problem, tech } = model;
   let work = 0;
@@ -37,7 +41,14 @@ export function stepCost(
     if (first && tech) return 0;
     counts = changes.counts[cell]!;
     work = changes.seconds[cell]!;
-    if (tech && changing) work = work > free ? work - free : 0;
+    if (taken > 0) {
+      counts += taken * problem.aim.capoActions;
+      work += taken * problem.times.capoOff;
+    }
+    if (tech && changing) {
+      const waits = fromHand > 0 ? fromHand * (problem.times.capoOff + problem.times.capoOn) : 0;
+      work = waits + (work - waits > free ? work - waits - free : 0);
+    }
   }
   if (first) return gapCost(model, work, cover) + counts;
   if (!changing) return gapCost(model, work, cover) + counts;

@@ -1,6 +1,7 @@
 import { type Model, UNUSED } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
 import type { SetLayout } from "#app/domain/planning/set-layout.ts";
+import { wishesAlike } from "#app/domain/planning/wish-tables.ts";
 
 const optionsKey = (model: Model, song: number) =>
   model.options[song]!.map(({ guitar, neck, penalty }) => `${guitar}.${neck}.${penalty}`)
@@ -9,7 +10,7 @@ const optionsKey = (model: Model, song: number) =>
 
 /**
  * Songs that can change places in any order without changing its cost: same options, cover, section, and (where a tech
- * may be late) length, and no rule names them. Each is listed with the twin that may as well be played before it.
+ * may be late) length, alike to every wish, and no rule names them. Each is listed with the twin that may as well be played before it.
  * Only where any number of songs may move: else their places in the present order tell them apart.
  *
  * @returns for each song the twin to be played first, or -1
@@ -21,26 +22,29 @@ export function elderTwins(model: Model, rules: OrderRules): Int32Array {
     for (const other of rules.predecessors[song]!) named.add(other).add(song);
     if (rules.apart[song]!.length > 0 || rules.earliest[song] === rules.latest[song]) named.add(song);
   }
-  const latest = new Map<string, number>();
+  const latest = new Map<string, number[]>();
   for (let song = 0; song < model.songs; song += 1) {
     if (named.has(song)) continue;
     const window = `${rules.earliest[song]}-${rules.latest[song]}`;
     const length = model.mayBeLate ? model.seconds[song] : "";
     const key = `${window}|${model.cover[song]}|${length}|${optionsKey(model, song)}`;
-    elder[song] = latest.get(key) ?? -1;
-    latest.set(key, song);
+    const alike = latest.get(key)?.findLast((other) => wishesAlike(model.wishes, song, other));
+    elder[song] = alike ?? -1;
+    latest.set(key, [...(latest.get(key) ?? []), song]);
   }
   return elder;
 }
 
 /**
  * Guitars that can change places in any plan without changing its cost: every song may be played on both in the same
- * ways, both are prepared freely, and both keep their tuning or neither does.
+ * ways, both are prepared freely, and both keep their tuning or neither does. Not where it matters which of them was laid
+ * aside first: that tells them apart.
  *
  * @returns groups of two or more guitars
  */
 export function twinGuitars(model: Model): number[][] {
   const groups = new Map<string, number[]>();
+  if (model.capos?.ordered) return [];
   for (let guitar = 0; guitar < model.guitars; guitar += 1) {
     if (model.start[guitar] !== UNUSED) continue;
     const ways = model.options.map((options) =>

@@ -1,4 +1,5 @@
 import type { Reason } from "#app/domain/planning/answer.ts";
+import { caposSuffice } from "#app/domain/planning/capo-kinds.ts";
 import { keptConflict } from "#app/domain/planning/kept-tunings.ts";
 import type { Model } from "#app/domain/planning/model.ts";
 import type { CompiledRules } from "#app/domain/planning/order-rules.ts";
@@ -7,7 +8,12 @@ import type { CompiledRules } from "#app/domain/planning/order-rules.ts";
 function songsWithoutGuitar({ problem, options }: Model): Reason[] {
   return problem.order.flatMap((id, song): Reason[] => {
     if (options[song]!.length > 0) return [];
-    const message = `No guitar of this set can be tuned for ${JSON.stringify(id)}.`;
+    const ways = problem.songs.find((one) => one.id === id)!.necks;
+    const lacksCapos = ways.length > 0 && ways.every((neck) => !caposSuffice(problem, neck));
+    const name = JSON.stringify(id);
+    const message = lacksCapos
+      ? `There are fewer capos than ${name} needs at once.`
+      : `No guitar of this set can be tuned for ${name}.`;
     return [{ code: "no-guitar", songs: [id], message }];
   });
 }
