@@ -1,5 +1,7 @@
 import type { Neck } from "#app/domain/music/neck.ts";
 import type { NeckChoice, Problem, ProblemGuitar, ProblemSong } from "#app/domain/planning/problem.ts";
+import { capoLedger } from "#tests/support/planning-capo-ledger.ts";
+import { wishesBroken } from "#tests/support/planning-wish-count.ts";
 
 /*
  * Every plan of a small problem, scored by the letter of the contract. It shares no code with the planner (types only)
@@ -47,6 +49,10 @@ function ways(problem: Problem, song: ProblemSong): Played[] {
       let inside = true;
       for (let i = 0; i < guitar.strings; i++)
         if (neck.open[i]! < guitar.lowest[i]! || neck.open[i]! > guitar.highest[i]!) inside = false;
+      const sorted = (list: number[]) => [...list].sort((x, y) => x - y).join();
+      for (const { strings, count } of problem.capos ?? [])
+        if (neck.capos.filter((capo) => sorted(capo.strings) === sorted(strings)).length > count)
+          inside = false;
       if (inside) found.push({ song, guitar, neck });
     }
   }
@@ -91,7 +97,7 @@ function change(problem: Problem, a: Neck, b: Neck): Change {
 export function scorePlan(problem: Problem, played: Played[]): number | null {
   const { aim, times } = problem;
   const tech = problem.crew === "tech";
-  const neckNow = new Map<string, Neck | null>(problem.guitars.map((guitar) => [guitar.id, guitar.start]));
+  const ledger = capoLedger(problem);
   const lastUse = new Map<string, number>();
   let strings = 0;
   let semitones = 0;
@@ -102,9 +108,9 @@ export function scorePlan(problem: Problem, played: Played[]): number | null {
 
   for (let i = 0; i < played.length; i++) {
     const { guitar, neck } = played[i]!;
-    const had = neckNow.get(guitar.id)!;
+    const inHand = i > 0 ? played[i - 1]!.guitar.id : null;
+    const { had, taken, takenFromHand } = ledger.hand(i, guitar, neck, inHand);
     const last = lastUse.get(guitar.id);
-    neckNow.set(guitar.id, neck);
     lastUse.set(guitar.id, i);
     const swap = i > 0 && played[i - 1]!.guitar.id !== guitar.id;
     if (swap) {
@@ -117,9 +123,13 @@ export function scorePlan(problem: Problem, played: Played[]): number | null {
     if (tech && i === 0) continue;
     strings += done.strings;
     semitones += done.semitones;
-    actions += done.actions;
-    if (tech && swap) jobs.push({ due: i, release: last === undefined ? 0 : last + 1, left: done.seconds });
-    else onStage[i]! += done.seconds;
+    actions += done.actions + taken;
+    const all = done.seconds + taken * times.capoOff;
+    const waits = takenFromHand * (times.capoOff + times.capoOn);
+    if (tech && swap) {
+      onStage[i]! += waits;
+      jobs.push({ due: i, release: last === undefined ? 0 : last + 1, left: all - waits });
+    } else onStage[i]! += all;
   }
 
   for (let i = 0; i < played.length; i++) {
@@ -152,7 +162,8 @@ export function scorePlan(problem: Problem, played: Played[]): number | null {
     aim.strings * strings +
     aim.semitones * semitones +
     aim.capoActions * actions +
-    aim.swaps * swaps
+    aim.swaps * swaps +
+    (aim.exposed + aim.seconds) * wishesBroken(problem, played)
   );
 }
 

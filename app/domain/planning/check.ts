@@ -1,5 +1,6 @@
-import type { FoundAnswer } from "#app/domain/planning/answer.ts";
+import type { BrokenWish, FoundAnswer } from "#app/domain/planning/answer.ts";
 import { readAnswer } from "#app/domain/planning/check/answer-shape.ts";
+import { enoughCapos } from "#app/domain/planning/check/capo-places.ts";
 import { type Fault, same } from "#app/domain/planning/check/fault.ts";
 import { gapFaults } from "#app/domain/planning/check/gap-faults.ts";
 import { infeasibleFaults } from "#app/domain/planning/check/infeasible-faults.ts";
@@ -8,13 +9,13 @@ import { orderFaults } from "#app/domain/planning/check/order-faults.ts";
 import { type Played, playedSongs, type Recount, recount } from "#app/domain/planning/check/recount.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 
-function playFaults(played: Played[]): Fault[] {
+function playFaults(problem: Problem, played: Played[]): Fault[] {
   return played.flatMap(({ song, guitar, neck }, i) => {
     const allowed = neck.guitars === null || neck.guitars.includes(guitar.id);
     const inRange =
       neck.open.length === guitar.strings &&
       neck.open.every((pitch, k) => pitch >= guitar.lowest[k]! && pitch <= guitar.highest[k]!);
-    if (allowed && inRange) return [];
+    if (allowed && inRange && enoughCapos(problem, neck)) return [];
     return [{ path: `plays.${i}`, message: `${song.id} cannot be played on ${guitar.id} like this` }];
   });
 }
@@ -37,8 +38,11 @@ function totalFaults(answer: FoundAnswer, counted: Recount): Fault[] {
   const faults: Fault[] = [];
   for (const [name, value] of Object.entries(counted.totals)) {
     const stated = answer.totals[name as keyof typeof counted.totals];
-    if (!same(stated ?? 0, value)) faults.push({ path: `totals.${name}`, message: `this comes to ${value}` });
+    if (stated === undefined || !same(stated, value))
+      faults.push({ path: `totals.${name}`, message: `this comes to ${value}` });
   }
+  if (answer.totals.wishes !== undefined && counted.totals.wishes === undefined)
+    faults.push({ path: "totals.wishes", message: "nothing is wished" });
   if (!same(answer.total, counted.total))
     faults.push({ path: "total", message: `this comes to ${counted.total}` });
   const proven = same(answer.bound, answer.total);
@@ -47,6 +51,16 @@ function totalFaults(answer: FoundAnswer, counted: Recount): Fault[] {
   if (answer.status === "optimal" && !proven)
     faults.push({ path: "bound", message: "the bound is not the total" });
   return faults;
+}
+
+function wishFaults(problem: Problem, answer: FoundAnswer, { broken }: Recount): Fault[] {
+  if (!problem.wishes) return answer.broken ? [{ path: "broken", message: "nothing is wished" }] : [];
+  const words = ({ wish, songs, seconds }: BrokenWish) =>
+    `${wish}: ${songs.join(", ")}, ${seconds.toFixed(6)} s`;
+  const stated = (answer.broken ?? []).map(words).join("; ");
+  const counted = broken.map(words).join("; ");
+  if (answer.broken && stated === counted) return [];
+  return [{ path: "broken", message: counted === "" ? "no wish is broken" : `these are broken: ${counted}` }];
 }
 
 /**
@@ -69,7 +83,7 @@ export function check(problem: Problem, answer: unknown): Fault[] {
     return [{ path: "plays", message: "this is not one play for each song" }];
   const played = playedSongs(problem, found);
   if (!played) return [{ path: "plays", message: "a play is missing, double, or names what is not there" }];
-  const unplayable = playFaults(played);
+  const unplayable = playFaults(problem, played);
   if (unplayable.length > 0) return unplayable;
   const counted = recount(problem, played);
   const kept = counted.retunedKept.map((id) => ({
@@ -82,5 +96,6 @@ export function check(problem: Problem, answer: unknown): Fault[] {
     ...beforeFaults(found, counted),
     ...gapFaults(found, played, counted),
     ...totalFaults(found, counted),
+    ...wishFaults(problem, found, counted),
   ];
 }

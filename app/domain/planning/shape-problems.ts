@@ -92,6 +92,15 @@ export function shapeProblems(issue: Issue, input: unknown): BadProblem[] {
           `Give ${issue.maximum} or fewer.`,
         ),
       ];
+    case "invalid_union": {
+      const known = path.at(-1) === "kind" ? "run, apart or energy" : "a value that is known";
+      const missing = valueAt(input, path) === undefined;
+      return [
+        missing
+          ? bad("missing-field", path, "This field is missing.", `Give ${known}.`)
+          : bad("unknown-value", path, "This value is not known.", `Give ${known}.`),
+      ];
+    }
     case "custom":
       return [custom(issue, input)];
     default:

@@ -6,13 +6,11 @@ import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
-import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
-import { type Model, modelOf } from "#app/domain/planning/model.ts";
-import { compileRules, type OrderRules } from "#app/domain/planning/order-rules.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import { BestFirst } from "#app/domain/planning/search/best-first.ts";
-import { type SetSpace, setSpace } from "#app/domain/planning/set-space.ts";
+import { setSpace } from "#app/domain/planning/set-space.ts";
 import { planExamples } from "#tests/support/planning-examples.ts";
+import { expectBelow, optimalStates, ready } from "#tests/support/planning-prefixes.ts";
 import { randomProblem, seededRandom } from "#tests/support/planning-random.ts";
 
 /*
@@ -21,48 +19,6 @@ import { randomProblem, seededRandom } from "#tests/support/planning-random.ts";
  */
 
 const weights = ["none", "light", "heavy"] as const;
-
-function ready(problem: Problem): { model: Model; rules: OrderRules } | null {
-  const compiled = compileRules(problem);
-  const model = withoutRetuningKept(modelOf(problem));
-  if (!compiled.ok || model.options.some((options) => options.length === 0)) return null;
-  return { model, rules: compiled.rules };
-}
-
-/** Cheapest way, with each state on it and what it costs from there to the end. */
-function optimalStates(space: SetSpace): { state: Int32Array; depth: number; rest: number }[] | null {
-  const run = new BestFirst({ ...space, bound: () => 0 }, 400_000);
-  run.run(3_000_000);
-  if (!run.found) return null;
-  const states: { state: Int32Array; depth: number; rest: number }[] = [];
-  const child = new Int32Array(space.width);
-  let state = space.start;
-  let rest = run.found.cost;
-  for (const [depth, move] of run.found.moves.entries()) {
-    states.push({ state, depth, rest });
-    let least = Number.POSITIVE_INFINITY;
-    let next = state;
-    space.expand(state, depth, child, (cost, number) => {
-      if (number !== move || cost >= least) return;
-      least = cost;
-      next = child.slice();
-    });
-    state = next;
-    rest -= least;
-  }
-  states.push({ state, depth: space.depth, rest });
-  return states;
-}
-
-function expectBelow(space: SetSpace, name: string): number {
-  const states = optimalStates(space);
-  if (!states) return 0;
-  for (const { state, depth, rest } of states) {
-    const bound = space.bound(state, depth);
-    expect(bound, `${name}, after ${depth} songs`).toBeLessThanOrEqual(rest + 1e-6 * Math.max(1, rest));
-  }
-  return states.length;
-}
 
 function randomSet(seed: number, maxMoved: number | null): Problem {
   const random = seededRandom(seed);

@@ -9,7 +9,7 @@ const capos = z.array(z.strictObject({ fret: whole, strings }));
 
 const action = z.discriminatedUnion("action", [
   z.strictObject({ action: z.literal("move"), strings, from: whole, to: whole }),
-  z.strictObject({ action: z.literal("on"), strings, to: whole }),
+  z.strictObject({ action: z.literal("on"), strings, to: whole, takenFrom: z.string().optional() }),
   z.strictObject({ action: z.literal("off"), strings, from: whole }),
 ]);
 
@@ -33,11 +33,13 @@ const found = z.strictObject({
     capoActions: count,
     swaps: count,
     moved: count,
+    wishes: count.optional(),
   }),
   order: z.array(z.string()),
   plays: z.array(z.strictObject({ song: z.string(), guitar: z.string(), neck: whole })),
   before: z.array(z.strictObject({ guitar: z.string(), open: z.array(whole), capos })),
   gaps: z.array(z.strictObject({ into: z.string(), swap: z.boolean(), seconds: count, work: z.array(work) })),
+  broken: z.array(z.strictObject({ wish: whole, songs: z.array(z.string()), seconds: count })).optional(),
 });
 
 const infeasible = z.strictObject({

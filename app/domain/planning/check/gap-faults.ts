@@ -1,11 +1,11 @@
 import type { FoundAnswer, Gap, Work } from "#app/domain/planning/answer.ts";
 import { type Fault, same } from "#app/domain/planning/check/fault.ts";
-import { wrongActions } from "#app/domain/planning/check/neck-work.ts";
+import { nameOf, wrongActions } from "#app/domain/planning/check/neck-work.ts";
 import type { Change, Played, Recount } from "#app/domain/planning/check/recount.ts";
 
 /** Who does how much of a change: all one person's, or a late job's two shares. */
 function shares(change: Change): { by: Work["by"]; seconds: number }[] {
-  const { seconds } = change.counted;
+  const { seconds } = change;
   if (!change.resting) return [{ by: "player", seconds }];
   const left = seconds - change.byTech;
   if (left <= 1e-9 * seconds) return [{ by: "tech", seconds }];
@@ -13,6 +13,18 @@ function shares(change: Change): { by: Work["by"]; seconds: number }[] {
     { by: "tech", seconds: change.byTech },
     { by: "player", seconds: left },
   ];
+}
+
+/** What is wrong with who gives the capos that are put on; null where nothing is. */
+function giverFault(item: Work, change: Change): string | null {
+  const named = item.capos.flatMap((capo) =>
+    capo.action === "on" && capo.takenFrom !== undefined
+      ? [`${nameOf(capo.strings)} from ${capo.takenFrom}`]
+      : [],
+  );
+  const given = change.given.map(({ strings, guitar }) => `${strings} from ${guitar}`);
+  if (named.sort().join("\n") === given.sort().join("\n")) return null;
+  return given.length > 0 ? `capos are taken: ${given.join(", ")}` : "no capo is taken from another guitar";
 }
 
 function workFaults(work: Work[], change: Change | undefined, path: string): Fault[] {
@@ -34,6 +46,8 @@ function workFaults(work: Work[], change: Change | undefined, path: string): Fau
     const moves = item.capos.filter(({ action }) => action === "move").length;
     if (moves !== change.counted.moves)
       faults.push({ path: at, message: `${change.counted.moves} capos are moved` });
+    const wrongGivers = giverFault(item, change);
+    if (wrongGivers) faults.push({ path: at, message: wrongGivers });
     const { seconds } = due.find(({ by }) => by === item.by)!;
     if (!same(item.seconds, seconds)) faults.push({ path: at, message: `this takes ${seconds} s` });
     return faults;

@@ -1,4 +1,5 @@
 import type { InfeasibleAnswer } from "#app/domain/planning/answer.ts";
+import { enoughCapos } from "#app/domain/planning/check/capo-places.ts";
 import type { Fault } from "#app/domain/planning/check/fault.ts";
 import { orderFaults } from "#app/domain/planning/check/order-faults.ts";
 import type { NeckChoice, Problem, ProblemGuitar, ProblemSong } from "#app/domain/planning/problem.ts";
@@ -13,7 +14,9 @@ function canPlay(guitar: ProblemGuitar, neck: NeckChoice): boolean {
 
 const waysOf = (problem: Problem, song: ProblemSong) =>
   problem.guitars.flatMap((guitar) =>
-    song.necks.filter((neck) => canPlay(guitar, neck)).map((neck) => ({ guitar, neck })),
+    song.necks
+      .filter((neck) => canPlay(guitar, neck) && enoughCapos(problem, neck))
+      .map((neck) => ({ guitar, neck })),
   );
 
 /** Whether guitars that keep their tuning can play the songs in this order, by trying; null where it takes too long. */

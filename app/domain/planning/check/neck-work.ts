@@ -12,7 +12,8 @@ export type Counted = {
   seconds: number;
 };
 
-const nameOf = (strings: number[]) => [...strings].sort((a, b) => b - a).join("-");
+/** A set of strings as one word, in whatever order they were written. */
+export const nameOf = (strings: number[]) => [...strings].sort((a, b) => b - a).join("-");
 const capoName = (fret: number, strings: number[]) => `${nameOf(strings)} at ${fret}`;
 const namesOf = (capos: Capo[]) => new Set(capos.map(({ fret, strings }) => capoName(fret, strings)));
 
