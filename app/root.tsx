@@ -7,6 +7,8 @@ import { csrfMiddleware } from "#app/services/csrf.server.ts";
 import { memberMiddleware } from "#app/services/member-middleware.server.ts";
 import type { Route } from "./+types/root";
 
+export { shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const middleware: Route.MiddlewareFunction[] = [csrfMiddleware, memberMiddleware];
 
 /** Without a loader here, the middleware would not run on client navigation. */

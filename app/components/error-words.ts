@@ -43,6 +43,12 @@ export function errorWords(error: unknown): ErrorWords {
   return { ...unexpected, title };
 }
 
+/** Whether an error says that the server or its database gave no answer, so that the same can be sent again. */
+export function isAway(error: unknown): boolean {
+  if (isRouteErrorResponse(error)) return error.status === 503;
+  return error instanceof Error && noAnswer.test(error.message);
+}
+
 function messageIn(data: unknown): string | null {
   if (typeof data !== "object" || data === null || !("message" in data)) return null;
   return typeof data.message === "string" ? data.message : null;

@@ -12,6 +12,8 @@ import { refuseForm } from "#app/services/form-reply.server.ts";
 import { requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/show";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Account · Stillpeg" }];
 
 export function loader({ context, url }: Route.LoaderArgs) {

@@ -11,6 +11,8 @@ import { refuseForm } from "#app/services/form-reply.server.ts";
 import { requireCan, requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/edit";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Act settings · Stillpeg" }];
 
 export function loader({ context, url }: Route.LoaderArgs) {

@@ -12,6 +12,8 @@ import { orAway, refuseForm } from "#app/services/form-reply.server.ts";
 import { memberContext, requirePerson } from "#app/services/member.server.ts";
 import type { Route } from "./+types/new";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Start an act · Stillpeg" }];
 
 /** Also for a person who belongs to no act, so it stands outside the rail. */

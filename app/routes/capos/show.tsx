@@ -15,6 +15,8 @@ import { getDb } from "#app/services/db.server.ts";
 import { notFound, requireCan, requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/show";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = ({ data }) => [{ title: `${data?.capo.name ?? "Capo"} · Stillpeg` }];
 
 /** A deleted capo, and a capo to those who may not change it, is told on the page of guitars. */

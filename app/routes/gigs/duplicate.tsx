@@ -9,6 +9,8 @@ import { getDb } from "#app/services/db.server.ts";
 import { notFound, requireCan, requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/duplicate";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Duplicate gig · Stillpeg" }];
 
 export async function loader({ params, context, url }: Route.LoaderArgs) {

@@ -9,6 +9,8 @@ import { getDb } from "#app/services/db.server.ts";
 import { requireCan, requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/new";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "New gig · Stillpeg" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {

@@ -20,6 +20,8 @@ import { getDb, transact } from "#app/services/db.server.ts";
 import { notFound, requireCan, requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/show";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = ({ data }) => [
   { title: `${data?.guitar.name ?? "Guitar"} · Stillpeg` },
 ];

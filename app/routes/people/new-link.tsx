@@ -16,6 +16,8 @@ import { getEnv } from "#app/services/env.server.ts";
 import { requireCan, requireMember } from "#app/services/member.server.ts";
 import type { Route } from "./+types/new-link";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Make a join link · Stillpeg" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {

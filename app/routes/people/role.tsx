@@ -10,6 +10,8 @@ import { requireCan, requireMember } from "#app/services/member.server.ts";
 import { membershipRefusal, requireActPerson } from "#app/services/people.server.ts";
 import type { Route } from "./+types/role";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Change a role · Stillpeg" }];
 
 export async function loader({ params, context, url }: Route.LoaderArgs) {

@@ -11,6 +11,8 @@ import { requireCan, requireMember } from "#app/services/member.server.ts";
 import { songGuitars } from "#app/services/song-page.server.ts";
 import type { Route } from "./+types/new";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "New song · Stillpeg" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {

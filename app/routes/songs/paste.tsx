@@ -12,6 +12,8 @@ import { requireCan, requireMember } from "#app/services/member.server.ts";
 import { keepPasted } from "#app/services/paste-songs.server.ts";
 import type { Route } from "./+types/paste";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Paste a list · Stillpeg" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {

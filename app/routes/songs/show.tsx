@@ -18,6 +18,8 @@ import { notFound, requireCan, requireMember } from "#app/services/member.server
 import { songGuitars } from "#app/services/song-page.server.ts";
 import type { Route } from "./+types/show";
 
+export { clientAction, shouldRevalidate } from "#app/components/keep-typed.ts";
+
 export const meta: Route.MetaFunction = ({ data }) => [{ title: `${data?.song.title ?? "Song"} · Stillpeg` }];
 
 export async function loader({ params, context, url }: Route.LoaderArgs) {
