@@ -4,6 +4,7 @@ import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
+import { lastSectionBound } from "#app/domain/planning/bounds/last-section-bound.ts";
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
@@ -44,6 +45,9 @@ const MOST_ROUNDS = 60;
 const FEWEST_ROUNDS = 10;
 const SWEEP_STEPS = 100_000_000;
 const STEPS_PER_LOOK = 150;
+
+/** Share of the best total so far that the last section must cost by itself to be looked at by itself. */
+const WORTHWHILE_ENDING = 0.1;
 
 const ORDER_LOOKS = 200_000;
 const CONFLICT_LOOKS = 50_000;
@@ -94,6 +98,8 @@ function dearSpace(run: Run): SetSpace {
   const target = run.best?.total ?? 0;
   const bound = overLooseCapos(run.model, (model, layout) => {
     const bounds = [partitionBound(model, rules, layout, "dear")];
+    const ending = lastSectionBound(model, rules, layout, target * WORTHWHILE_ENDING);
+    if (ending) bounds.push(ending);
     const joint = jointBound(model, rules, layout);
     if (joint) bounds.push(joint);
     if (layout.limited) {

@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
+import { lastSectionBound } from "#app/domain/planning/bounds/last-section-bound.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
@@ -58,6 +59,18 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
         return throughChains(model, rules, layout, joint);
       });
       prefixes += expectBelow(space, `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(500);
+  });
+
+  test("the last section by itself", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 220; seed += 1) {
+      const parts = ready(randomSet(seed, seed % 3 === 0 ? 2 : null));
+      if (!parts) continue;
+      const { model, rules } = parts;
+      const made = setSpace(model, rules, (layout) => lastSectionBound(model, rules, layout, 0) ?? (() => 0));
+      prefixes += expectBelow(made, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(500);
   });

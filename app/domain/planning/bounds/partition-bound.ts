@@ -29,14 +29,17 @@ const MOST_VALUES = 1_000_000;
  *
  * Why it bounds: every open need is served by some guitar; what the steps of different guitars cost never overlaps, since
  * each gap belongs to the song that it leads into. See `pathTables` for one guitar's part.
+ *
+ * @param apart songs that come after all others and are left out
  */
 export function partitionBound(
   model: Model,
   rules: OrderRules,
   layout: SetLayout,
   size: TableSize,
+  apart = new Set<number>(),
 ): SetBound {
-  const needs = needsOf(model, rules, countedNeeds(model.guitars, size));
+  const needs = needsOf(model, rules, countedNeeds(model.guitars, size), apart);
   const tables = Array.from({ length: model.guitars }, (_, guitar) => pathTables(model, needs, guitar));
   const sets = 1 << needs.counted.length;
   const openNeeds = openNeedsOf(
