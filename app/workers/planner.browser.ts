@@ -1,12 +1,19 @@
 import type { Answer } from "#app/domain/planning/answer.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
-import { search } from "#app/domain/planning/search.ts";
+import { type PlanStep, planInSteps } from "#app/workers/plan-in-steps.ts";
 
 /** What the page asks for: these problems instead of whatever was asked before. No problems: stop. */
 export type PlannerAsk = { run: number; jobs: { key: string; problem: Problem }[]; effort: number };
 
 /** What is known of one problem so far; `done` where nothing better will come. */
-export type PlannerTold = { run: number; key: string; answer: Answer; done: boolean };
+export type PlannerTold = {
+  run: number;
+  key: string;
+  answer: Answer | null;
+  bound: number;
+  effort: number;
+  done: boolean;
+};
 
 /** How long the search goes on before it looks whether something else was asked meanwhile. */
 const breathMilliseconds = 40;
@@ -21,35 +28,29 @@ scope.addEventListener("message", ({ data }: MessageEvent<PlannerAsk>) => {
 
 async function work({ run, jobs, effort }: PlannerAsk): Promise<void> {
   for (const { key, problem } of jobs) {
-    const answer = await solveInBreaths(run, key, problem, effort);
-    if (answer === null) return;
-    tell({ run, key, answer, done: true });
+    const step = await solveInBreaths(run, key, problem, effort);
+    if (step === null) return;
+    tell({ run, key, ...step });
   }
 }
 
-/** The answer, telling what is known on the way; null where something else was asked meanwhile. */
+/** The last step, telling the steps on the way; null where something else was asked meanwhile. */
 async function solveInBreaths(
   run: number,
   key: string,
   problem: Problem,
   effort: number,
-): Promise<Answer | null> {
-  const steps = search(problem, { effort });
+): Promise<PlanStep | null> {
   let breath = performance.now();
-  let told = Number.POSITIVE_INFINITY;
-  for (;;) {
-    const step = steps.next();
-    if (step.done) return step.value;
+  for (const step of planInSteps(problem, { effort })) {
+    if (step.done) return step;
     if (performance.now() - breath < breathMilliseconds) continue;
-    const { answer, bound } = step.value;
-    if (answer && answer.total < told) {
-      told = answer.total;
-      tell({ run, key, answer: { ...answer, bound }, done: false });
-    }
+    tell({ run, key, ...step });
     await breathe();
     if (run !== current) return null;
     breath = performance.now();
   }
+  return null;
 }
 
 function tell(told: PlannerTold): void {

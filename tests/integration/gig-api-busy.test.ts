@@ -6,7 +6,7 @@ import { makeAct } from "#tests/support/factories.ts";
 import { signInAs } from "#tests/support/sign-in.ts";
 
 const solveInPool = vi.hoisted(() => vi.fn());
-vi.mock("#app/services/planner-pool.server.ts", () => ({ solveInPool }));
+vi.mock("#app/services/planner-pool.server.ts", () => ({ solveInPool, mostSeconds: 20 }));
 
 const database = useDatabase();
 
@@ -42,7 +42,12 @@ test("a planner that is full says so, and when to come back", async () => {
 });
 
 test("the planner is told the effort, and hears when the client goes", async () => {
-  solveInPool.mockImplementation(async (_, { signal }) => ({ heard: signal instanceof AbortSignal }));
-  expect(JSON.parse((await plan()).text)).toEqual({ heard: true });
+  solveInPool.mockImplementation(async (_, { signal }) => ({
+    answer: { status: "feasible", heard: signal instanceof AbortSignal },
+    ended: "time",
+  }));
+  const answer = await plan();
+  expect(JSON.parse(answer.text)).toEqual({ status: "feasible", heard: true });
+  expect(answer.headers.get("Plan-Ended")).toBe("time");
   expect(solveInPool.mock.lastCall?.[1]).toMatchObject({ effort: 7 });
 });

@@ -3,7 +3,7 @@ import { parseProblem } from "#app/domain/planning/problem.ts";
 import { usualEffort } from "#app/domain/planning/search.ts";
 import { methodNotAllowed } from "#app/services/api-replies.server.ts";
 import { requireApiMember } from "#app/services/member.server.ts";
-import { solveInPool } from "#app/services/planner-pool.server.ts";
+import { mostSeconds, solveInPool } from "#app/services/planner-pool.server.ts";
 import { readJsonBody } from "#app/services/request-body.server.ts";
 import { QueueFull } from "#app/services/worker-pool.server.ts";
 import type { Route } from "./+types/plan";
@@ -34,8 +34,13 @@ export async function action({ request, context, url }: Route.ActionArgs) {
   const parsed = parseProblem(body.value);
   if (!parsed.ok) return refused(parsed.problems);
   try {
-    const answer = await solveInPool(parsed.problem, { effort: Number(effort), signal: request.signal });
-    return Response.json(answer);
+    const { answer, ended } = await solveInPool(parsed.problem, {
+      effort: Number(effort),
+      signal: request.signal,
+    });
+    // What it might cost and why it ended stand beside the answer, which is the format's own.
+    const limits = { "Plan-Effort": effort, "Plan-Seconds": String(mostSeconds), "Plan-Ended": ended };
+    return Response.json(answer, { headers: limits });
   } catch (error) {
     if (request.signal.aborted) return new Response(null, { status: 499 });
     if (!(error instanceof QueueFull)) throw error;
