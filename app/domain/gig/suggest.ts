@@ -2,24 +2,19 @@ import { certaintyWords } from "#app/domain/gig/certainty.ts";
 import type { Edit } from "#app/domain/gig/edit.ts";
 import { entryTitles } from "#app/domain/gig/entry-titles.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
+import type { Lead } from "#app/domain/gig/lead.ts";
 import { leastChange } from "#app/domain/gig/least-change.ts";
 import { longestRising } from "#app/domain/gig/longest-rising.ts";
 import { reorderEdits } from "#app/domain/gig/order.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
+import type { Rung } from "#app/domain/gig/rungs.ts";
+import { savedWords } from "#app/domain/gig/saved-words.ts";
 import { caposWords } from "#app/domain/music/capo.ts";
 import { compactTuning } from "#app/domain/music/format-tuning.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Answer, FoundAnswer, Totals } from "#app/domain/planning/answer.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
-
-/** How much a performer gives up: only the choice of guitars, or the order too. */
-export type Rung = "same-order" | "any-order";
-
-/** A set's problem as one rung asks it. */
-export function rungProblem(problem: Problem, rung: Rung): Problem {
-  return { ...problem, maxMoved: rung === "same-order" ? 0 : null };
-}
 
 /**
  * The edits that make a set what an answer says: songs outside a longest common run get a new place, and songs whose
@@ -44,17 +39,14 @@ export function suggestionEdits(gig: Gig, plan: SetPlan, found: FoundAnswer): Ed
 
 /** What a suggestion changes and gains, in words. */
 export type Suggested = {
-  /** Whether its total is less than what the set needs now. */
-  gains: boolean;
-  /** Seconds of dead air fewer than now. */
-  saved: number;
   totals: Totals;
+  /** "34 s less", "2 strings fewer": against now, what leads first. */
+  saved: string[];
   /** "Night Ploughing before Glasshouse", "Stonecrop, then Lamps to the end" */
   moves: string[];
   /** "To Birch: Salt on the Step, Stonecrop", "Low Meadow in DADGAD, no capo" */
   changes: string[];
-  proven: boolean;
-  /** How sure this is: proven least, or how much less may still be possible. */
+  /** Which total is proven to be the least, or how much less may still be possible. */
   certainty: string;
 };
 
@@ -117,21 +109,19 @@ export function describeSuggestion(
   {
     answer: found,
     rung,
+    lead,
     repertoire,
     naming,
-  }: { answer: FoundAnswer; rung: Rung; repertoire: Repertoire; naming: Naming },
+  }: { answer: FoundAnswer; rung: Rung; lead: Lead; repertoire: Repertoire; naming: Naming },
 ): Suggested {
   const title = entryTitles(gig, plan.set.id, repertoire);
   const answer = leastChange(plan.problem, plan.plays, found);
-  const tolerance = 1e-6 * Math.max(1, plan.evaluation.total);
   return {
-    gains: plan.evaluation.breaches.length > 0 || answer.total < plan.evaluation.total - tolerance,
-    saved: plan.evaluation.totals.exposed - answer.totals.exposed,
     totals: answer.totals,
+    saved: savedWords(lead, plan.evaluation, answer),
     moves: movesOf(plan.problem, answer.order, title),
     changes: changesOf(plan, answer, repertoire, title, naming),
-    proven: answer.status === "optimal",
-    certainty: certaintyWords(plan.problem, answer, rung),
+    certainty: certaintyWords(plan.problem, answer, rung, lead),
   };
 }
 

@@ -8,7 +8,6 @@ import { saveWords } from "#app/components/gig/header/save-state.tsx";
 import { ribbonWords } from "#app/components/gig/ribbons/ribbon.tsx";
 import { ruleTags } from "#app/components/gig/rows/row-tags.tsx";
 import { partsOf } from "#app/components/gig/sets/moves.ts";
-import { workWords } from "#app/components/gig/suggestions/suggestion-words.ts";
 import { planGig } from "#app/domain/gig/plan.ts";
 import { ribbonLanes } from "#app/domain/gig/ribbon.ts";
 import { gigOf, guitar, pairRule, placeRule, repertoireOf, song } from "#tests/unit/gig/build-gig.ts";
@@ -101,12 +100,6 @@ describe("said aloud", () => {
     };
     expect(totalsWords(totals)).toBe(
       "Dead air 13 s, longest gap 50 s, 1 string retuned, 7 capo changes, 6 guitar changes",
-    );
-    expect(workWords({ strings: 1, capoActions: 1, swaps: 1 })).toBe(
-      "1 string, 1 capo change, 1 guitar change",
-    );
-    expect(workWords({ strings: 21, capoActions: 0, swaps: 5 })).toBe(
-      "21 strings, 0 capo changes, 5 guitar changes",
     );
   });
 

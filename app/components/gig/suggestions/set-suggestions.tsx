@@ -1,14 +1,19 @@
 import { useState } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
+import { ClosingLine } from "#app/components/gig/suggestions/closing-line.tsx";
+import { QuietLine } from "#app/components/gig/suggestions/quiet-line.tsx";
+import { Refusal } from "#app/components/gig/suggestions/refusal.tsx";
 import { RungCard } from "#app/components/gig/suggestions/rung-card.tsx";
-import type { RungState } from "#app/components/gig/suggestions/use-suggestions.ts";
-import { Warning } from "#app/components/ui/warning.tsx";
+import { closingOf, foldedWords, rungTitles } from "#app/components/gig/suggestions/rung-words.ts";
+import { certaintyWords } from "#app/domain/gig/certainty.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
-import { infeasibleWords } from "#app/domain/gig/infeasible-words.ts";
+import { type LadderStep, ladderOf, type RungKnown } from "#app/domain/gig/ladder.ts";
+import { type Lead, leadOf } from "#app/domain/gig/lead.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
-import { describeSuggestion, isFound, type Rung, type Suggested } from "#app/domain/gig/suggest.ts";
-import type { FoundAnswer } from "#app/domain/planning/answer.ts";
+import type { Rung } from "#app/domain/gig/rungs.ts";
+import { leadFigure } from "#app/domain/gig/saved-words.ts";
+import { describeSuggestion } from "#app/domain/gig/suggest.ts";
 
 type SetSuggestionsProps = {
   gig: Gig;
@@ -16,70 +21,76 @@ type SetSuggestionsProps = {
   /** The gig has no other set, so this one need not be named. */
   alone: boolean;
   repertoire: Repertoire;
-  rungs: RungState[];
+  lead: Lead;
+  rungs: RungKnown[];
   begun: boolean;
 };
 
-/** A rung with what it would change and gain. */
-export type Described = { rung: Rung; answer: FoundAnswer; said: Suggested; done: boolean };
-
-function heldWords({ set, rows }: SetPlan): string {
+function nowWords({ set, rows, evaluation }: SetPlan, lead: Lead): string {
+  const { value, unit } = leadFigure(lead, evaluation);
+  const what = lead === "dead-air" ? "s of dead air" : unit;
   const ends = [set.holdFirst ? "first" : null, set.holdLast ? "last" : null].filter(Boolean);
-  if (rows.length < 2 || ends.length === 0) return "";
-  return ` ${ends.join(" and ").replace(/^./, (letter) => letter.toUpperCase())} song held.`;
+  if (rows.length < 2 || ends.length === 0) return `Now ${value} ${what}.`;
+  return `Now ${value} ${what}. ${ends.join(" and ").replace(/^./, (letter) => letter.toUpperCase())} song held.`;
 }
 
-/** Suggestions for one set. Folded to one line where nothing is gained. */
-export function SetSuggestionsBlock({ gig, plan, alone, repertoire, rungs, begun }: SetSuggestionsProps) {
+/** Suggestions for one set, cheapest first. Rungs that gain nothing over those before them are folded to a line. */
+export function SetSuggestionsBlock(props: SetSuggestionsProps) {
+  const { gig, plan, alone, repertoire, lead, rungs, begun } = props;
   const { naming } = usePageTools();
   const [opened, setOpened] = useState<Rung | "none" | null>(null);
-  const found: Described[] = rungs.flatMap(({ rung, answer, done }) =>
-    answer && isFound(answer)
-      ? [{ rung, answer, done, said: describeSuggestion(gig, plan, { answer, rung, repertoire, naming }) }]
-      : [],
-  );
-  const refused = rungs.flatMap(({ answer }) => (answer && !isFound(answer) ? [answer] : []));
-  const reasons = [...new Set(refused.flatMap((answer) => infeasibleWords(gig, plan, answer, repertoire)))];
-  const gaining = found.filter(({ said }) => said.gains);
-  const working = rungs.some((rung) => !rung.done);
-  const open = opened ?? gaining.at(-1)?.rung ?? "none";
-  const now = Math.round(plan.totals.exposed);
+  const steps = ladderOf(plan.evaluation, rungs);
+  const first = steps.find((step) => step.kind === "gains");
+  const open = opened ?? first?.rung ?? "none";
+  const running = steps.find((step) => step.kind === "looking");
+  const now = leadOf(lead, plan.evaluation);
+
+  const drawn = (step: LadderStep) => {
+    switch (step.kind) {
+      case "gains":
+        return (
+          <RungCard
+            key={step.rung}
+            gig={gig}
+            plan={plan}
+            repertoire={repertoire}
+            lead={lead}
+            described={{
+              ...step,
+              said: describeSuggestion(gig, plan, { ...step, lead, repertoire, naming }),
+            }}
+            open={open === step.rung}
+            onOpen={() => setOpened(open === step.rung ? "none" : step.rung)}
+          />
+        );
+      case "folded": {
+        const last = step.rungs.at(-1)!;
+        const nothing = !first && last === "any-order";
+        return (
+          <QuietLine key={last}>
+            {nothing ? "Nothing better than the set as it stands." : foldedWords(step.rungs)}{" "}
+            {certaintyWords(plan.problem, step.best, last, lead)}
+          </QuietLine>
+        );
+      }
+      case "refused":
+        return <Refusal key={step.rung} gig={gig} plan={plan} repertoire={repertoire} step={step} />;
+      case "looking":
+        if (step !== running || !begun) return null;
+        return (
+          <QuietLine key={step.rung}>
+            {rungTitles[step.rung]}: looking for less.
+            {step.best ? <ClosingLine closing={closingOf(lead, plan.problem, step.best)} now={now} /> : null}
+          </QuietLine>
+        );
+    }
+  };
+
   return (
     <section className="flex flex-col">
       {alone ? null : <h3 className="font-semibold text-lg leading-tight">{plan.set.name}</h3>}
-      <p className="pb-2 text-grey-600 leading-snug">
-        Now {now} s of dead air.{heldWords(plan)}
-      </p>
-      {reasons.map((reason) => (
-        <Warning key={reason}>{reason}</Warning>
-      ))}
-      {gaining.map((rung) => (
-        <RungCard
-          key={rung.rung}
-          gig={gig}
-          plan={plan}
-          repertoire={repertoire}
-          described={rung}
-          open={open === rung.rung}
-          onOpen={() => setOpened(open === rung.rung ? "none" : rung.rung)}
-        />
-      ))}
-      {working && begun ? (
-        <p className="border-grey-200 border-t py-2 text-grey-600">Looking for less retuning</p>
-      ) : null}
-      {!working && gaining.length === 0 && reasons.length === 0 ? <NothingLess found={found} /> : null}
+      <p className="pb-2 text-grey-600 leading-snug">{nowWords(plan, lead)}</p>
+      <ol>{steps.map(drawn)}</ol>
     </section>
-  );
-}
-
-/** That nothing better is known, and how sure that is. */
-function NothingLess({ found }: { found: Described[] }) {
-  const any = found.find(({ rung }) => rung === "any-order");
-  return (
-    <p className="border-grey-200 border-t py-2 text-grey-600">
-      {any?.said.proven
-        ? "Nothing needs less than this order: proven."
-        : `Nothing better was found. ${any?.said.certainty ?? ""}`}
-    </p>
   );
 }

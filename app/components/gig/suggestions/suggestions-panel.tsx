@@ -39,6 +39,7 @@ export const SuggestionsPanel = memo(function SuggestionsPanel(props: Suggestion
             gig={gig}
             plan={setPlan}
             alone={plan.sets.length === 1}
+            lead="dead-air"
             repertoire={repertoire}
             rungs={found.rungs}
             begun={begun && failed === null}

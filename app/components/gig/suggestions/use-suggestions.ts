@@ -1,29 +1,21 @@
 import { useMemo } from "react";
 import { type PlannerAnswers, usePlannerAnswers } from "#app/components/gig/planner/use-planner-answers.ts";
+import type { RungKnown } from "#app/domain/gig/ladder.ts";
 import type { GigPlan } from "#app/domain/gig/plan.ts";
-import { type Rung, rungProblem } from "#app/domain/gig/suggest.ts";
-import type { Answer } from "#app/domain/planning/answer.ts";
+import { type Rung, rungProblem, rungs } from "#app/domain/gig/rungs.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 
-const rungs = ["same-order", "any-order"] as const satisfies readonly Rung[];
+/** What is known so far of one set's rungs, cheapest first. */
+export type SetSuggestions = { setId: string; rungs: RungKnown[] };
 
-/** What is known so far of one rung of one set. */
-export type RungState = { rung: Rung; answer: Answer | null; done: boolean };
-export type SetSuggestions = { setId: string; rungs: RungState[] };
-
-export type Suggestions = {
-  sets: SetSuggestions[];
-  /** The search has begun: not on the server, nor without JavaScript. */
-  begun: boolean;
-  /** What went wrong with the planner itself, in words; null where nothing did. */
-  failed: string | null;
-};
+export type Suggestions = Pick<PlannerAnswers, "begun" | "failed"> & { sets: SetSuggestions[] };
 
 /** How much the search may do for one rung: a few seconds for a set of 20 songs. */
 const effort = 400_000;
 
 type Job = { setId: string; rung: Rung; key: string; problem: Problem };
 
+/** Cheapest first: each rung of every set before the next rung of any. */
 function jobsOf(plan: GigPlan): Job[] {
   return rungs.flatMap((rung) =>
     plan.sets
@@ -35,7 +27,7 @@ function jobsOf(plan: GigPlan): Job[] {
   );
 }
 
-/** Orders and guitars that need less dead air than the gig as it stands, worked out beside the page. */
+/** Orders and guitars that need less than the gig as it stands, worked out beside the page. */
 export function useSuggestions(plan: GigPlan): Suggestions {
   const jobs = useMemo(() => jobsOf(plan), [plan]);
   const { known, begun, failed } = usePlannerAnswers(jobs, { effort });
@@ -43,16 +35,14 @@ export function useSuggestions(plan: GigPlan): Suggestions {
   return useMemo(() => ({ sets, begun, failed }), [sets, begun, failed]);
 }
 
+const unknown = { answer: null, bound: 0, done: false };
+
 function suggestionsOf(jobs: readonly Job[], known: PlannerAnswers["known"]): SetSuggestions[] {
   const setIds = [...new Set(jobs.map((job) => job.setId))];
   return setIds.map((setId) => ({
     setId,
     rungs: jobs
       .filter((job) => job.setId === setId)
-      .map(({ rung, key }) => ({
-        rung,
-        answer: known.get(key)?.answer ?? null,
-        done: known.get(key)?.done ?? false,
-      })),
+      .map(({ rung, key }) => ({ ...unknown, ...known.get(key), rung })),
   }));
 }
