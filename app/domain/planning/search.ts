@@ -113,7 +113,8 @@ function dearSpace(run: Run): SetSpace {
     }
     return throughChains(model, rules, layout, greatest(...bounds));
   });
-  return setSpace(run.model, rules, bound);
+  const closer = overLooseCapos(run.model, (model, layout) => partitionBound(model, rules, layout, "close"));
+  return setSpace(run.model, rules, bound, closer);
 }
 
 /**

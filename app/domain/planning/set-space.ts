@@ -20,11 +20,14 @@ export type SetSpace = Space & {
 /**
  * Sets that are built from the first song on: a state is what matters of the songs played so far, a move plays one more
  * song in one of its ways.
+ *
+ * @param closerOf a bound that takes longer, for states that are about to be expanded
  */
 export function setSpace(
   model: Model,
   rules: OrderRules,
   boundOf: (layout: SetLayout) => SetBound,
+  closerOf?: (layout: SetLayout) => SetBound,
 ): SetSpace {
   const layout = setLayout(model);
   const songs = model.songs;
@@ -158,6 +161,7 @@ export function setSpace(
     start: startState(model, layout),
     expand,
     bound: boundOf(layout),
+    ...(closerOf ? { closer: closerOf(layout) } : {}),
     planOf,
   };
 }

@@ -48,6 +48,22 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
     expect(prefixes).toBeGreaterThan(500);
   });
 
+  test("needs shared out among the guitars, chains followed link by link", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 300; seed += 1) {
+      const problem = randomSet(seed, seed % 3 === 0 ? 2 : null);
+      const ids = problem.order;
+      const chain = (from: number) => [ids[from]!, ids[from + 1]!] as [string, string];
+      if (seed % 4 === 1 && ids.length > 4) problem.rules.into.push(chain(0), chain(1), chain(3));
+      const parts = ready(problem);
+      if (!parts) continue;
+      const { model, rules } = parts;
+      const space = setSpace(model, rules, (layout) => partitionBound(model, rules, layout, "close"));
+      prefixes += expectBelow(space, `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(500);
+  });
+
   test("all guitars followed together", () => {
     let prefixes = 0;
     for (let seed = 1; seed <= 220; seed += 1) {

@@ -1,4 +1,4 @@
-import { chainsOf, needsOf, precedence } from "#app/domain/planning/bounds/needs.ts";
+import { canBeLeft, chainsOf, needsOf, precedence } from "#app/domain/planning/bounds/needs.ts";
 import { openNeedsOf } from "#app/domain/planning/bounds/open-needs.ts";
 import { type Model, type Option, UNUSED } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
@@ -8,9 +8,11 @@ import { stepCost } from "#app/domain/planning/step-cost.ts";
 
 /** A tech is never late in a bound. */
 const ENOUGH = Number.POSITIVE_INFINITY;
-const MOST_NEEDS = 16;
+const MOST_NEEDS = 18;
 const FEWEST_NEEDS = 6;
 const TABLE_STEPS = 60_000_000;
+/** With one guitar nothing else counts as many needs, so the tables may take longer. */
+const STEPS_OF_ONE = 150_000_000;
 const MOST_CELLS = 8_000_000;
 const MOST_JOINT_STATES = 20_000;
 
@@ -104,7 +106,7 @@ function chainSteps(model: Model, songs: number[]): Step[][] {
 /** How many needs the tables have room and time for; fewer than is worth it where there are too many joint states. */
 function affordableNeeds(joint: Joint): number {
   const targets = joint.necks.reduce((sum, necks) => sum + necks.length, 0) * 2;
-  const steps = Math.log2(TABLE_STEPS / (joint.count * targets));
+  const steps = Math.log2((joint.necks.length === 1 ? STEPS_OF_ONE : TABLE_STEPS) / (joint.count * targets));
   const cells = Math.log2(MOST_CELLS / joint.count);
   return Math.min(MOST_NEEDS, Math.floor(Math.min(steps, cells)));
 }
@@ -134,6 +136,7 @@ function fill(joint: Joint, units: Unit[], first: Int32Array, passing: Target[])
 
   for (let set = 1; set < sets; set += 1) {
     least.fill(Number.POSITIVE_INFINITY, set * count, (set + 1) * count);
+    if (!canBeLeft(set, first)) continue;
     for (const [unit, { targets }] of units.entries()) {
       if (((set >> unit) & 1) === 0 || (first[unit]! & set) !== 0) continue;
       for (const target of targets) offer(target, set, set & ~(1 << unit));

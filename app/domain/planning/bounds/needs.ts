@@ -47,12 +47,12 @@ function comesForFree(need: Need, other: Need): boolean {
   );
 }
 
-/** Songs by options, section and cover; one with a place of its own stands alone. */
+/** Songs by options, section and cover; one with a place of its own stands alone. What opens the set is no need. */
 function finest(model: Model, rules: OrderRules, apart: Set<number>): Draft[] {
   const section = new Map(model.problem.songs.map((song) => [song.id, song.section]));
   const groups = new Map<string, Draft>();
   for (let song = 0; song < model.songs; song += 1) {
-    if (apart.has(song)) continue;
+    if (apart.has(song) || rules.latest[song] === 0) continue;
     const options = model.options[song]!;
     const words = options.map(({ guitar, neck, penalty }) => `${guitar}.${neck}.${penalty}`).sort();
     const fixed = rules.earliest[song] === rules.latest[song] ? song : "";
@@ -112,20 +112,43 @@ export function precedence(rules: OrderRules, units: { songs: number[] }[]): Int
  * At most `most` needs that are worth counting: first those that differ in cover alone become one, then some are left out.
  *
  * @param apart songs that are served in some other way: they are in no need, and not passed through
+ * @param linked songs of chains that are each a need of their own, counted before all others
  */
-export function needsOf(model: Model, rules: OrderRules, most: number, apart = new Set<number>()): Needs {
-  let needs = finest(model, rules, apart);
-  while (needs.length > most) {
+export function needsOf(
+  model: Model,
+  rules: OrderRules,
+  most: number,
+  apart = new Set<number>(),
+  linked: ReadonlySet<number> = new Set(),
+): Needs {
+  const alone = new Set([...apart, ...linked]);
+  const links = [...linked].map(
+    (song): Need => ({ songs: [song], options: model.options[song]!, cover: model.cover[song]! }),
+  );
+  let needs = finest(model, rules, alone);
+  const room = Math.max(0, most - links.length);
+  while (needs.length > room) {
     const fewer = mergeClosest(needs);
     if (!fewer) break;
     needs = fewer;
   }
-  const counted = worthCounting(needs, most);
+  const counted: Need[] = [...links, ...worthCounting(needs, room)];
   const standing = new Set(
     counted.map(({ songs, cover }) => songs.find((song) => model.cover[song] === cover)!),
   );
   const passing = model.options
     .map((_, song) => song)
-    .filter((song) => !standing.has(song) && !apart.has(song));
+    .filter((song) => !standing.has(song) && !apart.has(song) && rules.latest[song] !== 0);
   return { counted, passing, first: precedence(rules, counted) };
+}
+
+/**
+ * Whether these needs can be all that is left: not where one of them should have come before one that is served already.
+ *
+ * @param first see `precedence`
+ */
+export function canBeLeft(set: number, first: Int32Array): boolean {
+  for (let need = 0; need < first.length; need += 1)
+    if (((set >> need) & 1) === 0 && (first[need]! & set) !== 0) return false;
+  return true;
 }

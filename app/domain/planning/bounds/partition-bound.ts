@@ -1,24 +1,27 @@
+import type { GuitarRows } from "#app/domain/planning/bounds/guitar-rows.ts";
 import { needsOf } from "#app/domain/planning/bounds/needs.ts";
 import { openNeedsOf } from "#app/domain/planning/bounds/open-needs.ts";
-import { type PathTables, pathTables } from "#app/domain/planning/bounds/path-tables.ts";
+import { pathTables } from "#app/domain/planning/bounds/path-tables.ts";
 import { type Model, UNUSED } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
 import { StateTable } from "#app/domain/planning/search/state-table.ts";
-import type { SetLayout } from "#app/domain/planning/set-layout.ts";
+import { NOBODY, type SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
 
-/** Cheap tables are made in some milliseconds, dear ones in some hundred. */
-export type TableSize = "cheap" | "dear";
+/**
+ * Cheap tables are made in some milliseconds, dear ones in some hundred. Close ones follow chains link by link and count
+ * more needs, and take long to look things up in.
+ */
+export type TableSize = "cheap" | "dear" | "close";
 
-/** How many needs are counted: their subsets are gone through for every guitar. */
-function countedNeeds(guitars: number, size: TableSize): number {
-  const dear = size === "dear";
-  if (guitars === 1) return dear ? 16 : 12;
-  if (guitars === 2) return dear ? 13 : 11;
-  if (guitars === 3) return dear ? 11 : 9;
-  if (guitars === 4) return dear ? 10 : 8;
-  return dear ? 9 : 7;
-}
+/** How many needs are counted, by the number of guitars: their subsets are gone through for every guitar. */
+const COUNTED: Record<TableSize, number[]> = {
+  cheap: [12, 11, 9, 8, 7],
+  dear: [16, 13, 11, 10, 9],
+  close: [16, 14, 12, 11, 9],
+};
+/** Share of the needs that may be songs of chains. */
+const LINKED = 0.6;
 
 const MOST_FOLDED_CELLS = 6_000_000;
 const MOST_VALUES = 1_000_000;
@@ -39,8 +42,12 @@ export function partitionBound(
   size: TableSize,
   apart = new Set<number>(),
 ): SetBound {
-  const needs = needsOf(model, rules, countedNeeds(model.guitars, size), apart);
-  const tables = Array.from({ length: model.guitars }, (_, guitar) => pathTables(model, needs, guitar));
+  const most = COUNTED[size][Math.min(model.guitars, COUNTED[size].length) - 1]!;
+  const linked = new Set(size === "close" ? linkedSongs(rules, apart, Math.floor(most * LINKED)) : []);
+  const needs = needsOf(model, rules, most, apart, linked);
+  const tables = Array.from({ length: model.guitars }, (_, guitar) =>
+    pathTables(model, rules, needs, guitar, linked),
+  );
   const sets = 1 << needs.counted.length;
   const openNeeds = openNeedsOf(
     needs.counted.map(({ songs }) => songs),
@@ -108,7 +115,10 @@ export function partitionBound(
     const open = openNeeds(state);
     if (open === 0) return 0;
     for (let guitar = 0; guitar < model.guitars; guitar += 1)
-      places[guitar] = placeOf(tables[guitar]!, state[layout.necks + guitar]!);
+      places[guitar] = rowOf(tables[guitar]!.rows, state[layout.necks + guitar]!);
+    const last = state[layout.last]!;
+    if (last !== NOBODY && linked.has(last))
+      places[current] = tables[current]!.rows.rowAfter(last, state[layout.necks + current]!);
     valueKey.set(places);
     valueKey[model.guitars] = current;
     valueKey[model.guitars + 1] = open;
@@ -126,8 +136,20 @@ export function partitionBound(
   };
 }
 
-function placeOf(table: PathTables, neck: number): number {
-  return neck === UNUSED ? table.unusedPlace : table.places.get(neck)!;
+/** Songs of whole chains, as many as there is room for. */
+function linkedSongs({ next, previous }: OrderRules, apart: Set<number>, room: number): number[] {
+  const linked: number[] = [];
+  for (const [song, before] of previous.entries()) {
+    if (before !== -1 || next[song] === -1) continue;
+    const chain: number[] = [];
+    for (let at = song; at !== -1; at = next[at]!) chain.push(at);
+    if (linked.length + chain.length <= room && !chain.some((one) => apart.has(one))) linked.push(...chain);
+  }
+  return linked;
+}
+
+function rowOf({ unused, rowOfNeck }: GuitarRows, neck: number): number {
+  return neck === UNUSED ? unused : rowOfNeck.get(neck)!;
 }
 
 function bitCount(bits: number): number {

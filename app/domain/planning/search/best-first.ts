@@ -28,6 +28,7 @@ export class BestFirst {
   private moves = new Int32Array(this.capacity);
   private depths = new Uint8Array(this.capacity);
   private closed = new Uint8Array(this.capacity);
+  private judged = new Uint8Array(this.capacity);
   private readonly table: StateTable;
   private readonly heap = new Heap((a, b) => this.depths[a]! > this.depths[b]!);
   private readonly state: Int32Array;
@@ -78,12 +79,26 @@ export class BestFirst {
         this.found = { cost, moves: this.wayTo(node) };
         return;
       }
-      const least = this.values[node]!;
       this.table.read(node, this.state);
+      if (!this.judge(node, depth)) continue;
+      const least = this.values[node]!;
       this.space.expand(this.state, depth, this.child, (step, move) => {
         this.reach(cost + step, least, node, move, depth + 1);
       });
     }
+  }
+
+  /** Asks for the closer bound of the state in `state` where that was not done yet; whether it is still its turn. */
+  private judge(node: number, depth: number): boolean {
+    const { closer } = this.space;
+    if (!closer || this.judged[node]) return true;
+    this.judged[node] = 1;
+    const value = this.costs[node]! + closer(this.state, depth);
+    if (value <= this.values[node]!) return true;
+    this.values[node] = value;
+    this.closed[node] = 0;
+    if (value < this.limit) this.heap.push(value, node);
+    return false;
   }
 
   private wayTo(node: number): number[] {
@@ -138,5 +153,6 @@ export class BestFirst {
     this.moves = doubled(new Int32Array(this.capacity), this.moves);
     this.depths = doubled(new Uint8Array(this.capacity), this.depths);
     this.closed = doubled(new Uint8Array(this.capacity), this.closed);
+    this.judged = doubled(new Uint8Array(this.capacity), this.judged);
   }
 }

@@ -17,6 +17,8 @@ export type Space = {
   ): void;
   /** A cost that no completion of this state undercuts; `Infinity` where there is none. 0 for a complete state. */
   bound(state: Int32Array, depth: number): number;
+  /** A closer bound that takes longer, asked for once for each state that is about to be expanded. */
+  closer?(state: Int32Array, depth: number): number;
 };
 
 /** A complete way and what it costs. */
