@@ -2,33 +2,25 @@ import { entryTitles } from "#app/domain/gig/entry-titles.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
+import { pairWords, placeName } from "#app/domain/gig/rule-names.ts";
 import type { InfeasibleAnswer, Reason } from "#app/domain/planning/answer.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
-
-function placeWords(place: number, problem: Problem): string {
-  const songs = problem.songs.length;
-  const main = problem.songs.filter((song) => song.section === 0).length;
-  if (place > songs || place < 1) return "at a place the set does not have";
-  if (place === 1) return "first";
-  if (place === songs) return "last";
-  return place === main + 1 && main > 0 ? "first of the encore" : `at place ${place}`;
-}
 
 /** The rules among some songs, each in a few words. */
 function rulesAmong(problem: Problem, songs: readonly string[], title: (id: string) => string): string[] {
   const among = new Set(songs);
   const { at, before, into, apart } = problem.rules;
   const pair =
-    (words: (a: string, b: string) => string) =>
+    (kind: "before" | "into" | "apart") =>
     ([a, b]: [string, string]) =>
-      among.has(a) && among.has(b) ? [words(title(a), title(b))] : [];
+      among.has(a) && among.has(b) ? [pairWords(kind, title(a), title(b))] : [];
   return [
     ...Object.entries(at).flatMap(([id, place]) =>
-      among.has(id) ? [`${title(id)} ${placeWords(place, problem)}`] : [],
+      among.has(id) ? [`${title(id)} ${placeName(place, problem)}`] : [],
     ),
-    ...into.flatMap(pair((a, b) => `${a} straight into ${b}`)),
-    ...before.flatMap(pair((a, b) => `${a} before ${b}`)),
-    ...apart.flatMap(pair((a, b) => `${a} and ${b} apart`)),
+    ...into.flatMap(pair("into")),
+    ...before.flatMap(pair("before")),
+    ...apart.flatMap(pair("apart")),
   ];
 }
 

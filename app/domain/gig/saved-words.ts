@@ -30,21 +30,33 @@ export function savedWords(lead: Lead, now: Measured, then: Measured): string[] 
   return [...first, ...order.filter((kind) => kind !== lead)].flatMap((kind) => difference(kind, now, then));
 }
 
-function counted(kind: Counted, measured: Measured): string {
-  const count = Math.round(leadOf(kind, measured));
-  const name = names[kind][count === 1 ? 0 : 1];
-  return kind === "dead-air" ? `${count} s of dead air` : `${count} ${name}`;
+/**
+ * What an order needs besides what leads, for the small print of a suggestion.
+ * @example workWords("dead-air", answer) // "21 strings, 1 capo and 5 guitar changes"
+ * @example workWords("capos", answer) // "233 s of dead air, 21 strings, 5 guitar changes"
+ */
+export function workWords(lead: Lead, measured: Measured): string {
+  const count = (kind: Counted) => Math.round(leadOf(kind, measured));
+  const changes = (["capos", "guitars"] as const)
+    .filter((kind) => kind !== lead)
+    .map((kind) => `${count(kind)} ${kind === "capos" ? "capo" : "guitar"}`);
+  const last = lead === "guitars" ? count("capos") : count("guitars");
+  return [
+    lead === "dead-air" ? "" : `${count("dead-air")} s of dead air`,
+    lead === "strings" ? "" : `${count("strings")} ${names.strings[count("strings") === 1 ? 0 : 1]}`,
+    `${changes.join(" and ")} ${last === 1 ? "change" : "changes"}`,
+  ]
+    .filter(Boolean)
+    .join(", ");
 }
 
 /**
- * What an order needs besides what leads, for the small print of a suggestion.
- * @example workWords("dead-air", answer) // "21 strings, 1 capo change, 5 guitar changes"
+ * How much less of what leads there is than now, to stand before the figure; empty where it is the same.
+ * @example leadChange("dead-air", now, then) // "−34"
  */
-export function workWords(lead: Lead, measured: Measured): string {
-  return order
-    .filter((kind) => kind !== lead)
-    .map((kind) => counted(kind, measured))
-    .join(", ");
+export function leadChange(lead: Lead, now: Measured, then: Measured): string {
+  const change = Math.round(leadOf(lead, then)) - Math.round(leadOf(lead, now));
+  return change === 0 ? "" : change > 0 ? `+${change}` : `−${-change}`;
 }
 
 /**

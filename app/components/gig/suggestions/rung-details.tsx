@@ -25,7 +25,7 @@ export function RungDetails({ gig, plan, repertoire, described }: RungDetailsPro
   }, [gig, edits, repertoire, naming, plan.set.id]);
   const mayUse = rung === "same-order" ? may.prepare : may.plan;
   return (
-    <div className="flex flex-col gap-3 py-2">
+    <div className="flex flex-col gap-2.5 py-2">
       <Against now={plan.evaluation.totals} then={answer.totals} />
       {mayUse ? (
         <Button

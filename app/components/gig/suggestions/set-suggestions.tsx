@@ -5,6 +5,7 @@ import { QuietLine } from "#app/components/gig/suggestions/quiet-line.tsx";
 import { Refusal } from "#app/components/gig/suggestions/refusal.tsx";
 import { RungCard } from "#app/components/gig/suggestions/rung-card.tsx";
 import { closingOf, foldedWords, rungTitles } from "#app/components/gig/suggestions/rung-words.ts";
+import { WhyNotLess } from "#app/components/gig/suggestions/why-not-less.tsx";
 import { certaintyWords } from "#app/domain/gig/certainty.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { type LadderStep, ladderOf, type RungKnown } from "#app/domain/gig/ladder.ts";
@@ -13,7 +14,8 @@ import type { SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import type { Rung } from "#app/domain/gig/rungs.ts";
 import { leadFigure } from "#app/domain/gig/saved-words.ts";
-import { describeSuggestion } from "#app/domain/gig/suggest.ts";
+import { describeSuggestion, isFound } from "#app/domain/gig/suggest.ts";
+import type { FoundAnswer } from "#app/domain/planning/answer.ts";
 
 type SetSuggestionsProps = {
   gig: Gig;
@@ -34,6 +36,12 @@ function nowWords({ set, rows, evaluation }: SetPlan, lead: Lead): string {
   return `Now ${value} ${what}. ${ends.join(" and ").replace(/^./, (letter) => letter.toUpperCase())} song held.`;
 }
 
+/** The best answer in any order, once nothing better will come. */
+function bestOf(rungs: readonly RungKnown[]): FoundAnswer | null {
+  const last = rungs.find(({ rung }) => rung === "any-order");
+  return last?.done && last.answer && isFound(last.answer) ? last.answer : null;
+}
+
 /** Suggestions for one set, cheapest first. Rungs that gain nothing over those before them are folded to a line. */
 export function SetSuggestionsBlock(props: SetSuggestionsProps) {
   const { gig, plan, alone, repertoire, lead, rungs, begun } = props;
@@ -43,6 +51,7 @@ export function SetSuggestionsBlock(props: SetSuggestionsProps) {
   const first = steps.find((step) => step.kind === "gains");
   const open = opened ?? first?.rung ?? "none";
   const running = steps.find((step) => step.kind === "looking");
+  const best = bestOf(rungs);
   const now = leadOf(lead, plan.evaluation);
 
   const drawn = (step: LadderStep) => {
@@ -91,6 +100,7 @@ export function SetSuggestionsBlock(props: SetSuggestionsProps) {
       {alone ? null : <h3 className="font-semibold text-lg leading-tight">{plan.set.name}</h3>}
       <p className="pb-2 text-grey-600 leading-snug">{nowWords(plan, lead)}</p>
       <ol>{steps.map(drawn)}</ol>
+      {best ? <WhyNotLess gig={gig} plan={plan} repertoire={repertoire} lead={lead} best={best} /> : null}
     </section>
   );
 }
