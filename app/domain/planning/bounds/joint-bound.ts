@@ -13,6 +13,8 @@ const FEWEST_NEEDS = 6;
 const TABLE_STEPS = 60_000_000;
 /** With one guitar nothing else counts as many needs, so the tables may take longer. */
 const STEPS_OF_ONE = 150_000_000;
+/** Share of the needs that may go to songs of rules about which comes first. */
+const ORDERED = 0.2;
 const MOST_CELLS = 8_000_000;
 const MOST_JOINT_STATES = 20_000;
 
@@ -168,7 +170,7 @@ export function jointBound(model: Model, rules: OrderRules, layout: SetLayout): 
   if (!joint || most < FEWEST_NEEDS) return null;
   const chains = chainsOf(model, rules).slice(0, Math.floor(most / 2));
   const inChains = new Set(chains.flatMap(({ songs }) => songs));
-  const needs = needsOf(model, rules, most - chains.length, inChains);
+  const needs = needsOf(model, rules, most - chains.length, inChains, new Set(), ORDERED);
   const units: Unit[] = [
     ...chains.map(({ songs }) => ({
       songs,

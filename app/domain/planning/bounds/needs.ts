@@ -47,15 +47,23 @@ function comesForFree(need: Need, other: Need): boolean {
   );
 }
 
-/** Songs by options, section and cover; one with a place of its own stands alone. What opens the set is no need. */
-function finest(model: Model, rules: OrderRules, apart: Set<number>): Draft[] {
+/**
+ * Songs by options, section and cover; one with a place of its own, and those in `ordered`, stand alone. What opens the set
+ * is no need.
+ */
+function finest(
+  model: Model,
+  rules: OrderRules,
+  apart: Set<number>,
+  ordered: ReadonlySet<number> = new Set(),
+): Draft[] {
   const section = new Map(model.problem.songs.map((song) => [song.id, song.section]));
   const groups = new Map<string, Draft>();
   for (let song = 0; song < model.songs; song += 1) {
     if (apart.has(song) || rules.latest[song] === 0) continue;
     const options = model.options[song]!;
     const words = options.map(({ guitar, neck, penalty }) => `${guitar}.${neck}.${penalty}`).sort();
-    const fixed = rules.earliest[song] === rules.latest[song] ? song : "";
+    const fixed = rules.earliest[song] === rules.latest[song] || ordered.has(song) ? song : "";
     const key = `${words.join(" ")}|${section.get(model.problem.order[song]!)}|${fixed}`;
     const cover = model.cover[song]!;
     const known = groups.get(`${key}|${cover}`);
@@ -63,6 +71,31 @@ function finest(model: Model, rules: OrderRules, apart: Set<number>): Draft[] {
     else groups.set(`${key}|${cover}`, { key, songs: [song], options, cover });
   }
   return [...groups.values()];
+}
+
+/**
+ * The finest needs; songs of a rule about which comes first stand alone, pair after pair as far as there is room, so that
+ * the rule can be seen.
+ *
+ * @param reserve needs that these may add even where there is no room, at the cost of others
+ */
+function finestInOrder(
+  model: Model,
+  rules: OrderRules,
+  apart: Set<number>,
+  room: number,
+  reserve: number,
+): Draft[] {
+  const ordered = new Set<number>();
+  const most = Math.max(room, finest(model, rules, apart).length + reserve);
+  for (const [b, before] of rules.predecessors.entries()) {
+    for (const a of before) {
+      if (rules.latest[a]! < rules.earliest[b]! || (apart.has(a) && apart.has(b))) continue;
+      const tried = new Set([...ordered, a, b]);
+      if (finest(model, rules, apart, tried).length <= most) ordered.add(a).add(b);
+    }
+  }
+  return finest(model, rules, apart, ordered);
 }
 
 /** Makes one need of the two that differ in cover alone, and in that the least; null where there are none. */
@@ -95,14 +128,19 @@ function worthCounting(needs: Draft[], most: number): Draft[] {
   return needs.filter((_, i) => chosen.has(i));
 }
 
+/** Whether all songs of one are before all of another. Chains are never broken up, so there one pair decides. */
+function allBefore(rules: OrderRules, one: { songs: number[] }, other: { songs: number[] }): boolean {
+  const inChain = (songs: number[]) =>
+    songs.every((song, i) => i === 0 || rules.previous[song] === songs[i - 1]);
+  const pairs = one.songs.flatMap((a) => other.songs.map((b) => comesFirst(rules, a, b)));
+  return inChain(one.songs) && inChain(other.songs) ? pairs.some(Boolean) : pairs.every(Boolean);
+}
+
 /** For each set of songs, the bits of those that must all be played before any of it. */
 export function precedence(rules: OrderRules, units: { songs: number[] }[]): Int32Array {
   return Int32Array.from(units, (unit) =>
     units.reduce(
-      (bits, other, i) =>
-        other !== unit && other.songs.every((a) => unit.songs.every((b) => comesFirst(rules, a, b)))
-          ? bits | (1 << i)
-          : bits,
+      (bits, other, i) => (other !== unit && allBefore(rules, other, unit) ? bits | (1 << i) : bits),
       0,
     ),
   );
@@ -113,6 +151,7 @@ export function precedence(rules: OrderRules, units: { songs: number[] }[]): Int
  *
  * @param apart songs that are served in some other way: they are in no need, and not passed through
  * @param linked songs of chains that are each a need of their own, counted before all others
+ * @param reserve share of the needs that may go to songs of rules about which comes first, though others are left out for it
  */
 export function needsOf(
   model: Model,
@@ -120,13 +159,14 @@ export function needsOf(
   most: number,
   apart = new Set<number>(),
   linked: ReadonlySet<number> = new Set(),
+  reserve = 0,
 ): Needs {
   const alone = new Set([...apart, ...linked]);
   const links = [...linked].map(
     (song): Need => ({ songs: [song], options: model.options[song]!, cover: model.cover[song]! }),
   );
-  let needs = finest(model, rules, alone);
   const room = Math.max(0, most - links.length);
+  let needs = finestInOrder(model, rules, alone, room, Math.floor(room * reserve));
   while (needs.length > room) {
     const fewer = mergeClosest(needs);
     if (!fewer) break;
