@@ -1,5 +1,12 @@
 import { z } from "zod";
-import { entrySchema, ruleSchema, setSchema, timesSchema } from "#app/domain/gig/edit-schema.ts";
+import {
+  aimSchema,
+  entrySchema,
+  ruleSchema,
+  setSchema,
+  timesSchema,
+  wishesSchema,
+} from "#app/domain/gig/edit-schema.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { readJson } from "#app/models/stored-json.server.ts";
 
@@ -15,6 +22,8 @@ export type GigRow = {
   curfew: string | null;
   crew: Gig["crew"];
   times: unknown;
+  aim: unknown;
+  wishes: unknown;
   notes: string;
   sets: unknown;
   entries: unknown;
@@ -40,6 +49,8 @@ export function gigFromRow(row: GigRow): Gig {
     curfew: row.curfew,
     crew: row.crew,
     times: readJson(timesSchema, "gigs.times", row.times),
+    aim: readJson(aimSchema, "gigs.aim", row.aim),
+    wishes: readJson(wishesSchema, "gigs.wishes", row.wishes),
     notes: row.notes,
     sets: readJson(setsColumn, "gigs.sets", row.sets),
     entries: readJson(entriesColumn, "gigs.entries", row.entries),
@@ -58,6 +69,8 @@ export function gigToRow(gig: Gig) {
     curfew: gig.curfew,
     crew: gig.crew,
     times: JSON.stringify(gig.times),
+    aim: JSON.stringify(gig.aim),
+    wishes: JSON.stringify(gig.wishes),
     notes: gig.notes,
     sets: JSON.stringify(gig.sets),
     entries: JSON.stringify(gig.entries),

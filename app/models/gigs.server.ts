@@ -32,7 +32,7 @@ export async function listGigs(db: Knex, member: OfAct): Promise<GigSummary[]> {
     .whereNull("deleted_at")
     .orderBy("gigs.starts_at")
     .orderBy("id")
-    .select<Omit<GigRow, "times" | "rules">[]>(
+    .select<Omit<GigRow, "times" | "aim" | "wishes" | "rules">[]>(
       "id",
       "name",
       "venue",

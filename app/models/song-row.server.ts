@@ -1,6 +1,6 @@
 import { nanoid } from "nanoid";
 import { z } from "zod";
-import type { Song, SongNeck } from "#app/domain/repertoire/song.ts";
+import type { Energy, Priority, Song, SongNeck } from "#app/domain/repertoire/song.ts";
 import type { SongFields } from "#app/domain/repertoire/song-form.ts";
 import { readJson } from "#app/models/stored-json.server.ts";
 
@@ -15,6 +15,8 @@ export type SongRow = {
   seconds: number;
   key: string;
   tempo: number | null;
+  energy: Energy | null;
+  priority: Priority;
   notes: string;
   first_line: string;
   cover: number | null;
@@ -30,6 +32,8 @@ export const songColumns = [
   "seconds",
   "key",
   "tempo",
+  "energy",
+  "priority",
   "notes",
   "first_line",
   "cover",
@@ -56,6 +60,8 @@ export function songFromRow(row: SongRow): StoredSong {
     seconds: row.seconds,
     key: row.key,
     tempo: row.tempo,
+    energy: row.energy,
+    priority: row.priority,
     notes: row.notes,
     firstLine: row.first_line,
     cover: row.cover,
@@ -87,6 +93,8 @@ export function songToRow(fields: SongFields, present: readonly SongNeck[] = [])
     seconds: fields.seconds,
     key: fields.key,
     tempo: fields.tempo,
+    energy: fields.energy,
+    priority: fields.priority,
     notes: fields.notes,
     first_line: fields.firstLine,
     cover: fields.cover,

@@ -20,6 +20,8 @@ export function songFields(changes: Partial<SongFields> = {}): SongFields {
     seconds: 195,
     key: "G",
     tempo: null,
+    energy: null,
+    priority: 3,
     notes: "",
     firstLine: "",
     cover: null,

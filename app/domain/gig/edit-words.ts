@@ -82,6 +82,8 @@ export const gigWords: Readonly<Record<string, string>> & Readonly<Record<GigFie
   curfew: "the curfew",
   crew: "who changes guitars",
   times: "the times",
+  aim: "what suggestions keep low",
+  wishes: "the wishes",
   notes: "the notes",
 };
 

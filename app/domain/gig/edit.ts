@@ -1,7 +1,7 @@
 import type { Entry, Gig, GigSet, Rule } from "#app/domain/gig/gig.ts";
 import type { Action } from "#app/domain/permissions.ts";
 
-/** What of a gig itself can be changed. "times" writes all of them at once. */
+/** What of a gig itself can be changed. "times" and "wishes" write all of them at once. */
 export type GigField =
   | "name"
   | "venue"
@@ -11,6 +11,8 @@ export type GigField =
   | "curfew"
   | "crew"
   | "times"
+  | "aim"
+  | "wishes"
   | "notes";
 export type SetField = "name" | "interval" | "holdFirst" | "holdLast" | "rank";
 export type EntryField = "guitarId" | "neckId" | "pinned" | "cover" | "techNote";

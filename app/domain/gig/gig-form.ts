@@ -6,7 +6,7 @@ import { clockTime, instantOf, isZone, localTime } from "#app/domain/gig/local-t
 import { optionalText, optionalWhole, requiredText } from "#app/domain/repertoire/form-fields.ts";
 
 /** What a person writes of a gig. */
-export type GigFields = Omit<Gig, "id" | "revision" | "sets" | "entries" | "rules">;
+export type GigFields = Omit<Gig, "id" | "revision" | "aim" | "wishes" | "sets" | "entries" | "rules">;
 
 const limits = gigFieldLimits;
 const longestSlotMinutes = limits.longestSlotSeconds / 60;

@@ -1,3 +1,5 @@
+import type { Aim } from "#app/domain/planning/problem.ts";
+
 /** Seconds that each kind of work on a guitar takes, and the talk that covers a gap. See {@link defaultTimes}. */
 export type GigTimes = {
   string: number;
@@ -92,6 +94,21 @@ export type Rule =
   | { id: string; kind: "at"; entry: string; place: number }
   | { id: string; kind: "before" | "into" | "apart"; a: string; b: string };
 
+/** What suggestions keep low: one thing before all others, or the player's own weights. See `aims.ts`. */
+export type GigAim = { kind: "dead-air" | "strings" | "capos" | "guitars" } | { kind: "own"; weights: Aim };
+
+/**
+ * What every set of the gig should rather be like, and the seconds that each break of it counts as. `tuning-run`: no
+ * more than `most` songs in a row in one tuning. `slow-apart`: no two neighbours slower than `below` beats a minute.
+ * `key-apart`: no two neighbours in one key. `energy`: songs follow a curve of values 1 (calm) to 5 (full), which stand
+ * at even distances from the first song of a set to its last.
+ */
+export type GigWish =
+  | { kind: "tuning-run"; most: number; seconds: number }
+  | { kind: "slow-apart"; below: number; seconds: number }
+  | { kind: "key-apart"; seconds: number }
+  | { kind: "energy"; curve: number[]; seconds: number };
+
 /** A gig with its sets: the document that edits apply to. `revision` counts the batches applied so far. */
 export type Gig = {
   id: string;
@@ -108,6 +125,9 @@ export type Gig = {
   curfew: string | null;
   crew: Crew;
   times: GigTimes;
+  aim: GigAim;
+  /** At most one of each kind. */
+  wishes: GigWish[];
   notes: string;
   sets: GigSet[];
   entries: Entry[];

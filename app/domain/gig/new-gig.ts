@@ -4,7 +4,7 @@ import type { GigFields } from "#app/domain/gig/gig-form.ts";
 import { idOfRule } from "#app/domain/gig/order.ts";
 
 /**
- * A gig without songs, with as many sets as asked for and the same interval before each but the first.
+ * A gig without songs or wishes that is planned for least dead air, with as many sets as asked for and the same interval before each but the first.
  * @param interval seconds
  * @param newId makes an id that nothing else has
  * @example newGig(fields, { sets: 2, interval: 1200, newId }).sets.map((set) => set.interval) // [0, 1200]
@@ -18,6 +18,8 @@ export function newGig(
     ...fields,
     id: newId(),
     revision: 0,
+    aim: { kind: "dead-air" },
+    wishes: [],
     sets: ranks.map((rank, index) => newSet({ id: newId(), rank, index, interval })),
     entries: [],
     rules: [],
@@ -41,7 +43,7 @@ export function newSet(given: { id: string; rank: string; index: number; interva
 }
 
 /**
- * A gig as the start of the next: the same sets, songs, guitars, rules and times at another date, with ids of its own.
+ * A gig as the start of the next: the same sets, songs, guitars, rules, wishes and times at another date, with ids of its own.
  * Rules that sleep, because a song of theirs is gone or stands in another set, are left behind.
  * @param newId makes an id that nothing else has
  */

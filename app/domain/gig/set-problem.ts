@@ -1,3 +1,4 @@
+import { aimOf } from "#app/domain/gig/aims.ts";
 import { coversOf } from "#app/domain/gig/cover.ts";
 import { atDoors, presentPlay, standAfter } from "#app/domain/gig/default-choice.ts";
 import type { Entry, Gig } from "#app/domain/gig/gig.ts";
@@ -6,7 +7,6 @@ import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { rulesOf } from "#app/domain/gig/set-rules.ts";
 import { whyLeft } from "#app/domain/gig/why-left.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
-import { defaultAim } from "#app/domain/planning/aim.ts";
 import type { Play } from "#app/domain/planning/answer.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
@@ -89,7 +89,7 @@ export function setProblem(
       check: gig.times.check,
       cover: gig.times.cover,
     },
-    aim: defaultAim,
+    aim: aimOf(gig.aim),
     guitars: repertoire.guitars.map(({ id, strings, lowest, highest, keeps }) => ({
       id,
       strings,

@@ -12,7 +12,13 @@ import {
 } from "#app/domain/repertoire/form-fields.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 import { readDuration } from "#app/domain/repertoire/read-duration.ts";
-import type { Song, SongNeck } from "#app/domain/repertoire/song.ts";
+import {
+  type Energy,
+  type Priority,
+  type Song,
+  type SongNeck,
+  usualPriority,
+} from "#app/domain/repertoire/song.ts";
 import { readUsualCode } from "#app/domain/repertoire/usual-choices.ts";
 
 /** A way to play the song as a form gives it; `id` is null for one that is new. */
@@ -54,6 +60,14 @@ function lengthField() {
       context.addIssue({ code: "custom", message });
       return z.NEVER;
     });
+}
+
+/** One of five steps, as a list of choices sends it; null where nothing was chosen. */
+function stepField(message: string) {
+  return z
+    .enum(["", "1", "2", "3", "4", "5"], { error: message })
+    .optional()
+    .transform((text) => (text ? (Number(text) as Energy & Priority) : null));
 }
 
 function keyField(naming: Naming) {
@@ -151,6 +165,10 @@ export function songFormSchema(reader: SongFormReader) {
         tempo.least,
         tempo.most,
         `Write the tempo as whole beats a minute, ${tempo.least} to ${tempo.most}.`,
+      ),
+      energy: stepField("Choose how lively it is, from calm to full, or not said."),
+      priority: stepField("Choose how much you want it in the set.").transform(
+        (step) => step ?? usualPriority,
       ),
       notes: optionalText(songLimits.notes),
       firstLine: optionalText(songLimits.firstLine),

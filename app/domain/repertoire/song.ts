@@ -8,6 +8,15 @@ export type SongNeck = Neck & {
   penalty: number;
 };
 
+/** How lively a song is: 1 calm to 5 full. */
+export type Energy = 1 | 2 | 3 | 4 | 5;
+
+/** How much the player wants a song in the set: 5 never without it, 1 the first to drop. */
+export type Priority = 1 | 2 | 3 | 4 | 5;
+
+/** Of a song that nobody has said anything about. */
+export const usualPriority: Priority = 3;
+
 /** A song of an act's repertoire. `key` is as tonal names it ("G", "F#m", "Bb"), or "" where unknown. */
 export type Song = {
   id: string;
@@ -18,6 +27,9 @@ export type Song = {
   key: string;
   /** Beats a minute, or null. */
   tempo: number | null;
+  /** null where unknown. */
+  energy: Energy | null;
+  priority: Priority;
   notes: string;
   firstLine: string;
   /** Seconds of talk that introduces the song; null: the gig's. */

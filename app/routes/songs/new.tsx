@@ -48,6 +48,8 @@ export default function NewSong({ loaderData, actionData }: Route.ComponentProps
         defaultValue={{
           title: "",
           length: "",
+          energy: "",
+          priority: "",
           ways: [emptyWay(usualChoices(guitars))],
         }}
         lastResult={actionData?.result}

@@ -23,6 +23,8 @@ function song(title: string, changes: Partial<Song> & { open?: number[]; fret?: 
     seconds: 200,
     key: "",
     tempo: null,
+    energy: null,
+    priority: 3,
     notes: "",
     firstLine: "",
     cover: null,

@@ -18,6 +18,8 @@ describe("a pasted list as the library keeps it", () => {
       seconds: 195,
       key: "",
       tempo: null,
+      energy: null,
+      priority: 3,
       notes: "",
       firstLine: "",
       cover: null,

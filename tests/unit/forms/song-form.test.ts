@@ -38,11 +38,18 @@ describe("a song as it is typed", () => {
       seconds: 195,
       key: "",
       tempo: null,
+      energy: null,
+      priority: 3,
       notes: "",
       firstLine: "",
       cover: null,
       necks: [{ id: null, open: [38, 45, 50, 55, 59, 64], capos: [], guitars: null, penalty: 0 }],
     } satisfies SongFields);
+  });
+
+  test("how lively it is and how much it is wanted come as steps of five", () => {
+    const submission = submit({ energy: "5", priority: "1" });
+    expect(submission.status === "success" && submission.value).toMatchObject({ energy: 5, priority: 1 });
   });
 
   // The tuning, the capo and what they are read as: ../shared/facts.md §10 (common practice, no source).
@@ -74,6 +81,9 @@ describe("a song as it is typed", () => {
     ["tempo", "19", "Write the tempo as whole beats a minute, 20 to 400."],
     ["tempo", "401", "Write the tempo as whole beats a minute, 20 to 400."],
     ["tempo", "9.5", "Write the tempo as whole beats a minute, 20 to 400."],
+    ["energy", "6", "Choose how lively it is, from calm to full, or not said."],
+    ["energy", "2.5", "Choose how lively it is, from calm to full, or not said."],
+    ["priority", "0", "Choose how much you want it in the set."],
     ["cover", "1801", "Write whole seconds of talk, 0 to 1800."],
     ["cover", "-1", "Write whole seconds of talk, 0 to 1800."],
     [
@@ -197,7 +207,8 @@ describe("a kept song in its form", () => {
         fc.constantFrom(...keys),
         fc.integer({ min: 1, max: songLimits.longestSeconds }),
         fc.constantFrom(...namings),
-        (way, key, seconds, naming) => {
+        fc.constantFrom(null, 1 as const, 5 as const),
+        (way, key, seconds, naming, energy) => {
           const song = {
             id: "s1",
             title: "Low Meadow",
@@ -205,6 +216,8 @@ describe("a kept song in its form", () => {
             seconds,
             key,
             tempo: 96,
+            energy,
+            priority: 4 as const,
             notes: "",
             firstLine: "",
             cover: 12,

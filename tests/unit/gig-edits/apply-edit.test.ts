@@ -22,6 +22,14 @@ describe("applyEdit", () => {
     expect(inverse).toEqual([{ kind: "gig.set", field: "venue", value: "The Slipway" }]);
   });
 
+  it("writes all wishes at once and takes them back at once", () => {
+    const value: Gig["wishes"] = [{ kind: "energy", curve: [2, 5], seconds: 4 }];
+    const { gig: next, inverse } = apply(gig, { kind: "gig.set", field: "wishes", value });
+    expect(next.wishes).toEqual(value);
+    expect(inverse).toEqual([{ kind: "gig.set", field: "wishes", value: [] }]);
+    expect(actionFor({ kind: "gig.set", field: "wishes", value })).toBe("plan");
+  });
+
   it("moves a song to another set as one value", () => {
     const { gig: next, inverse } = apply(gig, {
       kind: "entry.place",

@@ -28,6 +28,18 @@ describe("an edit over the wire", () => {
     ["a curfew at midnight", { kind: "gig.set", field: "curfew", value: "00:00" }],
     ["a zone with three parts", { kind: "gig.set", field: "zone", value: "America/Argentina/Salta" }],
     ["times", { kind: "gig.set", field: "times", value: { ...defaultTimes.tech, encoreCover: 1800 } }],
+    [
+      "an aim by own weights",
+      {
+        kind: "gig.set",
+        field: "aim",
+        value: {
+          kind: "own",
+          weights: { exposed: 2.5, seconds: 0, strings: 1, semitones: 0, capoActions: 1, swaps: 1 },
+        },
+      },
+    ],
+    ["no wishes", { kind: "gig.set", field: "wishes", value: [] }],
     ["an empty venue", { kind: "gig.set", field: "venue", value: "" }],
     [
       "a rank beyond the first 62",
@@ -57,6 +69,35 @@ describe("an edit over the wire", () => {
       gigSet("times", { ...defaultTimes.alone, swap: -1 }),
       "value.swap",
       /0 to 600/,
+    ],
+    ["an aim there is not", gigSet("aim", { kind: "fun" }), "value.kind", /dead-air, strings, capos/],
+    ["own weights without any", gigSet("aim", { kind: "own" }), "value.weights", /object/],
+    [
+      "a curve that leaves 1 to 5",
+      gigSet("wishes", [{ kind: "energy", curve: [3, 5.5], seconds: 4 }]),
+      "value.0.curve.1",
+      /1 to 5/,
+    ],
+    [
+      "a curve of nothing",
+      gigSet("wishes", [{ kind: "energy", curve: [], seconds: 4 }]),
+      "value.0.curve",
+      />=1/,
+    ],
+    [
+      "a run of none",
+      gigSet("wishes", [{ kind: "tuning-run", most: 0, seconds: 4 }]),
+      "value.0.most",
+      /1 to 20/,
+    ],
+    [
+      "one wish twice",
+      gigSet("wishes", [
+        { kind: "key-apart", seconds: 4 },
+        { kind: "key-apart", seconds: 5 },
+      ]),
+      "value",
+      /one wish of each kind/,
     ],
     ["a field there is not", gigSet("revision", 3), "field", /no such field/],
     ["an entry's rank by itself", entrySet("rank", "a0"), "field", /no such field/],

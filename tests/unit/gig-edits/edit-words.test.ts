@@ -14,6 +14,8 @@ const ropewalk: Song = {
   seconds: 195,
   key: "E",
   tempo: null,
+  energy: null,
+  priority: 3,
   notes: "",
   firstLine: "",
   cover: null,

@@ -1,7 +1,15 @@
 import fc from "fast-check";
 import type { Edit, LoggedBatch } from "#app/domain/gig/edit.ts";
-import { defaultTimes, type Entry, type Gig, type Rule } from "#app/domain/gig/gig.ts";
+import {
+  defaultTimes,
+  type Entry,
+  type Gig,
+  type GigAim,
+  type GigWish,
+  type Rule,
+} from "#app/domain/gig/gig.ts";
 import { idOfRule } from "#app/domain/gig/order.ts";
+import { defaultAim } from "#app/domain/planning/aim.ts";
 
 export function entry(id: string, given: Partial<Entry> = {}): Entry {
   return {
@@ -32,6 +40,8 @@ export function sampleGig(given: Partial<Gig> = {}): Gig {
     curfew: null,
     crew: "alone",
     times: defaultTimes.alone,
+    aim: { kind: "dead-air" },
+    wishes: [],
     notes: "",
     sets: [
       { id: "s1", name: "Set 1", rank: "a0", interval: 0, holdFirst: true, holdLast: true },
@@ -91,6 +101,13 @@ const ranks = fc.constantFrom("Zz", "a0", "a0V", "a1", "a1V", "a2", "a3");
 const sections = fc.constantFrom(0 as const, 1 as const);
 const guitars = fc.constantFrom(null, "alder", "birch");
 
+const someWishes: GigWish[] = [
+  { kind: "tuning-run", most: 3, seconds: 20 },
+  { kind: "slow-apart", below: 80, seconds: 30 },
+  { kind: "key-apart", seconds: 10 },
+  { kind: "energy", curve: [3, 2, 4.5, 5], seconds: 4 },
+];
+
 const rule: fc.Arbitrary<Rule> = fc
   .tuple(
     fc.constantFrom("at", "before", "into", "apart"),
@@ -109,6 +126,10 @@ export const anyEdit: fc.Arbitrary<Edit> = fc.oneof(
   fc
     .constantFrom(defaultTimes.alone, defaultTimes.tech)
     .map((value): Edit => ({ kind: "gig.set", field: "times", value })),
+  fc
+    .constantFrom<GigAim>({ kind: "dead-air" }, { kind: "strings" }, { kind: "own", weights: defaultAim })
+    .map((value): Edit => ({ kind: "gig.set", field: "aim", value })),
+  fc.subarray(someWishes).map((value): Edit => ({ kind: "gig.set", field: "wishes", value })),
   fc.tuple(setIds, ranks, fc.constantFrom("Set 3", "Late")).map(
     ([id, rank, name]): Edit => ({
       kind: "set.add",
