@@ -25,11 +25,12 @@ export function workerPool<Job, Result>(name: string, options: () => PoolOptions
   let pool: Piscina<Job, Result> | null = null;
 
   function open(): Piscina<Job, Result> {
+    const { maxQueue: _, ...threads } = options();
     const opened = new Piscina<Job, Result>({
       ...fileOf(name),
       minThreads: 0,
       idleTimeout: 30_000,
-      ...options(),
+      ...threads,
     });
     // A thread that breaks while it has no job: the next job gets another.
     opened.on("error", (error) => log.error({ err: error, worker: name }, "a worker thread broke"));
@@ -43,13 +44,13 @@ export function workerPool<Job, Result>(name: string, options: () => PoolOptions
      */
     async run(job: Job, signal?: AbortSignal): Promise<Result> {
       pool ??= open();
+      // Counted here: Piscina's own limit overlooks jobs that come with a signal.
+      if (pool.queueSize >= options().maxQueue)
+        throw new QueueFull("Too many are waiting. Try again in a few seconds.");
       try {
         return await pool.run(job, { signal });
       } catch (error) {
         signal?.throwIfAborted();
-        if (error instanceof Error && error.message === "Task queue is at limit") {
-          throw new QueueFull("Too many are waiting. Try again in a few seconds.");
-        }
         throw error;
       }
     },

@@ -48,6 +48,8 @@ export async function action({ request, context, url }: Route.ActionArgs) {
   }
 }
 
+/** A body that is too long is not read to its end, so nothing else can be sent on its connection. */
 function refused(problems: BadProblem[], status = 400): Response {
-  return Response.json({ problems }, { status });
+  const headers = status === 413 ? { Connection: "close" } : undefined;
+  return Response.json({ problems }, { status, headers });
 }
