@@ -1,3 +1,5 @@
+import { withApp } from "./bench-app.ts";
+import { dragBench } from "./drag-bench.ts";
 import { pageBench } from "./page-bench.ts";
 import { planBench } from "./plan-bench.ts";
 import { sheetBench } from "./sheet-bench.ts";
@@ -5,9 +7,13 @@ import { table } from "./timing.ts";
 
 /** `npm run bench`: figures with a ratio each, in one run on one machine. Every second column is a multiple of the table's × 1.00. */
 async function bench(): Promise<void> {
-  const { pages, drag } = await pageBench();
+  const { pages, drag, moves } = await withApp(async (url) => ({
+    ...(await pageBench(url)),
+    moves: await dragBench(url),
+  }));
   console.log(table("\nPages, from request to last byte", pages));
   console.log(table("\nRe-scoring while dragging", drag));
+  console.log(table("\nDragging a row, main thread, against a frame of 16.7 ms", moves));
   console.log(table("\nStage sheet as PDF", await sheetBench()));
   for (const { title, rows } of await planBench()) console.log(table(`\n${title}`, rows));
 }

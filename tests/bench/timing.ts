@@ -8,6 +8,12 @@ export function median(values: number[]): number {
   return sorted.length % 2 === 1 ? upper : (upper + (sorted[middle - 1] ?? 0)) / 2;
 }
 
+/** The value that a share of all values does not exceed. @example quantile([1, 2, 3, 4], 0.5) // 2 */
+export function quantile(values: readonly number[], share: number): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  return sorted[Math.max(0, Math.ceil(sorted.length * share) - 1)] ?? 0;
+}
+
 export function milliseconds(value: number): string {
   return `${value < 10 ? value.toFixed(2) : value.toFixed(0)} ms`;
 }

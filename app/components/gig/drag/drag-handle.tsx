@@ -1,39 +1,33 @@
-import { useDraggable } from "@dnd-kit/core";
-import { useCallback } from "react";
+import { memo } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
+import { useGrip } from "#app/components/gig/drag/grip.tsx";
 
-type DragHandleProps = { entryId: string; number: number; title: string };
+type DragHandleProps = {
+  entryId: string;
+  number: number;
+  title: string;
+  /** The row is on its way. */
+  dragged: boolean;
+};
 
-/**
- * A row's number, which the row is dragged by; plain for those who may not plan. It alone listens to the drag, so that
- * the rest of the row is not drawn again while one is going on.
- */
-export function DragHandle({ entryId, number, title }: DragHandleProps) {
+/** A row's number, which the row is dragged by; plain for those who may not plan. */
+export const DragHandle = memo(function DragHandle({ entryId, number, title, dragged }: DragHandleProps) {
   const { may } = usePageTools();
-  const { attributes, listeners, setNodeRef, setActivatorNodeRef } = useDraggable({
-    id: entryId,
-    disabled: !may.plan,
-    attributes: { roleDescription: "song that can be moved" },
-  });
-  const hold = useCallback(
-    (button: HTMLButtonElement | null) => {
-      setActivatorNodeRef(button);
-      setNodeRef(button?.closest<HTMLElement>("[data-entry]") ?? null);
-    },
-    [setActivatorNodeRef, setNodeRef],
-  );
+  const { press, instructionsId } = useGrip();
   if (!may.plan) return <span className="tabular font-semibold text-lg lg:text-xl">{number}</span>;
   return (
     <button
       type="button"
-      ref={hold}
-      {...attributes}
-      {...listeners}
+      onPointerDown={(event) => press(event, entryId)}
+      onKeyDown={(event) => press(event, entryId)}
       data-handle={entryId}
       aria-label={`${number}, move ${title}`}
+      aria-roledescription="song that can be moved"
+      aria-describedby={instructionsId}
+      aria-pressed={dragged || undefined}
       className="tabular flex h-full min-h-11 w-full cursor-grab touch-none items-center justify-center font-semibold text-lg hover:bg-grey-100 focus-visible:outline-offset-[-2px] active:cursor-grabbing lg:min-h-8 lg:text-xl"
     >
       {number}
     </button>
   );
-}
+});

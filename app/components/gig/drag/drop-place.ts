@@ -53,12 +53,6 @@ export function slotOf(boxes: readonly Box[], entryId: string): number {
   return boxes.findIndex((box) => box.kind === "entry" && box.entryId === entryId);
 }
 
-/** Top edge of the dragged row in a slot, for moving it there by keyboard. */
-export function slotTop(boxes: readonly Box[], entryId: string, slot: number, gap: number): number {
-  const height = heightOf(boxes, entryId);
-  return slotCentre(without(boxes, entryId), slot, height, gap) - height / 2;
-}
-
 /** How many slots there are: one below each of the other boxes. */
 export function slotCount(boxes: readonly Box[]): number {
   return boxes.length - 1;

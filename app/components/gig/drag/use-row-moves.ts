@@ -17,11 +17,11 @@ function focusHandle(list: HTMLElement | null, entryId: string): void {
 /** Dragging rows: the edit that a drop makes, and what a screen reader hears on the way. */
 export function useRowMoves(list: RefObject<HTMLElement | null>, latest: RefObject<Latest>) {
   const [said, setSaid] = useState("");
-  const words = ({ entryId, place }: Drag) => {
+  const words = ({ entryId, place }: Pick<Drag, "entryId" | "place">) => {
     const { gig, openEncores, titleOf } = latest.current;
     return placeWords(titleOf(entryId), place, partsOf(gig, openEncores), entryId, titleOf);
   };
-  const { drag, sensors, handlers } = useRowDrag({
+  const dragging = useRowDrag({
     list,
     onStart: (started) => setSaid(`Picked up. ${words(started)}`),
     onPlace: (placed) => setSaid(words(placed)),
@@ -39,5 +39,5 @@ export function useRowMoves(list: RefObject<HTMLElement | null>, latest: RefObje
       focusHandle(list.current, entryId);
     },
   });
-  return { drag, said, sensors, handlers };
+  return { ...dragging, said };
 }

@@ -19,7 +19,7 @@ export function SaveState({ status, pending }: SaveStateProps) {
   return (
     <span
       aria-hidden="true"
-      className={`block w-max max-w-[8.5rem] font-display font-medium leading-tight ${late ? "font-semibold underline underline-offset-4" : ""}`}
+      className={`block w-max min-w-12 max-w-[8.5rem] font-display font-medium leading-tight ${late ? "font-semibold underline underline-offset-4" : ""}`}
     >
       {saveWords(status, pending)}
     </span>

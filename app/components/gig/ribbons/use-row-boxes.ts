@@ -27,10 +27,13 @@ export function expectedBoxes(rows: readonly Row[], troubles: ReadonlyMap<string
   return { tops, heights, bottom: y };
 }
 
+/** A row's place in its item and the item's in the column: not where a slide shows it for a moment. */
 function measured(column: HTMLElement): RowBoxes {
-  const rows = [...column.querySelectorAll<HTMLElement>("[data-entry]")];
-  const tops = rows.map((row) => row.offsetTop);
-  const heights = rows.map((row) => row.offsetHeight);
+  const rows = [...column.querySelectorAll<HTMLElement>("[data-entry]")]
+    .map((row) => ({ top: (row.parentElement?.offsetTop ?? 0) + row.offsetTop, height: row.offsetHeight }))
+    .sort((a, b) => a.top - b.top);
+  const tops = rows.map((row) => row.top);
+  const heights = rows.map((row) => row.height);
   return { tops, heights, bottom: (tops.at(-1) ?? 0) + (heights.at(-1) ?? 0) };
 }
 

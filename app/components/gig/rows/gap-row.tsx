@@ -1,8 +1,10 @@
+import { memo } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { useIsPointed, usePointer } from "#app/components/gig/rows/gap-focus.tsx";
 import { GapStrokes } from "#app/components/gig/rows/gap-strokes.tsx";
 import { GapTokens } from "#app/components/gig/rows/gap-tokens.tsx";
 import { warningWords } from "#app/components/gig/rows/row-warnings.tsx";
+import { sameGap } from "#app/components/gig/rows/same-row.ts";
 import { titleOfRow } from "#app/components/gig/rows/song-row.tsx";
 import { Octagon } from "#app/components/ui/warning.tsx";
 import { gapSentence, gapTokens } from "#app/domain/gig/gap-words.ts";
@@ -15,7 +17,9 @@ const longDeadAir = 20;
  * What happens between two songs, in a line. Bold where the room has to wait; hover, focus or tap says it in words,
  * here and in the ribbon.
  */
-export function GapRow({ row, gap }: { row: Row; gap: Gap }) {
+export const GapRow = memo(GapRowOnce, (before, after) => sameGap(before.row, after.row));
+
+function GapRowOnce({ row, gap }: { row: Row; gap: Gap }) {
   const { naming, hand } = usePageTools();
   const sentence = [gapSentence(row, naming), ...row.warnings.map((warning) => warning.message)].join(" ");
   const tokens = gapTokens(row, naming);

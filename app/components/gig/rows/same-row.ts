@@ -30,6 +30,34 @@ export function sameRow(a: Row, b: Row): boolean {
   );
 }
 
+/** Whether all of a row but its number would be drawn the same. */
+export function sameBody(a: Row, b: Row): boolean {
+  return (
+    a === b ||
+    (a.entry === b.entry &&
+      a.song === b.song &&
+      a.guitar === b.guitar &&
+      a.neck === b.neck &&
+      (a.gap === null) === (b.gap === null) &&
+      sameValue(a.retuned, b.retuned) &&
+      sameValue(a.rules, b.rules) &&
+      (a.gap !== null || sameValue(a.warnings, b.warnings)))
+  );
+}
+
+/** Whether the line of the gap that leads into a row would be drawn the same. */
+export function sameGap(a: Row, b: Row): boolean {
+  return (
+    a === b ||
+    (a.entry === b.entry &&
+      a.song === b.song &&
+      a.guitar === b.guitar &&
+      a.neck === b.neck &&
+      sameValue(a.gap, b.gap) &&
+      sameValue(a.warnings, b.warnings))
+  );
+}
+
 /** Whether two lists of sentences are the same. */
 export function sameWords(a: readonly string[], b: readonly string[]): boolean {
   return a.length === b.length && a.every((words, index) => words === b[index]);

@@ -1,18 +1,20 @@
 import { Menu } from "@base-ui/react/menu";
 import { Popover } from "@base-ui/react/popover";
 import { Ellipsis, Pin } from "lucide-react";
-import type { ReactNode } from "react";
+import { memo, type ReactNode } from "react";
 import { CapoMark } from "#app/components/capo-mark.tsx";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { NeckCells } from "#app/components/gig/rows/neck-cells.tsx";
 import { chooserTriggerId, menuTriggerId } from "#app/components/gig/rows/row-menu.tsx";
 import { RowTags } from "#app/components/gig/rows/row-tags.tsx";
 import { RowTroubles, RowWarnings } from "#app/components/gig/rows/row-warnings.tsx";
+import { sameBody, sameWords } from "#app/components/gig/rows/same-row.ts";
 import { GuitarBadge } from "#app/components/guitar-badge.tsx";
-import type { GigSet } from "#app/domain/gig/gig.ts";
+import type { Entry, GigSet } from "#app/domain/gig/gig.ts";
 import type { Row } from "#app/domain/gig/plan.ts";
 import { nameKey, spokenKey } from "#app/domain/music/key.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
+import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 import { formatDuration } from "#app/domain/repertoire/read-duration.ts";
 
 /** Title of a row's song; an entry whose song is nowhere in the repertoire keeps its place under this name. */
@@ -52,7 +54,18 @@ export function SongRow({ number, ...body }: SongRowProps) {
 }
 
 /** All of a row but its number. */
-function RowBody({ row, set, first, last, troubles, plain = false }: RowBodyProps) {
+const RowBody = memo(
+  RowBodyOnce,
+  (before, after) =>
+    sameBody(before.row, after.row) &&
+    before.set === after.set &&
+    before.first === after.first &&
+    before.last === after.last &&
+    before.plain === after.plain &&
+    sameWords(before.troubles, after.troubles),
+);
+
+function RowBodyOnce({ row, set, first, last, troubles, plain = false }: RowBodyProps) {
   const { naming, may } = usePageTools();
   const { entry, song, neck } = row;
   const title = titleOfRow(row);
@@ -81,7 +94,12 @@ function RowBody({ row, set, first, last, troubles, plain = false }: RowBodyProp
         {plain || row.gap ? null : <RowWarnings entryId={entry.id} warnings={row.warnings} />}
       </div>
       <div className="flex justify-end pr-1 [grid-area:badge] lg:justify-start">
-        <ChooserButton row={row} title={title} plain={plain || !may.prepare} />
+        <ChooserButton
+          entry={entry}
+          guitar={row.guitar}
+          title={title}
+          plain={plain || !may.prepare || !song}
+        />
       </div>
       <div className="-ml-1 min-h-5 self-start pb-1.5 pl-3 [grid-area:cells] lg:ml-0 lg:min-w-36 lg:self-center lg:p-0">
         {shown ? (
@@ -133,9 +151,10 @@ function KeyAndLength({
   );
 }
 
-function ChooserButton({ row, title, plain }: { row: Row; title: string; plain: boolean }) {
+type ChooserButtonProps = { entry: Entry; guitar: Guitar | null; title: string; plain: boolean };
+
+const ChooserButton = memo(function ChooserButton({ entry, guitar, title, plain }: ChooserButtonProps) {
   const { chooser } = usePageTools();
-  const { entry, guitar } = row;
   const pinned = entry.pinned !== "none";
   const face = (
     <>
@@ -150,7 +169,7 @@ function ChooserButton({ row, title, plain }: { row: Row; title: string; plain: 
       {pinned ? <span className="sr-only">, pinned</span> : null}
     </>
   );
-  if (plain || !row.song) return <span className="inline-flex items-center gap-0.5">{face}</span>;
+  if (plain) return <span className="inline-flex items-center gap-0.5">{face}</span>;
   return (
     <Popover.Trigger
       id={chooserTriggerId(entry.id)}
@@ -162,9 +181,9 @@ function ChooserButton({ row, title, plain }: { row: Row; title: string; plain: 
       {face}
     </Popover.Trigger>
   );
-}
+});
 
-function MenuButton({ entryId, title }: { entryId: string; title: string }) {
+const MenuButton = memo(function MenuButton({ entryId, title }: { entryId: string; title: string }) {
   const { rowMenu } = usePageTools();
   return (
     <Menu.Trigger
@@ -177,4 +196,4 @@ function MenuButton({ entryId, title }: { entryId: string; title: string }) {
       <Ellipsis size={18} aria-hidden="true" />
     </Menu.Trigger>
   );
-}
+});

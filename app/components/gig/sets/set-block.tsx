@@ -1,5 +1,6 @@
-import { useId, useMemo, useRef } from "react";
+import { memo, useId, useMemo, useRef } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
+import type { Drag } from "#app/components/gig/drag/use-row-drag.ts";
 import { RibbonColumn } from "#app/components/gig/ribbons/ribbon-column.tsx";
 import { useRowBoxes } from "#app/components/gig/ribbons/use-row-boxes.ts";
 import { rowTroubles } from "#app/components/gig/rows/row-troubles.ts";
@@ -16,19 +17,21 @@ type SetBlockProps = {
   gig: Gig;
   plan: SetPlan;
   first: boolean;
-  /** The sections of this set. */
-  parts: Part[];
+  /** The sections of all sets. */
+  allParts: readonly Part[];
   repertoire: Repertoire;
   standing: ReadonlySet<string>;
-  draggedId: string | null;
+  drag: Drag | null;
+  keptPlaces: ReadonlyMap<string, number>;
   onAdd: (songs: Song[], part: Pick<Part, "setId" | "section">) => void;
 };
 
 /** One set: its songs with their gaps, and beside them a ribbon for each guitar. */
-export function SetBlock(props: SetBlockProps) {
-  const { gig, plan, first, parts, repertoire, standing, draggedId, onAdd } = props;
+export const SetBlock = memo(function SetBlock(props: SetBlockProps) {
+  const { gig, plan, first, allParts, repertoire, standing, drag, keptPlaces, onAdd } = props;
   const { may } = usePageTools();
   const headingId = useId();
+  const parts = allParts.filter((part) => part.setId === plan.set.id);
   const column = useRef<HTMLDivElement>(null);
   const troubles = useMemo(() => rowTroubles(plan, repertoire.guitars.length), [plan, repertoire.guitars]);
   const boxes = useRowBoxes(column, plan.rows, troubles);
@@ -55,7 +58,8 @@ export function SetBlock(props: SetBlockProps) {
               firstId={firstId}
               lastId={lastId}
               troubles={troubles}
-              draggedId={draggedId}
+              drag={drag}
+              keptPlaces={keptPlaces}
             />
           ))}
           {may.plan ? (
@@ -77,4 +81,4 @@ export function SetBlock(props: SetBlockProps) {
       </div>
     </section>
   );
-}
+});

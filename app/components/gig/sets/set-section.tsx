@@ -1,4 +1,5 @@
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
+import type { Drag } from "#app/components/gig/drag/use-row-drag.ts";
 import { SongItem } from "#app/components/gig/rows/song-item.tsx";
 import type { Part } from "#app/components/gig/sets/moves.ts";
 import { partName } from "#app/components/gig/sets/moves.ts";
@@ -15,14 +16,26 @@ type SetSectionProps = {
   firstId: string | undefined;
   lastId: string | undefined;
   troubles: ReadonlyMap<string, string[]>;
-  /** The entry that is being dragged. */
-  draggedId: string | null;
+  /** The row that is on its way. */
+  drag: Drag | null;
+  /** Where each entry of the gig stands as it is kept. */
+  keptPlaces: ReadonlyMap<string, number>;
 };
 
-/** The songs of one section in their order, with their gaps. */
+function sortedBy(places: ReadonlyMap<string, number>, rows: readonly Row[]): readonly Row[] {
+  const place = (row: Row) => places.get(row.entry.id) ?? 0;
+  return rows.toSorted((a, b) => place(a) - place(b));
+}
+
+/**
+ * The songs of one section in their order, with their gaps. While a row is dragged they keep their order in the document
+ * and only look moved: taking a row out and putting it in elsewhere would lay it out from nothing, and take the focus
+ * from the number that is held.
+ */
 export function SetSection(props: SetSectionProps) {
-  const { part, set, rows, firstId, lastId, troubles, draggedId } = props;
+  const { part, set, rows, firstId, lastId, troubles, drag, keptPlaces } = props;
   const { may } = usePageTools();
+  const inKeptOrder = drag ? sortedBy(keptPlaces, rows) : rows;
   return (
     <>
       {part.section === 1 ? (
@@ -37,16 +50,17 @@ export function SetSection(props: SetSectionProps) {
       ) : null}
       {rows.length > 0 ? (
         // biome-ignore lint/a11y/noRedundantRoles: Safari drops the list where its marks are styled away
-        <ol role="list" aria-label={partName(part)} className="pt-px">
-          {rows.map((row) => (
+        <ol role="list" aria-label={partName(part)} className="flex flex-col pt-px">
+          {inKeptOrder.map((row) => (
             <SongItem
               key={row.entry.id}
               row={row}
+              order={drag ? row.number : null}
               set={set}
               first={row.entry.id === firstId}
               last={row.entry.id === lastId}
               troubles={troubles.get(row.entry.id) ?? none}
-              dragged={row.entry.id === draggedId}
+              dragged={row.entry.id === drag?.entryId ? (drag.lifted ? "pointer" : "keys") : null}
             />
           ))}
         </ol>
