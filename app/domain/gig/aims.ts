@@ -3,7 +3,7 @@ import { defaultAim } from "#app/domain/planning/aim.ts";
 import type { Aim } from "#app/domain/planning/problem.ts";
 
 /** One count ahead of everything: less of it is worth more dead air than a set can have. */
-const ahead = 10_000;
+const ahead = 100_000;
 
 /** What decides between orders that are level in the count ahead: dead air first, then work. */
 const level: Aim = { exposed: 10, seconds: 1, strings: 1, semitones: 0, capoActions: 1, swaps: 1 };

@@ -18,7 +18,7 @@ export type LadderStep =
   | { kind: "looking"; rung: Rung; best: Standing | null }
   | { kind: "refused"; rung: Rung; answer: InfeasibleAnswer };
 
-const within = 1e-6;
+const within = 1e-9;
 
 /** With a bound that may be better than the one it was found with. */
 function standing<Known extends Standing>(answer: Known, bound: number): Known {

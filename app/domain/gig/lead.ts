@@ -1,9 +1,10 @@
+import type { GigAim } from "#app/domain/gig/gig.ts";
 import type { Neck } from "#app/domain/music/neck.ts";
 import type { Totals } from "#app/domain/planning/answer.ts";
 import type { Aim, Problem } from "#app/domain/planning/problem.ts";
 
 /** What a player looks at first, by the aim of the gig. `own`: the total by the player's own weights. */
-export type Lead = "dead-air" | "strings" | "capos" | "guitars" | "own";
+export type Lead = GigAim["kind"];
 
 /** How much of what leads there is in an order. */
 type Measured = { total: number; totals: Totals };

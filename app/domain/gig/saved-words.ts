@@ -31,7 +31,8 @@ export function savedWords(lead: Lead, now: Measured, then: Measured): string[] 
 }
 
 /**
- * What an order needs besides what leads, for the small print of a suggestion.
+ * What an order needs besides what leads, for the small print of a suggestion; broken wishes too, as the seconds they
+ * count as.
  * @example workWords("dead-air", answer) // "21 strings, 1 capo and 5 guitar changes"
  * @example workWords("capos", answer) // "233 s of dead air, 21 strings, 5 guitar changes"
  */
@@ -45,6 +46,7 @@ export function workWords(lead: Lead, measured: Measured): string {
     lead === "dead-air" ? "" : `${count("dead-air")} s of dead air`,
     lead === "strings" ? "" : `${count("strings")} ${names.strings[count("strings") === 1 ? 0 : 1]}`,
     `${changes.join(" and ")} ${last === 1 ? "change" : "changes"}`,
+    measured.totals.wishes ? `wishes ${Math.round(measured.totals.wishes)} s` : "",
   ]
     .filter(Boolean)
     .join(", ");

@@ -85,11 +85,11 @@ function rangeLifts(problem: Problem, guitars: ReadonlyMap<string, Guitar>, nami
   });
 }
 
-/** "Only 1 capo on strings 5-1", "Only 2 full capos". */
+/** "Only 1 capo over strings 5-1", "Only 2 full capos". */
 function capoName(count: number, strings: readonly number[], full: boolean): string {
   const capos = count === 1 ? "capo" : "capos";
   const number = count === 0 ? "No" : `Only ${count}`;
-  return full ? `${number} full ${capos}` : `${number} ${capos} on strings ${stringsInWords(strings)}`;
+  return full ? `${number} full ${capos}` : `${number} ${capos} over strings ${stringsInWords(strings)}`;
 }
 
 /** Each kind of capo of which there may be too few. One song by itself, or as many capos as guitars, never lacks one. */

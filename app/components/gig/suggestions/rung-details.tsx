@@ -9,6 +9,7 @@ import type { Gig } from "#app/domain/gig/gig.ts";
 import { planGig, type SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { suggestionEdits } from "#app/domain/gig/suggest.ts";
+import { wishBreaches } from "#app/domain/gig/wish-words.ts";
 import type { Totals } from "#app/domain/planning/answer.ts";
 
 type RungDetailsProps = { gig: Gig; plan: SetPlan; repertoire: Repertoire; described: Described };
@@ -38,6 +39,28 @@ export function RungDetails({ gig, plan, repertoire, described }: RungDetailsPro
       ) : null}
       {after ? <RibbonThumbnails before={plan} after={after} guitars={repertoire.guitars} /> : null}
       <Changes changes={[...said.moves, ...said.changes]} />
+      {after ? <BrokenWishes gig={gig} after={after} /> : null}
+    </div>
+  );
+}
+
+/** The wishes that this order breaks, with the song that each is told about. */
+function BrokenWishes({ gig, after }: { gig: Gig; after: SetPlan }) {
+  const { naming } = usePageTools();
+  const played = after.rows.filter((row) => row.left === null);
+  const breaches = wishBreaches(after.evaluation.broken ?? [], gig.wishes, played, naming);
+  if (breaches.length === 0) return null;
+  const title = (id: string) => played.find((row) => row.entry.id === id)?.song?.title ?? "A song";
+  return (
+    <div className="text-grey-800 text-sm leading-snug">
+      <p>Wishes broken</p>
+      <ul className="flex flex-col gap-0.5">
+        {breaches.map(({ entryId, message }) => (
+          <li key={`${entryId} ${message}`} className="pl-3 -indent-3">
+            {title(entryId)}: {message.replace(/^./, (letter) => letter.toLowerCase())}
+          </li>
+        ))}
+      </ul>
     </div>
   );
 }

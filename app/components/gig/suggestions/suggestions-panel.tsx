@@ -1,4 +1,5 @@
 import { memo } from "react";
+import { AimChooser } from "#app/components/gig/suggestions/aim-chooser.tsx";
 import { SetSuggestionsBlock } from "#app/components/gig/suggestions/set-suggestions.tsx";
 import type { Suggestions } from "#app/components/gig/suggestions/use-suggestions.ts";
 import { Dialog } from "#app/components/ui/dialog.tsx";
@@ -19,7 +20,8 @@ export const SuggestionsPanel = memo(function SuggestionsPanel(props: Suggestion
   const { gig, plan, repertoire, suggestions } = props;
   const { sets, begun, failed } = suggestions;
   return (
-    <div className="flex flex-col gap-5">
+    <div className="flex flex-col gap-4">
+      <AimChooser aim={gig.aim} />
       {failed ? <Warning>{failed}</Warning> : null}
       <noscript>
         <p className="text-grey-600">
@@ -39,7 +41,7 @@ export const SuggestionsPanel = memo(function SuggestionsPanel(props: Suggestion
             gig={gig}
             plan={setPlan}
             alone={plan.sets.length === 1}
-            lead="dead-air"
+            lead={gig.aim.kind}
             repertoire={repertoire}
             rungs={found.rungs}
             begun={begun && failed === null}
