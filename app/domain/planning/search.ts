@@ -8,7 +8,6 @@ import { lastSectionBound } from "#app/domain/planning/bounds/last-section-bound
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
-import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace, onlyOrder, planInOrder, spaceInOrder } from "#app/domain/planning/fixed-order.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
 import { modelOf } from "#app/domain/planning/model.ts";
@@ -111,7 +110,7 @@ function dearSpace(run: Run): SetSpace {
         run.looks += (rounds * sweepSteps(model, run.problem.maxMoved!)) / STEPS_PER_LOOK;
       }
     }
-    return throughChains(model, rules, layout, greatest(...bounds));
+    return greatest(...bounds);
   });
   const closer = overLooseCapos(run.model, (model, layout) => partitionBound(model, rules, layout, "close"));
   return setSpace(run.model, rules, bound, closer);

@@ -5,7 +5,6 @@ import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts"
 import { lastSectionBound } from "#app/domain/planning/bounds/last-section-bound.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
-import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import { BestFirst } from "#app/domain/planning/search/best-first.ts";
@@ -71,8 +70,7 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
       if (!parts) continue;
       const { model, rules } = parts;
       const space = setSpace(model, rules, (layout) => {
-        const joint = jointBound(model, rules, layout) ?? (() => 0);
-        return throughChains(model, rules, layout, joint);
+        return jointBound(model, rules, layout) ?? (() => 0);
       });
       prefixes += expectBelow(space, `seed ${seed}`);
     }
@@ -169,7 +167,7 @@ test("sets of 9 and 10 songs have the same optimum without a bound and with all 
         bounds.push(movesLeft(rules, layout, problem.maxMoved!));
         bounds.push(keptOrderBound(model, layout, { target, rounds: 15 }));
       }
-      return throughChains(model, rules, layout, greatest(...bounds));
+      return greatest(...bounds);
     });
     const bounded = new BestFirst(space, 400_000);
     bounded.run(2_000_000);

@@ -6,7 +6,6 @@ import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
-import { throughChains } from "#app/domain/planning/bounds/through-chains.ts";
 import { check } from "#app/domain/planning/check.ts";
 import { evaluate } from "#app/domain/planning/evaluate.ts";
 import { fixedOrderSpace } from "#app/domain/planning/fixed-order.ts";
@@ -174,7 +173,7 @@ test("along every prefix of a plan proven optimal, the bound is at most what rem
       const joint = jointBound(plain, rules, layout);
       if (joint) bounds.push(joint);
       if (layout.limited) bounds.push(keptOrderBound(plain, layout, { target: 0, rounds: 20 }));
-      return throughChains(plain, rules, layout, greatest(...bounds));
+      return greatest(...bounds);
     });
     prefixes += expectBelow(setSpace(model, rules, all), `seed ${seed}`);
     if (problem.maxMoved === 0)

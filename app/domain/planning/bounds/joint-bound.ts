@@ -159,8 +159,7 @@ function fill(joint: Joint, units: Unit[], first: Int32Array, passing: Target[])
  * Why it bounds: from a half-built set on, let each open need be represented by its song of the greatest cover, or any
  * other if that has been played, and each chain that is not begun by all of its songs. The rest of the plan is a sequence
  * of these and of passing songs, and each step costs what it costs here, or more: the same necks, the same guitar in hand,
- * at most that cover (and a tech never late). The rest of a chain that is begun is left out, which only lowers the sum;
- * `throughChains` looks to its end.
+ * at most that cover (and a tech never late). The rest of a chain that is begun is left out, which only lowers the sum.
  *
  * @returns null where there are too many joint states for the tables to count enough needs
  */
