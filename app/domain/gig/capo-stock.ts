@@ -1,5 +1,8 @@
-import { isFullCapo, stringsInWords } from "#app/domain/music/capo.ts";
+import { allStrings, isFullCapo, stringsInWords } from "#app/domain/music/capo.ts";
 import type { Capo, Neck } from "#app/domain/music/neck.ts";
+import type { Work } from "#app/domain/planning/answer.ts";
+import { kindOf as planningKind, withoutCapo } from "#app/domain/planning/capo-kinds.ts";
+import type { CapoKind } from "#app/domain/planning/problem.ts";
 import type { ActCapo, Guitar } from "#app/domain/repertoire/guitar.ts";
 
 /** More capos of a kind on necks at once than the act owns. */
@@ -17,6 +20,7 @@ type Placed = {
   song: { title: string } | null;
   guitar: Guitar | null;
   neck: Neck | null;
+  gap: { work: readonly Work[] } | null;
 };
 
 function kindOf(capo: Capo, strings: number): string {
@@ -28,6 +32,46 @@ function owned(kind: string, capos: readonly ActCapo[]): number {
     const own = capo.strings === null ? "full" : capo.strings.toSorted((a, b) => a - b).join();
     return own === kind ? sum + capo.count : sum;
   }, 0);
+}
+
+/**
+ * The act's capos as the planner counts them: one kind for each set of strings. A full capo counts for the full width of
+ * each of the guitars. Undefined where the act has listed none: then there are as many as are wanted.
+ * @example capoKinds([{ id: "c", name: "Steel", strings: null, count: 2 }], [sixString])
+ *   // [{ strings: [1, 2, 3, 4, 5, 6], count: 2 }]
+ */
+export function capoKinds(
+  capos: readonly ActCapo[],
+  guitars: readonly Pick<Guitar, "strings">[],
+): CapoKind[] | undefined {
+  if (capos.length === 0) return undefined;
+  const widths = [...new Set(guitars.map((guitar) => guitar.strings))];
+  const kinds = new Map<string, CapoKind>();
+  for (const capo of capos) {
+    const covers = capo.strings === null ? widths.map(allStrings) : [capo.strings];
+    for (const given of covers) {
+      const strings = given.toSorted((a, b) => a - b);
+      const known = kinds.get(strings.join());
+      kinds.set(strings.join(), { strings, count: (known?.count ?? 0) + capo.count });
+    }
+  }
+  return [...kinds.values()];
+}
+
+/**
+ * What kind of capo a way to play a song needs more of than there are, in words; null where it can be had.
+ * @example lackingCapo(kinds, twoFullCapos) // "Needs 2 full capos at once; the act has 1."
+ */
+export function lackingCapo(capos: readonly CapoKind[], neck: Neck): string | null {
+  const strings = neck.open.length;
+  for (const capo of neck.capos) {
+    const kind = capo.strings.toSorted((a, b) => a - b).join();
+    const listed = capos.find((one) => one.strings.join() === kind);
+    const needed = neck.capos.filter((one) => one.strings.toSorted((a, b) => a - b).join() === kind).length;
+    if (listed && needed > listed.count)
+      return `Needs ${needed} ${words(kindOf(capo, strings), needed)} at once; the act has ${listed.count}. List another under Guitars, or play it another way.`;
+  }
+  return null;
 }
 
 function words(kind: string, count: number): string {
@@ -43,7 +87,8 @@ function shortageWords(title: string, kind: string, count: number, have: number)
 
 /**
  * Where a set first needs more capos of a kind than the act owns. A capo stays on its guitar until that guitar's next
- * song wants it otherwise. An act that has listed no capos at all is not warned: see {@link unlistedCapos}.
+ * song wants it otherwise, or another guitar takes it. The planner knows of kinds that are listed; what is left to warn
+ * about are kinds that are not, and full capos that guitars of another width carry. An act that has listed no capos at all is not warned: see {@link unlistedCapos}.
  * @example capoShortages(rows, before, [{ id: "c", name: "Steel", strings: null, count: 1 }])[0]?.needed // 2
  */
 export function capoShortages(
@@ -54,8 +99,13 @@ export function capoShortages(
   if (capos.length === 0) return [];
   const now = new Map(before.map(({ guitar, neck }) => [guitar.id, { guitar, neck }]));
   const found = new Map<string, CapoShortage>();
-  for (const { entry, song, guitar, neck } of rows) {
+  for (const { entry, song, guitar, neck, gap } of rows) {
     if (!guitar || !neck) continue;
+    for (const capo of gap?.work[0]?.capos ?? []) {
+      const giver = capo.action === "on" ? now.get(capo.takenFrom ?? "") : undefined;
+      if (giver)
+        now.set(giver.guitar.id, { ...giver, neck: withoutCapo(giver.neck, planningKind(capo.strings)) });
+    }
     now.set(guitar.id, { guitar, neck });
     const needed = new Map<string, number>();
     for (const one of now.values()) {

@@ -1,9 +1,11 @@
+import { aimNames } from "#app/domain/gig/aims.ts";
 import type { Clash } from "#app/domain/gig/conflict.ts";
 import type { Edit, GigField, LoggedBatch } from "#app/domain/gig/edit.ts";
-import type { Entry, Gig, GigTimes, Pinned, Rule } from "#app/domain/gig/gig.ts";
+import type { Entry, Gig, GigAim, GigTimes, GigWish, Pinned, Rule } from "#app/domain/gig/gig.ts";
 import { timeKeys, timeNames } from "#app/domain/gig/gig-form.ts";
 import { dateWords, localTime } from "#app/domain/gig/local-time.ts";
 import { entriesOf } from "#app/domain/gig/order.ts";
+import { wishWords } from "#app/domain/gig/wish-words.ts";
 
 /** What ids of an act's repertoire are called. */
 export type RepertoireNames = {
@@ -156,6 +158,8 @@ function gigValueWords(field: string, value: unknown, other: string | null, gig:
   if (field === "slot") return value === null ? "no slot" : `${Math.round(Number(value) / 60)} min`;
   if (field === "curfew") return value === null ? "no curfew" : String(value);
   if (field === "crew") return value === "tech" ? "with a tech" : "no tech";
+  if (field === "aim") return aimNames[(value as GigAim).kind].toLowerCase();
+  if (field === "wishes") return (value as GigWish[]).map(wishWords).join("; ") || "no wishes";
   if (field === "times") {
     const times = value as GigTimes;
     const against = other === null ? null : (JSON.parse(other) as GigTimes);

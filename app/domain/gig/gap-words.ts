@@ -78,6 +78,10 @@ function inOrder(strings: readonly StringWork[], capos: readonly CapoWork[]) {
  */
 export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
   const tokens: GapToken[] = [];
+  for (const giver of row.gap?.givers ?? []) {
+    const what = giver.capos === 1 ? "the capo" : `${giver.capos} capos`;
+    tokens.push({ kind: "capo", words: `take ${what} off ${giver.guitar.shortName}` });
+  }
   if (row.gap?.swap && row.guitar) tokens.push({ kind: "swap", guitar: row.guitar });
   const change = changeOf(row);
   if (!change || !row.guitar) return tokens;
@@ -97,9 +101,13 @@ export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
   }
   for (const capo of on)
     tokens.push({ kind: "capo", words: capoWord(capo, count, hadSeveral(row, change.capos)) });
-  if (change.atSide)
-    tokens.push({ kind: "tech", words: change.onStage ? "late at the side" : "at the side" });
+  if (change.atSide) tokens.push({ kind: "tech", words: sideToken(change, row.gap?.late ?? false) });
   return tokens;
+}
+
+function sideToken({ onStage }: { onStage: boolean }, late: boolean): string {
+  if (late) return "late at the side";
+  return onStage ? "the rest at the side" : "at the side";
 }
 
 /** What the tech does, from when on, and whether it is ready in time. */
@@ -134,11 +142,11 @@ function timeWords(gap: Gap): string {
  *   // "Capo off. String 6 down 2, to D. About 14 s, 2 s longer than the talk covers."
  */
 export function gapSentence(row: GapRow, naming: Naming): string {
-  const { gap, guitar } = row;
+  const { gap } = row;
   if (!gap) return "";
   const parts: string[] = [];
-  if (gap.swap && guitar) parts.push(`Change to ${guitar.shortName}`);
   for (const token of gapTokens(row, naming)) {
+    if (token.kind === "swap") parts.push(`Change to ${token.guitar.shortName}`);
     if (token.kind === "capo") parts.push(upperFirst(token.words));
     if (token.kind === "string")
       parts.push(`String ${token.string} ${token.direction} ${token.semitones}, to ${token.to}`);
@@ -164,22 +172,41 @@ function liftedFirst(strings: readonly StringWork[], capos: readonly CapoWork[])
   });
 }
 
+/** What of a change the player does. Of a guitar that the tech hands over in time, only capos that came with the player. */
+function onStageChange(row: GapRow): { strings: StringWork[]; capos: CapoWork[] } | null {
+  const change = changeOf(row);
+  if (!change?.onStage) return null;
+  if (!change.atSide || row.gap?.late) return change;
+  const brought = new Set(row.gap?.givers.flatMap((one) => (one.justPlayed ? [one.guitar.id] : [])));
+  const capos = change.capos.filter((capo) => capo.action === "on" && brought.has(capo.takenFrom ?? ""));
+  return { strings: [], capos };
+}
+
 /**
  * What hands must do before a song, for the stage sheet: the guitar and the strings of a capo stand beside it, so the
  * words begin with the capo and name only its fret. Only what the player does: a guitar that the tech hands over is ready.
  * @example stageWords(row, "english") // "capo off, 2 down, 1 up"
  */
 export function stageWords(row: GapRow, naming: Naming): string {
-  const change = changeOf(row);
-  if (!change || !row.guitar || !row.neck || !change.onStage) return "";
+  const change = onStageChange(row);
+  if (!change || !row.guitar || !row.neck) return "";
   const count = row.guitar.strings;
-  const several = hadSeveral(row, change.capos);
+  const several = hadSeveral(row, changeOf(row)?.capos ?? []);
   const { off, down, up, on } = inOrder(change.strings, liftedFirst(change.strings, change.capos));
-  const words = off.map((capo) => capoWord(capo, count, several, true));
+  const words = giverWords(row);
+  words.push(...off.map((capo) => capoWord(capo, count, several, true)));
   if (down.length > 0) words.push(`${down.length} down`);
   if (up.length > 0) words.push(`${up.length} up`);
   words.push(...on.map((capo) => capoWord(capo, count, several, true)));
   return [...words, ...tunerWords(row, change, naming)].join(", ");
+}
+
+/** Where a capo comes from that another guitar gives: the one just played is still in hand. */
+function giverWords({ gap }: GapRow): string[] {
+  return (gap?.givers ?? []).map(({ guitar, capos, justPlayed }) => {
+    if (justPlayed) return capos === 1 ? "take the capo with you" : `take ${capos} capos with you`;
+    return capos === 1 ? `capo from ${guitar.shortName}` : `${capos} capos from ${guitar.shortName}`;
+  });
 }
 
 /** What the tuner reads where a string is retuned under a capo that stays: "6 reads E". */

@@ -1,15 +1,40 @@
-import type { Gig, GigSet, Rule } from "#app/domain/gig/gig.ts";
+import type { Gig, GigSet, GigTimes, Rule } from "#app/domain/gig/gig.ts";
 import { entriesOf } from "#app/domain/gig/order.ts";
-import type { Gap, Row } from "#app/domain/gig/plan.ts";
+import type { Gap, Giver, Row } from "#app/domain/gig/plan.ts";
 import type { SetProblem } from "#app/domain/gig/set-problem.ts";
 import { rowWarnings } from "#app/domain/gig/warnings.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
+import type { Work } from "#app/domain/planning/answer.ts";
 import type { Evaluation } from "#app/domain/planning/evaluate.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
 
+/** What gaps are told with: guitars by id, what work takes, and what entries are called. */
+type GapLook = {
+  guitars: ReadonlyMap<string, Guitar>;
+  times: Pick<GigTimes, "capoOn" | "capoOff">;
+  title: (entryId: string) => string;
+};
+
+/** The guitars that give capos in a gap, in the order in which they do. `played`: the one in hand until then. */
+function giversOf(
+  work: readonly Work[],
+  guitars: ReadonlyMap<string, Guitar>,
+  played: string | undefined,
+): Giver[] {
+  const counts = new Map<string, number>();
+  for (const capo of work[0]?.capos ?? []) {
+    const from = capo.action === "on" ? capo.takenFrom : undefined;
+    if (from !== undefined) counts.set(from, (counts.get(from) ?? 0) + 1);
+  }
+  return [...counts].flatMap(([id, capos]) => {
+    const guitar = guitars.get(id);
+    return guitar ? [{ guitar, capos, justPlayed: id === played }] : [];
+  });
+}
+
 /** Gaps by the entry they lead into. The extra one at the head, work on the first song's guitar, is none: there is no start. */
-function gapsByEntry(evaluation: Evaluation, title: (entryId: string) => string): Map<string, Gap> {
+function gapsByEntry(evaluation: Evaluation, { guitars: known, times, title }: GapLook): Map<string, Gap> {
   const byEntry = new Map(evaluation.gaps.map((gap) => [gap.into, gap]));
   const guitars = new Map(evaluation.plays.map((play) => [play.song, play.guitar]));
   const lastOn = new Map<string, string>();
@@ -21,8 +46,13 @@ function gapsByEntry(evaluation: Evaluation, title: (entryId: string) => string)
     if (gap && from !== undefined) {
       const { swap, seconds, cover, exposed, work } = gap;
       const atSide = work.some((one) => one.by === "tech");
-      const restsAfter = atSide ? title(lastOn.get(guitar) ?? from) : null;
-      gaps.set(id, { fromEntryId: from, swap, seconds, cover, exposed, work, restsAfter });
+      const rested = lastOn.get(guitar);
+      const restsAfter = atSide && rested !== undefined ? title(rested) : null;
+      const givers = giversOf(work, known, guitars.get(from));
+      const waits = givers.reduce((sum, one) => (one.justPlayed ? sum + one.capos : sum), 0);
+      const onStage = work.find((one) => one.by === "player")?.seconds ?? 0;
+      const late = atSide && onStage > waits * (times.capoOff + times.capoOn) + 1e-9;
+      gaps.set(id, { fromEntryId: from, swap, seconds, cover, exposed, work, restsAfter, late, givers });
     }
     lastOn.set(guitar, id);
   });
@@ -56,7 +86,11 @@ export function rowsOf(
   const { gig, songs, guitars, naming } = look;
   const entries = entriesOf(gig, set.id);
   const titles = new Map(entries.map((entry) => [entry.id, songs.get(entry.songId)?.title]));
-  const gaps = gapsByEntry(evaluation, (id) => titles.get(id) ?? "the song before");
+  const gaps = gapsByEntry(evaluation, {
+    guitars,
+    times: gig.times,
+    title: (id) => titles.get(id) ?? "the song before",
+  });
   const plays = new Map(given.plays.map((play) => [play.song, play]));
   const covers = new Map(given.problem.songs.map((song) => [song.id, song.cover]));
   const lengths: number[] = [];

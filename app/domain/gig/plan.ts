@@ -7,6 +7,7 @@ import { type Look, rowsOf } from "#app/domain/gig/plan-rows.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { setProblem } from "#app/domain/gig/set-problem.ts";
 import type { RowWarning } from "#app/domain/gig/warnings.ts";
+import { type WishBreach, wishBreaches } from "#app/domain/gig/wish-words.ts";
 import type { Neck } from "#app/domain/music/neck.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Play, Work } from "#app/domain/planning/answer.ts";
@@ -25,7 +26,14 @@ export type Gap = {
   work: Work[];
   /** Title of the song after which a tech may begin on this guitar; null where all is done on stage. */
   restsAfter: string | null;
+  /** The tech cannot be ready in time with what can be done at the side. */
+  late: boolean;
+  /** Guitars that capos are taken off in this gap, for the guitar of the song. */
+  givers: Giver[];
 };
+
+/** A guitar that gives capos, and how many. `justPlayed`: it is in hand until this gap. */
+export type Giver = { guitar: Guitar; capos: number; justPlayed: boolean };
 
 /** One song standing in a set, with what the plan makes of it. */
 export type Row = {
@@ -58,6 +66,8 @@ export type Totals = {
   capoActions: number;
   swaps: number;
   seconds: number;
+  /** Seconds that broken wishes count as; no part of dead air. */
+  wishes: number;
 };
 
 export type SetPlan = {
@@ -71,6 +81,8 @@ export type SetPlan = {
   evaluation: Evaluation;
   /** Rules that the present order breaks, in words. */
   breaches: RuleBreach[];
+  /** Wishes that the present order breaks, in words. */
+  wishes: WishBreach[];
   /** Seconds from the first song of the set to the end of its last. */
   seconds: number;
   /** Seconds from the start of the gig. */
@@ -97,6 +109,7 @@ const nothing: Totals = {
   capoActions: 0,
   swaps: 0,
   seconds: 0,
+  wishes: 0,
 };
 
 function sumOf(totals: readonly Totals[]): Totals {
@@ -109,13 +122,14 @@ function sumOf(totals: readonly Totals[]): Totals {
       capoActions: sum.capoActions + one.capoActions,
       swaps: sum.swaps + one.swaps,
       seconds: sum.seconds + one.seconds,
+      wishes: sum.wishes + one.wishes,
     }),
     nothing,
   );
 }
 
 function totalsOf({ totals, gaps }: Evaluation): Totals {
-  const { exposed, strings, semitones, capoActions, swaps, seconds } = totals;
+  const { exposed, strings, semitones, capoActions, swaps, seconds, wishes = 0 } = totals;
   return {
     exposed,
     strings,
@@ -123,6 +137,7 @@ function totalsOf({ totals, gaps }: Evaluation): Totals {
     capoActions,
     swaps,
     seconds,
+    wishes,
     longestGap: Math.max(0, ...gaps.map((gap) => gap.exposed)),
   };
 }
@@ -154,6 +169,12 @@ function planSet(look: Look, set: GigSet, repertoire: Repertoire, startSecond: n
       entries: rows.flatMap((row) => (row.left === null ? [row.entry] : [])),
       title: (id) => rows.find((row) => row.entry.id === id)?.song?.title ?? "A song",
     }),
+    wishes: wishBreaches(
+      evaluation.broken ?? [],
+      look.gig.wishes,
+      rows.filter((row) => row.left === null),
+      look.naming,
+    ),
     seconds: at - startSecond,
     startSecond,
     before,

@@ -37,7 +37,18 @@ function runsOf(
   });
 }
 
-/** Every capo of one guitar down the set, from the song it is put on for to the last it stays on for. */
+const kindOf = (capo: { strings: readonly number[] }) => capo.strings.toSorted((a, b) => a - b).join();
+
+/** The row for which a capo is taken off after a use, before the next; null where it is not. Of two alike the higher goes first. */
+function takenAfter(story: GuitarStory, use: number, capo: Capo): number | null {
+  const { row, capos } = story.uses[use]!;
+  const next = story.uses[use + 1]?.row ?? Number.POSITIVE_INFINITY;
+  const takes = story.taken.filter((one) => one.row > row && one.row < next && kindOf(one) === kindOf(capo));
+  const higher = capos.filter((one) => kindOf(one) === kindOf(capo) && one.fret > capo.fret).length;
+  return takes[higher]?.row ?? null;
+}
+
+/** Every capo of one guitar down the set, from the song it is put on for to the last it stays on for, or until another guitar takes it. */
 export function capoBars(
   story: GuitarStory,
   places: readonly number[],
@@ -49,20 +60,25 @@ export function capoBars(
   story.uses.forEach(({ row, capos }, use) => {
     const earlier = story.uses[use - 1]?.capos ?? [];
     capos.forEach((capo, place) => {
-      if (earlier.some((one) => sameCapo(one, capo))) return;
+      const stayed = use > 0 && takenAfter(story, use - 1, capo) === null;
+      if (stayed && earlier.some((one) => sameCapo(one, capo))) return;
       let last = use;
-      while (story.uses[last + 1]?.capos.some((one) => sameCapo(one, capo))) last += 1;
+      const staysOn = () =>
+        takenAfter(story, last, capo) === null &&
+        story.uses[last + 1]?.capos.some((one) => sameCapo(one, capo));
+      while (staysOn()) last += 1;
       const top = tops[row] ?? 0;
       const height = heights[row] ?? 0;
       const thick = height * barShare * (capos.length > 1 ? 0.8 : 1);
       const middle = top + (height * (place + 1)) / (capos.length + 1);
-      const lastRow = story.uses[last]?.row ?? row;
+      const used = story.uses[last]?.row ?? row;
+      const lastRow = (takenAfter(story, last, capo) ?? used + 1) - 1;
       bars.push({
         fret: capo.fret,
         runs: runsOf(capo, places, distance, guitar.strings),
         y1: middle - thick / 2,
         y2: middle + thick / 2,
-        endY: last > use ? (tops[lastRow] ?? 0) + (heights[lastRow] ?? 0) - 2 : null,
+        endY: lastRow > row ? (tops[lastRow] ?? 0) + (heights[lastRow] ?? 0) - 2 : null,
       });
     });
   });

@@ -20,6 +20,8 @@ export type GuitarStory = {
   played: { y1: number; y2: number }[];
   /** The capos on it for each song it plays. */
   uses: { row: number; capos: Capo[] }[];
+  /** Capos that another guitar takes off it, for the song of that row. */
+  taken: { row: number; strings: number[] }[];
 };
 
 /**
@@ -31,10 +33,14 @@ export function guitarStory(
   rows: readonly RibbonRow[],
   { tops, heights }: RibbonFrame,
 ): GuitarStory {
-  const story: GuitarStory = { first: [], works: [], played: [], uses: [] };
+  const story: GuitarStory = { first: [], works: [], played: [], uses: [], taken: [] };
   const bottomOf = (row: number) => (tops[row] ?? 0) + (heights[row] ?? 0);
   let last = -1;
   rows.forEach((row, index) => {
+    for (const capo of row.gap?.work[0]?.capos ?? []) {
+      if (capo.action === "on" && capo.takenFrom === guitar.id)
+        story.taken.push({ row: index, strings: capo.strings });
+    }
     if (row.guitar?.id !== guitar.id || !row.neck) return;
     const before = previousPlayed(rows, index);
     const keepsPlaying = last >= 0 && before === last;
@@ -42,7 +48,7 @@ export function guitarStory(
     const works = row.gap?.work.filter((work) => work.guitar === guitar.id) ?? [];
     const work = works[0];
     if (work) {
-      const atSide = works.some((one) => one.by === "tech") && last >= 0 && last + 1 < index;
+      const atSide = works.some((one) => one.by === "tech") && last + 1 < index;
       const from = atSide ? (tops[last + 1] ?? 0) : bottomOf(Math.max(0, index - 1));
       const to = atSide ? bottomOf(last + 1) : (tops[index] ?? 0);
       const room = (to - from) * 0.12;

@@ -33,8 +33,8 @@ export function savedWords(lead: Lead, now: Measured, then: Measured): string[] 
 /**
  * What an order needs besides what leads, for the small print of a suggestion; broken wishes too, as the seconds they
  * count as.
- * @example workWords("dead-air", answer) // "21 strings, 1 capo and 5 guitar changes"
- * @example workWords("capos", answer) // "233 s of dead air, 21 strings, 5 guitar changes"
+ * @example workWords("dead-air", answer) // "21 strings, 1 capo, 5 guitar changes"
+ * @example workWords("capos", answer) // "233 s dead air, 21 strings, 5 guitar changes"
  */
 export function workWords(lead: Lead, measured: Measured): string {
   const count = (kind: Counted) => Math.round(leadOf(kind, measured));
@@ -43,9 +43,9 @@ export function workWords(lead: Lead, measured: Measured): string {
     .map((kind) => `${count(kind)} ${kind === "capos" ? "capo" : "guitar"}`);
   const last = lead === "guitars" ? count("capos") : count("guitars");
   return [
-    lead === "dead-air" ? "" : `${count("dead-air")} s of dead air`,
+    lead === "dead-air" ? "" : `${count("dead-air")} s dead air`,
     lead === "strings" ? "" : `${count("strings")} ${names.strings[count("strings") === 1 ? 0 : 1]}`,
-    `${changes.join(" and ")} ${last === 1 ? "change" : "changes"}`,
+    `${changes.join(", ")} ${last === 1 ? "change" : "changes"}`,
     measured.totals.wishes ? `wishes ${Math.round(measured.totals.wishes)} s` : "",
   ]
     .filter(Boolean)

@@ -1,4 +1,5 @@
 import { aimOf } from "#app/domain/gig/aims.ts";
+import { capoKinds, lackingCapo } from "#app/domain/gig/capo-stock.ts";
 import { coversOf } from "#app/domain/gig/cover.ts";
 import { atDoors, presentPlay, standAfter } from "#app/domain/gig/default-choice.ts";
 import type { Entry, Gig } from "#app/domain/gig/gig.ts";
@@ -6,6 +7,7 @@ import { entriesOf } from "#app/domain/gig/order.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { rulesOf } from "#app/domain/gig/set-rules.ts";
 import { whyLeft } from "#app/domain/gig/why-left.ts";
+import { wishesOf } from "#app/domain/gig/wishes.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Play } from "#app/domain/planning/answer.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
@@ -56,10 +58,12 @@ export function setProblem(
   const necks = new Map<string, SongNeck[]>();
   const plays: Play[] = [];
   const limited = new Map<string, readonly Guitar[]>();
+  const capos = capoKinds(repertoire.capos, repertoire.guitars);
   let stand = atDoors;
   for (const entry of all) {
     const song = songs.get(entry.songId);
-    const ways = song ? openNecks(entry, song) : [];
+    const open = song ? openNecks(entry, song) : [];
+    const ways = open.filter((way) => lackingCapo(capos ?? [], way) === null);
     const guitars = openGuitars(entry, repertoire.guitars);
     const play = song ? presentPlay(entry, ways, guitars, stand, gig) : null;
     if (play) {
@@ -70,7 +74,9 @@ export function setProblem(
     } else {
       left.set(
         entry.id,
-        whyLeft(song, guitars, ways, naming, entry.pinned !== "none") ?? "No guitar can play this.",
+        whyLeft(song, guitars, open, naming, entry.pinned !== "none") ??
+          lackingCapo(capos ?? [], open[0]!) ??
+          "No guitar can play this.",
       );
     }
   }
@@ -122,6 +128,15 @@ export function setProblem(
     order: entries.map((entry) => entry.id),
     rules: rulesOf(gig, set, entries, all),
     maxMoved: null,
+    ...(capos ? { capos } : {}),
+    ...(gig.wishes.length > 0
+      ? {
+          wishes: wishesOf(
+            gig.wishes,
+            entries.map(({ id, songId }) => ({ id, song: songs.get(songId)! })),
+          ),
+        }
+      : {}),
   };
   return { problem, plays, left, necks };
 }

@@ -4,6 +4,7 @@ import {
   type Letter,
   type Naming,
   noteName,
+  pitchClassOfLetter,
   spokenNote,
 } from "#app/domain/music/note-names.ts";
 import type { Midi } from "#app/domain/music/pitch.ts";
@@ -111,6 +112,18 @@ export function keyFifths(key: string): number | null {
   const fifths = fifthsOf(parts.letter, parts.alter) + modes[parts.mode]!;
   if (fifths > 7) return fifths - 12;
   return fifths < -7 ? fifths + 12 : fifths;
+}
+
+/**
+ * One text for every spelling of a key, null for a key that is unknown or unread: G# minor is Ab minor, C ionian is C
+ * major, and A aeolian A minor. Relative keys (C major, A minor) are two.
+ * @example soundOfKey("G#m") === soundOfKey("Abm") // true
+ */
+export function soundOfKey(key: string): string | null {
+  const parts = keyParts(key);
+  if (!parts) return null;
+  const same: Record<string, string> = { ionian: "", aeolian: "m" };
+  return `${pitchClassOfLetter(parts.letter, parts.alter)} ${same[parts.mode] ?? parts.mode}`.trim();
 }
 
 /**

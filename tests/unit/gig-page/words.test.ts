@@ -97,10 +97,12 @@ describe("said aloud", () => {
       capoActions: 7,
       swaps: 6,
       seconds: 90,
+      wishes: 0,
     };
     expect(totalsWords(totals)).toBe(
       "Dead air 13 s, longest gap 50 s, 1 string retuned, 7 capo changes, 6 guitar changes",
     );
+    expect(totalsWords({ ...totals, wishes: 42.4 })).toMatch(/6 guitar changes, broken wishes 42 s$/);
   });
 
   test("whether the server has everything", () => {

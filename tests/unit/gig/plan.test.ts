@@ -312,39 +312,81 @@ describe("capos on necks at once", () => {
     { song: "c", guitar: "alder" },
   ];
 
-  test("one full capo owned, two on necks from the start: the second is missing", () => {
-    const plan = planGig(
-      gigOf([set]),
-      repertoireOf(songs, [alder, birch], [{ id: "k", name: "Steel", strings: null, count: 1 }]),
-    );
-    expect(plan.shortages).toEqual([
+  const one = [{ id: "k", name: "Steel", strings: null, count: 1 }];
+
+  test("one full capo owned: it goes to the first guitar at doors, and is taken off it for the second", () => {
+    const plan = planGig(gigOf([set]), repertoireOf(songs, [alder, birch], one)).sets[0]!;
+    expect(plan.before.map(({ guitar: on, neck }) => [on.id, neck.capos.length])).toEqual([
+      ["alder", 1],
+      ["birch", 0],
+    ]);
+    // By hand: off 3, on 5, check 5, guitar 15 = 28; talk covers 12.
+    expect(plan.rows[1]?.gap).toMatchObject({
+      seconds: 28,
+      exposed: 16,
+      givers: [{ guitar: { id: "alder" }, capos: 1, justPlayed: true }],
+    });
+    // Alder has no capo left to take off for its last song.
+    expect(plan.rows[2]?.gap).toMatchObject({ seconds: 15, work: [], givers: [] });
+    expect(plan.totals.capoActions).toBe(2);
+    expect(plan.shortages).toEqual([]);
+  });
+
+  test("a guitar that waits with its capo gives it, and has it put on again when its own song comes", () => {
+    const later = [
+      song("d", "EADGBE capo 2"),
+      song("e", "EADGBE"),
+      song("f", "EADGBE capo 2"),
+      song("g", "EADGBE capo 4"),
+    ];
+    const guitars = ["birch", "alder", "alder", "birch"];
+    const gig = gigOf([later.map(({ id }, at) => ({ song: id, guitar: guitars[at]! }))]);
+    const { rows, shortages } = planGig(gig, repertoireOf(later, [alder, birch], one)).sets[0]!;
+    expect(rows.map((row) => row.gap?.givers.map((giver) => giver.guitar.id) ?? null)).toEqual([
+      null,
+      [],
+      ["birch"],
+      ["alder"],
+    ]);
+    expect(rows[2]?.gap?.givers[0]?.justPlayed).toBe(false);
+    expect(shortages).toEqual([]);
+  });
+
+  test("a full capo on guitars of two widths is one thing, and the second is missing", () => {
+    const tenor = guitar("tenor", { usual: [48, 55, 62, 69] });
+    const wide = song("w", "EADGBE capo 2");
+    const narrow = song("n", "EADGBE");
+    const four = {
+      ...narrow,
+      necks: [{ ...narrow.necks[0]!, open: tenor.usual, capos: [{ fret: 2, strings: [1, 2, 3, 4] }] }],
+    };
+    const gig = gigOf([
+      [
+        { song: "w", guitar: "alder" },
+        { song: "n", guitar: "tenor" },
+      ],
+    ]);
+    expect(planGig(gig, repertoireOf([wide, four], [alder, tenor], one)).shortages).toEqual([
       {
-        entryId: "a",
+        entryId: "w",
         needed: 2,
         owned: 1,
         kind: "full capos",
         message:
-          "At a 2 full capos are on necks at once; the act has 1. Take one off a resting guitar, or borrow one.",
+          "At w 2 full capos are on necks at once; the act has 1. Take one off a resting guitar, or borrow one.",
       },
     ]);
   });
 
-  test("a capo stays on a resting guitar, and is free again once that guitar's next song does without", () => {
-    const own = [{ id: "k", name: "Steel", strings: null, count: 1 }];
-    const later = [
-      song("d", "EADGBE"),
-      song("e", "EADGBE capo 2"),
-      song("f", "EADGBE"),
-      song("g", "EADGBE capo 4"),
-    ];
-    const on = (guitars: string[]) =>
-      planGig(
-        gigOf([later.map((one, at) => ({ song: one.id, guitar: guitars[at] ?? "alder" }))]),
-        repertoireOf(later, [alder, birch], own),
-      ).shortages.map((one) => one.entryId);
-    expect(on(["alder", "alder", "alder", "alder"])).toEqual([]);
-    // Birch takes its capo on at doors and keeps it: one is on each neck from the first song on.
-    expect(on(["alder", "alder", "alder", "birch"])).toEqual(["e"]);
+  test("a song that needs more of a kind at once than there are is left out, with what would mend it", () => {
+    const both = song("t", "EADGBE");
+    const capos = [2, 5].map((fret) => ({ fret, strings: [1, 2, 3, 4, 5, 6] }));
+    const twice = { ...both, necks: [{ ...both.necks[0]!, capos }] };
+    const gig = gigOf([[{ song: "t", guitar: "alder" }]]);
+    expect(planGig(gig, repertoireOf([twice], [alder], one)).sets[0]?.rows[0]?.left).toBe(
+      "Needs 2 full capos at once; the act has 1. List another under Guitars, or play it another way.",
+    );
+    expect(planGig(gig, repertoireOf([twice], [alder])).sets[0]?.rows[0]?.left).toBeNull();
   });
 
   test("enough capos: nothing to say; an act that listed none is told so once", () => {

@@ -7,7 +7,8 @@ const quietMilliseconds = 900;
 /** The totals as one sentence. @example totalsWords(totals) // "Dead air 251 s, longest gap 50 s, 19 strings retuned" */
 export function totalsWords(totals: Totals): string {
   const strings = totals.strings === 1 ? "1 string retuned" : `${totals.strings} strings retuned`;
-  return `Dead air ${Math.round(totals.exposed)} s, longest gap ${Math.round(totals.longestGap)} s, ${strings}, ${totals.capoActions} capo changes, ${totals.swaps} guitar changes`;
+  const wishes = totals.wishes > 0 ? `, broken wishes ${Math.round(totals.wishes)} s` : "";
+  return `Dead air ${Math.round(totals.exposed)} s, longest gap ${Math.round(totals.longestGap)} s, ${strings}, ${totals.capoActions} capo changes, ${totals.swaps} guitar changes${wishes}`;
 }
 
 /** Says the totals to a screen reader after they have changed and settled. */
