@@ -8,8 +8,8 @@ import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 type RibbonThumbnailsProps = { before: SetPlan; after: SetPlan; guitars: Guitar[] };
 
 const width = 94;
-const row = 6;
-const gap = 6;
+const row = 5;
+const gap = 4;
 const foldedWidth = 12;
 
 /** How the ribbons look now and how they would: a calm set is a page of straight lines. */

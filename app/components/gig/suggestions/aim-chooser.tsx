@@ -1,8 +1,9 @@
 import { useId, useState } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { OwnWeightsForm } from "#app/components/gig/suggestions/own-weights-form.tsx";
-import { aimNames, aimOf } from "#app/domain/gig/aims.ts";
+import { aimNames } from "#app/domain/gig/aims.ts";
 import type { GigAim } from "#app/domain/gig/gig.ts";
+import { defaultAim } from "#app/domain/planning/aim.ts";
 
 const kinds = Object.keys(aimNames) as GigAim["kind"][];
 
@@ -30,7 +31,7 @@ export function AimChooser({ aim }: { aim: GigAim }) {
             setWeighing(kind === "own");
             if (kind !== "own" && kind !== aim.kind) choose({ kind });
           }}
-          className="min-h-11 min-w-0 flex-1 rounded-sm border border-grey-400 bg-white px-2 text-base lg:min-h-9"
+          className="min-h-11 min-w-0 flex-1 rounded-sm border border-grey-400 bg-white px-1.5 font-display font-medium text-base lg:min-h-9"
         >
           {kinds.map((kind) => (
             <option key={kind} value={kind}>
@@ -44,7 +45,7 @@ export function AimChooser({ aim }: { aim: GigAim }) {
           <summary className="w-fit text-sm underline underline-offset-2">Weights</summary>
           <OwnWeightsForm
             key={JSON.stringify(aim)}
-            weights={aimOf(aim)}
+            weights={aim.kind === "own" ? aim.weights : defaultAim}
             onUse={(weights) => {
               setWeighing(false);
               choose({ kind: "own", weights });

@@ -26,7 +26,7 @@ export function RungDetails({ gig, plan, repertoire, described }: RungDetailsPro
   }, [gig, edits, repertoire, naming, plan.set.id]);
   const mayUse = rung === "same-order" ? may.prepare : may.plan;
   return (
-    <div className="flex flex-col gap-2.5 py-2">
+    <div className="flex flex-col gap-2 py-1.5">
       <Against now={plan.evaluation.totals} then={answer.totals} />
       {mayUse ? (
         <Button
@@ -96,7 +96,7 @@ function Against({ now, then }: { now: Totals; then: Totals }) {
 }
 
 /** So many changes stand there at once; the rest is asked for. */
-const shownAtOnce = 5;
+const shownAtOnce = 4;
 
 function Changes({ changes }: { changes: string[] }) {
   const more = changes.slice(shownAtOnce);
