@@ -3,6 +3,7 @@ import { entriesOf } from "#app/domain/gig/order.ts";
 import type { Gap, Giver, Row } from "#app/domain/gig/plan.ts";
 import type { SetProblem } from "#app/domain/gig/set-problem.ts";
 import { rowWarnings } from "#app/domain/gig/warnings.ts";
+import { wishBreaches } from "#app/domain/gig/wish-words.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Work } from "#app/domain/planning/answer.ts";
 import type { Evaluation } from "#app/domain/planning/evaluate.ts";
@@ -113,10 +114,15 @@ export function rowsOf(
       left: given.left.get(entry.id) ?? null,
       startSecond: 0,
       retuned: retunedStrings(guitar, gap),
+      wishes: [],
       rules: rulesAbout(gig, entry.id),
     };
     const ends = [entries[index - 1], entries[index + 1]].some((one) => one?.section !== entry.section);
     return { ...row, warnings: rowWarnings(row, { ends, into: gig.rules, naming }) };
   });
-  return { rows, lengths };
+  const inPlan = rows.filter((row) => row.left === null);
+  const broken = wishBreaches(evaluation.broken ?? [], gig.wishes, inPlan, naming);
+  if (broken.length === 0) return { rows, lengths };
+  const of = (id: string) => broken.flatMap((one) => (one.entryId === id ? [one.message] : []));
+  return { rows: rows.map((row) => ({ ...row, wishes: of(row.entry.id) })), lengths };
 }

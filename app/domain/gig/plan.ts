@@ -7,7 +7,6 @@ import { type Look, rowsOf } from "#app/domain/gig/plan-rows.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { setProblem } from "#app/domain/gig/set-problem.ts";
 import type { RowWarning } from "#app/domain/gig/warnings.ts";
-import { type WishBreach, wishBreaches } from "#app/domain/gig/wish-words.ts";
 import type { Neck } from "#app/domain/music/neck.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { Play, Work } from "#app/domain/planning/answer.ts";
@@ -51,6 +50,8 @@ export type Row = {
   /** Seconds from the start of the gig at which the song begins. */
   startSecond: number;
   warnings: RowWarning[];
+  /** Wishes that it breaks where it stands, each in a sentence. */
+  wishes: string[];
   /** Per string, low side first: differs from how this guitar was last used in the set. */
   retuned: boolean[];
   rules: Rule[];
@@ -81,8 +82,6 @@ export type SetPlan = {
   evaluation: Evaluation;
   /** Rules that the present order breaks, in words. */
   breaches: RuleBreach[];
-  /** Wishes that the present order breaks, in words. */
-  wishes: WishBreach[];
   /** Seconds from the first song of the set to the end of its last. */
   seconds: number;
   /** Seconds from the start of the gig. */
@@ -169,12 +168,6 @@ function planSet(look: Look, set: GigSet, repertoire: Repertoire, startSecond: n
       entries: rows.flatMap((row) => (row.left === null ? [row.entry] : [])),
       title: (id) => rows.find((row) => row.entry.id === id)?.song?.title ?? "A song",
     }),
-    wishes: wishBreaches(
-      evaluation.broken ?? [],
-      look.gig.wishes,
-      rows.filter((row) => row.left === null),
-      look.naming,
-    ),
     seconds: at - startSecond,
     startSecond,
     before,

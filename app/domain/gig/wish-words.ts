@@ -9,9 +9,6 @@ import { curveAt } from "#app/domain/planning/wishes.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
 
-/** A wish that the present order breaks, told about one entry. */
-export type WishBreach = { entryId: string; message: string };
-
 type Told = { entry: { id: string }; song: Song | null; guitar: Guitar | null; neck: Neck | null };
 
 /** Steps from the energy curve that a row is silent about; they count all the same. */
@@ -64,7 +61,7 @@ export function wishBreaches(
   wishes: readonly GigWish[],
   rows: readonly Told[],
   naming: Naming,
-): WishBreach[] {
+): { entryId: string; message: string }[] {
   const places = new Map(rows.map((row, place) => [row.entry.id, place]));
   return broken.flatMap(({ wish: number, songs, seconds }) => {
     const wish = wishes[number];

@@ -16,8 +16,7 @@ function planOf(songs: Song[], wishes: GigWish[], changes: Partial<Gig> = {}) {
 }
 
 function said(songs: Song[], wish: GigWish): (string | null)[] {
-  const set = planOf(songs, [wish]).sets[0]!;
-  return songs.map(({ id }) => set.wishes.find((one) => one.entryId === id)?.message ?? null);
+  return planOf(songs, [wish]).sets[0]!.rows.map((row) => row.wishes[0] ?? null);
 }
 
 describe("what a gig wishes, as the planner takes it", () => {

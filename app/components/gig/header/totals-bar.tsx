@@ -9,7 +9,7 @@ type TotalsBarProps = {
   before: Totals | null;
 };
 
-/** What the order costs, in six figures. */
+/** What the order costs, in six figures; a seventh where it breaks wishes, which are no dead air. */
 export const TotalsBar = memo(function TotalsBar({ totals, clock, before }: TotalsBarProps) {
   const against = (key: keyof Totals) => (before ? totals[key] - before[key] : null);
   return (
@@ -25,6 +25,11 @@ export const TotalsBar = memo(function TotalsBar({ totals, clock, before }: Tota
       <Figure value={totals.strings} change={against("strings")} label="strings retuned" short="strings" />
       <Figure value={totals.capoActions} change={against("capoActions")} label="capo changes" short="capo" />
       <Figure value={totals.swaps} change={against("swaps")} label="guitar changes" short="guitars" />
+      {totals.wishes > 0 || (before && before.wishes > 0) ? (
+        <div className="max-lg:hidden">
+          <Figure value={totals.wishes} unit="s" change={against("wishes")} label="broken wishes" />
+        </div>
+      ) : null}
       <Figure
         value={formatDuration(clock.seconds)}
         change={null}

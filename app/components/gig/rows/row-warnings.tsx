@@ -39,13 +39,20 @@ export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: 
   );
 }
 
-/** What must be mended about a row, a line each. */
-export function RowTroubles({ troubles }: { troubles: readonly string[] }) {
-  if (troubles.length === 0) return null;
+type RowTroublesProps = { troubles: readonly string[]; wishes: readonly string[] };
+
+/** What must be mended about a row, and the wishes it breaks, a line each. */
+export function RowTroubles({ troubles, wishes }: RowTroublesProps) {
+  if (troubles.length + wishes.length === 0) return null;
   return (
     <div className="flex flex-col pr-3 pb-1.5 pl-3 [grid-area:warn] lg:pl-3.5">
       {troubles.map((message) => (
         <Warning key={message}>{message}</Warning>
+      ))}
+      {wishes.map((message) => (
+        <p key={message} className="text-grey-800 text-sm leading-5">
+          {message}
+        </p>
       ))}
     </div>
   );

@@ -26,6 +26,7 @@ export function sameRow(a: Row, b: Row): boolean {
       sameValue(a.retuned, b.retuned) &&
       sameValue(a.gap, b.gap) &&
       sameValue(a.warnings, b.warnings) &&
+      sameWords(a.wishes, b.wishes) &&
       sameValue(a.rules, b.rules))
   );
 }

@@ -26,6 +26,7 @@ export function SetHeading({ gig, plan, alone, hasEncore, id }: SetHeadingProps)
       <p className="tabular truncate text-base text-grey-600">
         {from} to {to}, {formatDuration(plan.seconds)}
         {alone ? "" : `, ${Math.round(plan.totals.exposed)} s dead air`}
+        {plan.totals.wishes > 0 ? `, wishes ${Math.round(plan.totals.wishes)} s` : ""}
       </p>
       {may.plan ? <SetMenu set={set} gig={gig} hasEncore={hasEncore} /> : null}
     </div>
