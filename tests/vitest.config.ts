@@ -36,7 +36,10 @@ export default defineConfig({
   root: new URL("..", import.meta.url).pathname,
   test: {
     projects: [
-      { resolve, test: { ...base, name: "unit", include: ["tests/unit/**/*.test.{ts,tsx}"] } },
+      {
+        resolve,
+        test: { ...base, name: "unit", include: ["tests/unit/**/*.test.{ts,tsx}"], testTimeout: 60_000 },
+      },
       {
         resolve,
         test: { ...base, name: "reference", include: ["tests/reference/**/*.test.ts"], testTimeout: 120_000 },

@@ -1,7 +1,7 @@
 import { withApp } from "./bench-app.ts";
 import { dragBench } from "./drag-bench.ts";
 import { pageBench } from "./page-bench.ts";
-import { planBench } from "./plan-bench.ts";
+import { scoringRows } from "./planning/scoring.ts";
 import { sheetBench } from "./sheet-bench.ts";
 import { table } from "./timing.ts";
 
@@ -15,7 +15,7 @@ async function bench(): Promise<void> {
   console.log(table("\nRe-scoring while dragging", drag));
   console.log(table("\nDragging a row, main thread, against a frame of 16.7 ms", moves));
   console.log(table("\nStage sheet as PDF", await sheetBench()));
-  for (const { title, rows } of await planBench()) console.log(table(`\n${title}`, rows));
+  console.log(table("\nScoring one order (proofs: npm run bench:plan)", scoringRows()));
 }
 
 await bench();
