@@ -14,6 +14,7 @@ export type OpenDialog =
   | { kind: "add"; setId: string }
   | { kind: "paste"; setId: string }
   | { kind: "suggestions" }
+  | { kind: "wishes" }
   | { kind: "details" };
 
 export type EntryPayload = { entryId: string };

@@ -11,7 +11,7 @@ import { setsOf } from "#app/domain/gig/order.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
 
-/** Both bring a form library along, so they are loaded when they are first asked for. */
+/** These bring a form library along, so they are loaded when they are first asked for. */
 const PasteDialog = lazy(async () => {
   const { PasteDialog } = await import("#app/components/gig/dialogs/paste-dialog.tsx");
   return { default: PasteDialog };
@@ -19,6 +19,11 @@ const PasteDialog = lazy(async () => {
 const GigDetailsDialog = lazy(async () => {
   const { GigDetailsDialog } = await import("#app/components/gig/details/gig-details-form.tsx");
   return { default: GigDetailsDialog };
+});
+
+const WishesDialog = lazy(async () => {
+  const { WishesDialog } = await import("#app/components/gig/wishes/wishes-dialog.tsx");
+  return { default: WishesDialog };
 });
 
 type GigDialogsProps = {
@@ -46,6 +51,10 @@ function Opened(props: GigDialogsProps) {
   const { open, gig, repertoire, parts, standing, titleOf, onAdd, onClose } = props;
   if (!open) return null;
   if (open.kind === "details") return <GigDetailsDialog gig={gig} edit={props.edit} onClose={onClose} />;
+  if (open.kind === "wishes") {
+    const songs = repertoire.songs.filter((song) => standing.has(song.id));
+    return <WishesDialog gig={gig} songs={songs} edit={props.edit} onClose={onClose} />;
+  }
   if (open.kind === "entry") {
     const entry = gig.entries.find((one) => one.id === open.entryId);
     if (!entry) return null;

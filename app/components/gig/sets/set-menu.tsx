@@ -31,6 +31,7 @@ export function SetMenu({ set, gig, hasEncore }: SetMenuProps) {
         <MenuItem onClick={() => openDialog({ kind: "paste", setId: set.id })}>
           Paste a list of songs
         </MenuItem>
+        <MenuItem onClick={() => openDialog({ kind: "wishes" })}>Wishes for the order</MenuItem>
         {hasEncore ? null : <MenuItem onClick={() => showEncore(set.id)}>Add an encore</MenuItem>}
         <MenuLine />
         <MenuCheck
