@@ -2,6 +2,7 @@ import { Copy, Trash2 } from "lucide-react";
 import { memo } from "react";
 import { Link } from "react-router";
 import { CapoMark } from "#app/components/capo-mark.tsx";
+import { EnergyMark } from "#app/components/energy-mark.tsx";
 import { PostButton } from "#app/components/post-button.tsx";
 import { TuningCells } from "#app/components/tuning-cells.tsx";
 import { formatTuning, spokenTuning } from "#app/domain/music/format-tuning.ts";
@@ -9,6 +10,8 @@ import { nameKey, spellingFifths, spokenKey } from "#app/domain/music/key.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import type { LibraryRow, LibrarySort } from "#app/domain/repertoire/library.ts";
 import { formatDuration } from "#app/domain/repertoire/read-duration.ts";
+import { usualPriority } from "#app/domain/repertoire/song.ts";
+import { priorityNames } from "#app/domain/repertoire/song-words.ts";
 
 type LibraryListProps = {
   rows: readonly LibraryRow[];
@@ -21,13 +24,14 @@ type LibraryListProps = {
 };
 
 const columns =
-  "grid items-center gap-x-4 grid-cols-[minmax(0,1fr)_auto] md:grid-cols-[minmax(0,1fr)_12.5rem_6.5rem_4.5rem_3.5rem_4.5rem] xl:grid-cols-[minmax(14rem,24rem)_12.5rem_8rem_5rem_3.5rem_minmax(0,1fr)_4.5rem]";
+  "grid items-center gap-x-4 grid-cols-[minmax(0,1fr)_auto] md:grid-cols-[minmax(0,1fr)_12.5rem_6.5rem_4.5rem_3.5rem_4.5rem] lg:grid-cols-[minmax(0,1fr)_12.5rem_6.5rem_4.5rem_4rem_3.5rem_4.5rem] xl:grid-cols-[minmax(14rem,24rem)_12.5rem_8rem_5rem_4rem_3.5rem_minmax(0,1fr)_4.5rem]";
 
 const heads: { sort: LibrarySort | null; label: string; className?: string }[] = [
   { sort: "title", label: "Title" },
   { sort: "tuning", label: "Tuning" },
   { sort: null, label: "Capo" },
   { sort: "key", label: "Key" },
+  { sort: "energy", label: "Energy", className: "max-lg:hidden" },
   { sort: "length", label: "Length", className: "justify-self-end" },
   { sort: null, label: "Credit", className: "max-xl:hidden xl:pl-4" },
 ];
@@ -114,6 +118,9 @@ const Row = memo(function Row({ row, naming, mayEdit }: RowProps) {
             {row.title}
           </Link>
           {row.ways > 1 ? <span className="ml-3 text-grey-600 text-sm">{`${row.ways} ways`}</span> : null}
+          {row.priority === usualPriority ? null : (
+            <span className="ml-3 text-grey-600 text-sm">{priorityNames[row.priority]}</span>
+          )}
           {row.credit ? (
             <span className="ml-3 text-grey-600 text-sm max-md:hidden xl:hidden">{row.credit}</span>
           ) : null}
@@ -139,6 +146,7 @@ const Row = memo(function Row({ row, naming, mayEdit }: RowProps) {
             </>
           ) : null}
         </p>
+        <p className="max-lg:hidden">{row.energy === null ? null : <EnergyMark energy={row.energy} />}</p>
         <p className="tabular justify-self-end text-grey-800 max-md:col-start-2 max-md:row-start-1">
           {formatDuration(row.seconds)}
         </p>

@@ -7,6 +7,8 @@ import { type Naming, stringNameWithOctave } from "#app/domain/music/note-names.
 import { sameTitle } from "#app/domain/repertoire/pasted-list.ts";
 import { formatDuration } from "#app/domain/repertoire/read-duration.ts";
 import type { PastedSong, SongLine } from "#app/domain/repertoire/read-song-lines.ts";
+import { usualPriority } from "#app/domain/repertoire/song.ts";
+import { energyWords, priorityNames } from "#app/domain/repertoire/song-words.ts";
 
 type PastePreviewProps = {
   lines: readonly SongLine[];
@@ -105,6 +107,8 @@ function Remarks({
     known ? (reuse ? "in the library: that song is used" : "a song of this title is in the library") : "",
     song.openAssumed ? "no tuning on the line: usual tuning taken" : "",
     song.seconds === null ? "no length on the line" : "",
+    song.energy === null ? "" : `energy ${energyWords(song.energy)}`,
+    song.priority === usualPriority ? "" : priorityNames[song.priority],
     ...song.ambiguous.map(({ string, options }) => {
       const [taken, ...others] = options.map((midi) => stringNameWithOctave(midi, naming));
       return `string ${string} taken as ${taken}, could be ${others.join(" or ")}`;

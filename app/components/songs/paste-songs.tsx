@@ -82,7 +82,7 @@ export function PasteSongs({ naming, choices, library, answer: posted, onKept }:
           ref={box}
           name="text"
           label="Your list"
-          hint="One song a line: title, then tuning, capo, key and length in any order."
+          hint="One song a line: title, then tuning, capo, key and length in any order. Energy 4 or wanted 5, each of 5, may stand there too."
           errors={answer?.errors.text}
           rows={14}
           maxLength={pasteLimits.characters}

@@ -1,7 +1,9 @@
-import { type FieldMetadata, getInputProps, getTextareaProps } from "@conform-to/react";
+import { type FieldMetadata, getInputProps, getSelectProps, getTextareaProps } from "@conform-to/react";
 import type { ComponentProps } from "react";
-import { TextArea, TextField } from "#app/components/ui/field.tsx";
+import { SelectField, TextArea, TextField } from "#app/components/ui/field.tsx";
+import { usualPriority } from "#app/domain/repertoire/song.ts";
 import { type SongFormInput, songLimits } from "#app/domain/repertoire/song-form.ts";
+import { energyWords, priorityNames } from "#app/domain/repertoire/song-words.ts";
 
 type SongFactsProps = {
   fields: {
@@ -36,6 +38,17 @@ export function SongFacts({ fields }: SongFactsProps) {
         inputMode="numeric"
         className="tabular"
       />
+      <Step
+        field={fields.energy}
+        label="Energy"
+        none="not said"
+        steps={([1, 2, 3, 4, 5] as const).map((step) => [step, energyWords(step)])}
+      />
+      <Step
+        field={fields.priority}
+        label="In the set"
+        steps={([5, 4, 3, 2, 1] as const).map((step) => [step, priorityNames[step]])}
+      />
       <Line
         field={fields.cover}
         label="Talk before it, in seconds"
@@ -66,6 +79,36 @@ function Line({ field, ...rest }: LineProps) {
     ariaAttributes: false,
   });
   return <TextField key={key} {...input} errors={field.errors} {...rest} />;
+}
+
+type StepProps = {
+  field: FieldMetadata<SongFormInput["energy"]>;
+  label: string;
+  /** What it says where nothing is chosen; without it, one of the steps is. */
+  none?: string;
+  steps: [number, string][];
+};
+
+/** One of five steps, each in words. */
+function Step({ field, label, none, steps }: StepProps) {
+  const { key, ...select } = getSelectProps(field, { ariaAttributes: false });
+  return (
+    <SelectField
+      key={key}
+      {...select}
+      defaultValue={field.initialValue ?? (none === undefined ? usualPriority : "")}
+      label={label}
+      errors={field.errors}
+      wrapClass="col-span-3"
+    >
+      {none === undefined ? null : <option value="">{none}</option>}
+      {steps.map(([step, words]) => (
+        <option key={step} value={step}>
+          {words}
+        </option>
+      ))}
+    </SelectField>
+  );
 }
 
 function Notes({ field }: { field: FieldMetadata<string | undefined> }) {

@@ -9,6 +9,7 @@ import { nameTuning } from "#app/domain/music/tuning-names.ts";
 import type { FormGuitar } from "#app/domain/repertoire/form-guitar.ts";
 import { formatDuration } from "#app/domain/repertoire/read-duration.ts";
 import type { Song, SongNeck } from "#app/domain/repertoire/song.ts";
+import { energyWords, priorityNames } from "#app/domain/repertoire/song-words.ts";
 import { usualChoices, usualFor } from "#app/domain/repertoire/usual-choices.ts";
 
 type SongViewProps = {
@@ -25,6 +26,8 @@ export function SongView({ song, guitars, naming }: SongViewProps) {
         <Fact label="Length">{formatDuration(song.seconds)}</Fact>
         {song.key ? <Fact label="Key">{nameKey(song.key, naming)}</Fact> : null}
         {song.tempo === null ? null : <Fact label="Tempo">{`${song.tempo} beats a minute`}</Fact>}
+        {song.energy === null ? null : <Fact label="Energy">{energyWords(song.energy)}</Fact>}
+        <Fact label="In the set">{priorityNames[song.priority]}</Fact>
         {song.cover === null ? null : <Fact label="Talk before it">{`${song.cover} s`}</Fact>}
         {song.firstLine ? <Fact label="First line">{song.firstLine}</Fact> : null}
         {song.notes ? <Fact label="Notes">{song.notes}</Fact> : null}

@@ -11,6 +11,7 @@ import {
   trimmedEnd,
 } from "#app/domain/repertoire/find-tuning.ts";
 import { readDuration } from "#app/domain/repertoire/read-duration.ts";
+import type { Energy, Priority } from "#app/domain/repertoire/song.ts";
 
 /** What may follow a title on a pasted line; each at most once. */
 export type SongParts = {
@@ -19,6 +20,8 @@ export type SongParts = {
   key?: string;
   capos?: Capo[];
   tuning?: { open: Midi[]; ambiguous: AmbiguousString[] };
+  energy?: Energy;
+  wanted?: Priority;
 };
 
 type Found = { rest: string; parts: SongParts } | { rest: string; problem: string };
@@ -48,6 +51,12 @@ function findTempo(text: string): Found | null {
   return tempo >= 20 && tempo <= 400
     ? { rest: trimmedEnd(text.slice(0, match.index)), parts: { tempo } }
     : null;
+}
+
+/** "energy 4", "wanted 5": steps of five that say what they are. */
+function findStep(text: string, kind: "energy" | "wanted"): Found | null {
+  const match = new RegExp(`(?:^|[\\s,;|/(–—-])${kind}[ :=]{0,2}([1-5])(?:/5)?$`, "iu").exec(text);
+  return match ? { rest: trimmedEnd(text.slice(0, match.index)), parts: { [kind]: Number(match[1]) } } : null;
 }
 
 function findCapos(text: string, reader: LineReader): Found | null {
@@ -142,6 +151,8 @@ function findOne(text: string, apart: boolean, reader: LineReader, without: read
   return (
     (wanted("seconds") ? findDuration(text, apart) : null) ??
     (wanted("tempo") ? findTempo(text) : null) ??
+    (wanted("energy") ? findStep(text, "energy") : null) ??
+    (wanted("wanted") ? findStep(text, "wanted") : null) ??
     (wanted("key") ? findNamedKey(text, reader) : null) ??
     (wanted("capos") ? findCapos(text, reader) : null) ??
     (wanted("tuning") ? tuningPart(findTuning(text, apart, reader)) : null) ??
@@ -163,7 +174,7 @@ function withoutRepeatedTuning(rest: string, parts: SongParts, reader: LineReade
 }
 
 /**
- * Takes length, tempo, key, capos and tuning off the end of a text, in whatever order they stand, each once. What is
+ * Takes length, tempo, key, capos, tuning, energy and how wanted it is off the end of a text, in whatever order they stand, each once. What is
  * no such part stays in `rest`: the title. `whole` says that the text is a field of its own that may be used up; else
  * the last words stay as the title.
  * @example findParts("Low Meadow DADGBE capo 2 3:15", false, reader)

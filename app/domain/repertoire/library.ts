@@ -7,7 +7,7 @@ import type { Song } from "#app/domain/repertoire/song.ts";
 import { type UsualChoice, usualFor } from "#app/domain/repertoire/usual-choices.ts";
 
 /** A song as the library lists it, with its first choice of tuning and capo. */
-export type LibraryRow = Pick<Song, "id" | "title" | "credit" | "seconds" | "key"> & {
+export type LibraryRow = Pick<Song, "id" | "title" | "credit" | "seconds" | "key" | "energy" | "priority"> & {
   neck: Neck | null;
   /** How many ways there are to play it. */
   ways: number;
@@ -17,7 +17,7 @@ export type LibraryRow = Pick<Song, "id" | "title" | "credit" | "seconds" | "key
   words: string;
 };
 
-export const librarySorts = ["title", "tuning", "key", "length"] as const;
+export const librarySorts = ["title", "tuning", "key", "energy", "length"] as const;
 export type LibrarySort = (typeof librarySorts)[number];
 
 /**
@@ -52,6 +52,8 @@ export function libraryRow(song: Song, choices: readonly UsualChoice[], naming: 
     credit: song.credit,
     seconds: song.seconds,
     key: song.key,
+    energy: song.energy,
+    priority: song.priority,
     neck: first ? { open: first.open, capos: first.capos } : null,
     ways: song.necks.length,
     distance: first ? first.open.reduce((sum, midi, index) => sum + Math.abs(midi - usual[index]!), 0) : 0,
@@ -95,10 +97,16 @@ function byKey(one: LibraryRow, other: LibraryRow): number {
   return one.key.length - other.key.length || one.key.localeCompare(other.key);
 }
 
+/** Calm before full; songs of which nobody has said it last. */
+function byEnergy(one: LibraryRow, other: LibraryRow): number {
+  return (one.energy ?? 6) - (other.energy ?? 6);
+}
+
 const orders: Record<LibrarySort, (one: LibraryRow, other: LibraryRow) => number> = {
   title: byTitle,
   tuning: byTuning,
   key: byKey,
+  energy: byEnergy,
   length: (one, other) => one.seconds - other.seconds,
 };
 

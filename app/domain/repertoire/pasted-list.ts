@@ -1,7 +1,6 @@
 import type { LineReader } from "#app/domain/repertoire/find-tuning.ts";
 import { folded } from "#app/domain/repertoire/library.ts";
 import { type PastedSong, readSongLines, type SongLine } from "#app/domain/repertoire/read-song-lines.ts";
-import { usualPriority } from "#app/domain/repertoire/song.ts";
 import { type SongFields, songLimits } from "#app/domain/repertoire/song-form.ts";
 
 export const pasteLimits = { characters: 50_000, songs: 500 } as const;
@@ -52,8 +51,8 @@ export function pastedSongFields(song: PastedSong, seconds: number): SongFields 
     seconds: song.seconds ?? seconds,
     key: song.key,
     tempo: song.tempo,
-    energy: null,
-    priority: usualPriority,
+    energy: song.energy,
+    priority: song.priority,
     notes: "",
     firstLine: "",
     cover: null,

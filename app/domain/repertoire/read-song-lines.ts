@@ -9,6 +9,7 @@ import {
 } from "#app/domain/repertoire/find-song-parts.ts";
 import { findTuning, type LineReader } from "#app/domain/repertoire/find-tuning.ts";
 import { readDuration } from "#app/domain/repertoire/read-duration.ts";
+import { type Energy, type Priority, usualPriority } from "#app/domain/repertoire/song.ts";
 
 /** A song as one pasted line tells it. */
 export type PastedSong = {
@@ -27,6 +28,8 @@ export type PastedSong = {
   tempo: number | null;
   /** As `readKey` keeps it; "" where none stood on the line. */
   key: string;
+  energy: Energy | null;
+  priority: Priority;
 };
 
 /** One line of a pasted list. `song` is null exactly where `problem` says why. `line` counts from 1. */
@@ -41,7 +44,7 @@ const inQuotes = 'If it belongs to the title, put the title in "quotation marks"
 const headings =
   /^(?:set|set list|songs?|first set|second set|interval|intermission|break|encores?|set (?:\d+|one|two|three))\s*:?$/i;
 const columnNames =
-  /^(?:#|no\.?|nr\.?|songs?|titles?|names?|tunings?|capos?|lengths?|times?|durations?|keys?|tempo|bpm|artists?|writers?|credits?|by|notes?)$/i;
+  /^(?:#|no\.?|nr\.?|songs?|titles?|names?|tunings?|capos?|lengths?|times?|durations?|keys?|tempo|bpm|energy|wanted|artists?|writers?|credits?|by|notes?)$/i;
 
 /**
  * Reads a pasted list, one song a line: the title, then in any order tuning, capo, key, tempo and length ("Low Meadow
@@ -136,6 +139,8 @@ const partNames: Record<keyof SongParts, string> = {
   key: "key",
   capos: "capo",
   tuning: "tuning",
+  energy: "energy",
+  wanted: "wanted",
 };
 
 /** What one column says: its parts, null for plain words, or what is wrong with it. */
@@ -196,5 +201,7 @@ function song(title: string, credit: string, parts: SongParts, reader: LineReade
     seconds: parts.seconds ?? null,
     tempo: parts.tempo ?? null,
     key: parts.key ?? "",
+    energy: parts.energy ?? null,
+    priority: parts.wanted ?? usualPriority,
   };
 }

@@ -60,7 +60,7 @@ export const songFieldLabels = {
   key: "Key",
   tempo: "Tempo",
   energy: "Energy",
-  priority: "Wanted in the set",
+  priority: "In the set",
   cover: "Talk before it",
   firstLine: "First line",
   notes: "Notes",

@@ -41,10 +41,10 @@ const songs = [
     seconds: 310,
     firstLine: "The longest road",
   }),
-  song("Élan", { key: "Bb", seconds: 195, credit: "Lune Ferrand" }),
+  song("Élan", { energy: 2, key: "Bb", seconds: 195, credit: "Lune Ferrand" }),
   song("Copper in the Ditch", { key: "A", seconds: 245, fret: 2 }),
-  song("10 Miles", { key: "F#m" }),
-  song("9 Gates", { open: [38, 45, 50, 55, 59, 64], key: "A" }),
+  song("10 Miles", { energy: 5, key: "F#m" }),
+  song("9 Gates", { energy: 1, open: [38, 45, 50, 55, 59, 64], key: "A" }),
 ];
 const rows = songs.map((one) => libraryRow(one, choices, "english"));
 const titles = (found: typeof rows) => found.map((row) => row.title);
@@ -91,6 +91,7 @@ describe("sorting the library", () => {
     ["title", ["9 Gates", "10 Miles", "Copper in the Ditch", "Élan", "Slow Water"]],
     ["tuning", ["10 Miles", "Élan", "Copper in the Ditch", "9 Gates", "Slow Water"]],
     ["key", ["Élan", "Slow Water", "9 Gates", "Copper in the Ditch", "10 Miles"]],
+    ["energy", ["9 Gates", "Élan", "10 Miles", "Copper in the Ditch", "Slow Water"]],
     ["length", ["Élan", "9 Gates", "10 Miles", "Copper in the Ditch", "Slow Water"]],
   ] as const)("by %s", (sort, order) => {
     expect(titles(sortLibrary(rows, sort, false))).toEqual(order);

@@ -212,6 +212,25 @@ describe("a list", () => {
     expect(titles("99 Winters\n12 Bridges")).toEqual(["99 Winters", "12 Bridges"]);
   });
 
+  test("energy and how wanted it is, where they say so, in any place behind the title", () => {
+    const [first, second, third] = readSongLines(
+      "Low Meadow DADGAD energy 4 3:15\nCold Wire, wanted: 5, energy 1/5\nBound 3:00",
+      { usual: standard, naming: "english" },
+    );
+    expect(first?.song).toMatchObject({ title: "Low Meadow", energy: 4, priority: 3, seconds: 195 });
+    expect(second?.song).toMatchObject({ title: "Cold Wire", energy: 1, priority: 5 });
+    expect(third?.song).toMatchObject({ title: "Bound", energy: null, priority: 3 });
+    const titles = readSongLines('Energy 4\n"Most Wanted 2" DADGAD\nEnergy 9', {
+      usual: standard,
+      naming: "english",
+    });
+    expect(titles.map((line) => [line.song?.title, line.song?.energy])).toEqual([
+      ["Energy 4", null],
+      ["Most Wanted 2", null],
+      ["Energy 9", null],
+    ]);
+  });
+
   test("an assumed tuning is the usual one, and its own copy", () => {
     const [line] = readSongLines("Low Meadow", { usual: standard, naming: "english" });
     expect(line?.song).toMatchObject({
