@@ -1,4 +1,5 @@
 import type { BadgeShape, InstrumentKind } from "#app/domain/repertoire/guitar.ts";
+import type { Energy, Priority } from "#app/domain/repertoire/song.ts";
 
 /** The demo act: invented people, songs and places. What a player would type, read by the same code that reads players. */
 export const demoAct = "The Emmer Road";
@@ -55,7 +56,7 @@ export const demoGuitars: DemoGuitar[] = [
 ];
 
 export const demoCapos = [
-  { name: "Steel capo", strings: null, count: 2 },
+  { name: "Steel capo", strings: null, count: 1 },
   { name: "Five-string capo", strings: [1, 2, 3, 4, 5], count: 1 },
 ];
 
@@ -64,6 +65,9 @@ type DemoSong = {
   length: string;
   key: string;
   tempo: number;
+  /** Not said of every song, as in a real library. */
+  energy?: Energy;
+  priority?: Priority;
   /** In order of preference. `capo` as a player writes it. */
   ways: { tuning: string; capo?: string; guitar?: string; penalty?: number }[];
   cover?: number;
@@ -77,6 +81,8 @@ export const demoSongs: DemoSong[] = [
     length: "3:40",
     key: "G",
     tempo: 96,
+    energy: 3,
+    priority: 5,
     ways: [{ tuning: "EADGBE" }],
     firstLine: "The harrow drags the weather in",
   },
@@ -85,6 +91,7 @@ export const demoSongs: DemoSong[] = [
     length: "4:05",
     key: "A",
     tempo: 112,
+    energy: 4,
     ways: [{ tuning: "EADGBE", capo: "capo 2" }],
   },
   {
@@ -92,6 +99,7 @@ export const demoSongs: DemoSong[] = [
     length: "3:15",
     key: "E",
     tempo: 88,
+    energy: 3,
     ways: [{ tuning: "DADGBE", capo: "capo 2" }],
     firstLine: "Nine hundred feet of hemp and tar",
   },
@@ -100,26 +108,53 @@ export const demoSongs: DemoSong[] = [
     length: "3:55",
     key: "Eb",
     tempo: 76,
+    energy: 2,
     ways: [{ tuning: "CGCFFC", capo: "capo 3 leave 6" }],
     cover: 25,
     notes: "Tell the story of the ninepence first.",
   },
-  { title: "Moth at the Pane", length: "3:50", key: "G", tempo: 104, ways: [{ tuning: "DGDGBD" }] },
+  {
+    title: "Moth at the Pane",
+    length: "3:50",
+    key: "G",
+    tempo: 104,
+    energy: 3,
+    priority: 2,
+    ways: [{ tuning: "DGDGBD" }],
+  },
   {
     title: "Slow Water",
     length: "5:10",
     key: "D",
     tempo: 64,
+    energy: 1,
+    priority: 4,
     ways: [{ tuning: "DADGAD" }],
     firstLine: "Slow water takes the longest road",
   },
-  { title: "Brickyard Snow", length: "3:30", key: "C", tempo: 92, ways: [{ tuning: "CGCGCE" }] },
-  { title: "A Kettle for the Watch", length: "4:20", key: "Fm", tempo: 70, ways: [{ tuning: "CGCFFC" }] },
+  {
+    title: "Brickyard Snow",
+    length: "3:30",
+    key: "C",
+    tempo: 92,
+    energy: 3,
+    priority: 2,
+    ways: [{ tuning: "CGCGCE" }],
+  },
+  {
+    title: "A Kettle for the Watch",
+    length: "4:20",
+    key: "Fm",
+    tempo: 70,
+    energy: 2,
+    ways: [{ tuning: "CGCFFC" }],
+  },
   {
     title: "Signal Box Hymn",
     length: "4:30",
     key: "G",
     tempo: 84,
+    energy: 2,
     ways: [{ tuning: "DADGAD", capo: "capo 5" }],
   },
   {
@@ -127,6 +162,8 @@ export const demoSongs: DemoSong[] = [
     length: "4:45",
     key: "E",
     tempo: 120,
+    energy: 5,
+    priority: 4,
     ways: [{ tuning: "CGCGCE", capo: "capo 4" }],
   },
   {
@@ -134,6 +171,7 @@ export const demoSongs: DemoSong[] = [
     length: "4:00",
     key: "Bb",
     tempo: 116,
+    energy: 4,
     ways: [{ tuning: "DGDGBD", capo: "capo 3" }],
   },
   {
@@ -141,15 +179,26 @@ export const demoSongs: DemoSong[] = [
     length: "5:30",
     key: "C",
     tempo: 80,
+    energy: 4,
+    priority: 5,
     ways: [{ tuning: "EADGBE" }],
     firstLine: "Hold the gate, there is one more",
   },
-  { title: "Blue Slate", length: "3:25", key: "D", tempo: 100, ways: [{ tuning: "drop D" }] },
+  {
+    title: "Blue Slate",
+    length: "3:25",
+    key: "D",
+    tempo: 100,
+    energy: 3,
+    priority: 2,
+    ways: [{ tuning: "drop D" }],
+  },
   {
     title: "Rain on the Chapel Roof",
     length: "4:10",
     key: "G",
     tempo: 90,
+    energy: 2,
     ways: [{ tuning: "open G", guitar: "tin" }],
     notes: "Slide throughout.",
   },
@@ -158,6 +207,8 @@ export const demoSongs: DemoSong[] = [
     length: "3:35",
     key: "D",
     tempo: 108,
+    energy: 4,
+    priority: 1,
     ways: [{ tuning: "DADGAD" }, { tuning: "drop D", penalty: 6 }],
   },
   {
@@ -165,6 +216,7 @@ export const demoSongs: DemoSong[] = [
     length: "4:15",
     key: "A",
     tempo: 98,
+    energy: 3,
     ways: [{ tuning: "EADGBE", capo: "capo 2" }],
   },
   {
@@ -172,16 +224,41 @@ export const demoSongs: DemoSong[] = [
     length: "3:50",
     key: "G",
     tempo: 126,
+    energy: 5,
     ways: [{ tuning: "open G", guitar: "tin" }],
   },
-  { title: "Lanterns Down the Quay", length: "4:40", key: "C", tempo: 72, ways: [{ tuning: "CGCGCE" }] },
-  { title: "Stonecrop", length: "3:20", key: "E", tempo: 110, ways: [{ tuning: "DADGAD", capo: "capo 2" }] },
-  { title: "What the River Kept", length: "5:05", key: "C", tempo: 68, ways: [{ tuning: "EADGBE" }] },
+  {
+    title: "Lanterns Down the Quay",
+    length: "4:40",
+    key: "C",
+    tempo: 72,
+    energy: 1,
+    ways: [{ tuning: "CGCGCE" }],
+  },
+  {
+    title: "Stonecrop",
+    length: "3:20",
+    key: "E",
+    tempo: 110,
+    energy: 4,
+    ways: [{ tuning: "DADGAD", capo: "capo 2" }],
+  },
+  {
+    title: "What the River Kept",
+    length: "5:05",
+    key: "C",
+    tempo: 68,
+    energy: 2,
+    priority: 4,
+    ways: [{ tuning: "EADGBE" }],
+  },
   {
     title: "Carry the Small Light",
     length: "4:00",
     key: "Eb",
     tempo: 60,
+    energy: 1,
+    priority: 5,
     ways: [{ tuning: "CGCFFC", capo: "capo 3 leave 6" }],
   },
   {
@@ -189,9 +266,17 @@ export const demoSongs: DemoSong[] = [
     length: "3:45",
     key: "F",
     tempo: 94,
+    energy: 3,
     ways: [{ tuning: "EADGBE", capo: "capo 3" }],
   },
-  { title: "Gannet Point", length: "4:25", key: "Dm", tempo: 78, ways: [{ tuning: "open D minor" }] },
+  {
+    title: "Gannet Point",
+    length: "4:25",
+    key: "Dm",
+    tempo: 78,
+    priority: 2,
+    ways: [{ tuning: "open D minor" }],
+  },
 ];
 
 type DemoEntry = { title: string; guitar: string; encore?: true };

@@ -59,10 +59,12 @@ async function seedSongs(
 ): Promise<Song[]> {
   const known = demoGuitars.map(({ key, name }) => ({ id: guitars.get(key) ?? "", name, strings: 6 }));
   const schema = songFormSchema({ naming: "english", guitars: known });
-  for (const { ways, tempo, cover, ...song } of demoSongs) {
+  for (const { ways, tempo, energy, priority, cover, ...song } of demoSongs) {
     const fields = schema.parse({
       ...song,
       tempo: String(tempo),
+      energy: energy === undefined ? undefined : `${energy}`,
+      priority: priority === undefined ? undefined : `${priority}`,
       cover: cover === undefined ? undefined : String(cover),
       ways: ways.map((way) => ({
         usual: usualCode(standard),
