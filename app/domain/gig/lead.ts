@@ -1,5 +1,5 @@
 import type { GigAim } from "#app/domain/gig/gig.ts";
-import type { Neck } from "#app/domain/music/neck.ts";
+import { mostWork } from "#app/domain/gig/most-work.ts";
 import type { Totals } from "#app/domain/planning/answer.ts";
 import type { Aim, Problem } from "#app/domain/planning/problem.ts";
 
@@ -19,36 +19,6 @@ export function leadOf(lead: Lead, { total, totals }: Measured): number {
   return lead === "own" ? total : totals[counts[lead]];
 }
 
-/** The most that one gap can ask for, whatever stands beside whatever: an upper bound on each count. */
-function mostInAGap({ songs, guitars, times, capos: scarce }: Problem) {
-  const starts = guitars.flatMap(({ start }) => (start ? [start] : []));
-  const necks: Neck[] = [...songs.flatMap((song) => song.necks), ...starts];
-  let strings = 0;
-  let semitones = 0;
-  for (const count of new Set(necks.map((neck) => neck.open.length))) {
-    const opens = necks.filter((neck) => neck.open.length === count).map((neck) => neck.open);
-    const spans = Array.from({ length: count }, (_, index) => {
-      const pitches = opens.map((open) => open[index]!);
-      return Math.max(...pitches) - Math.min(...pitches);
-    });
-    strings = Math.max(strings, spans.filter((span) => span > 0).length);
-    semitones = Math.max(
-      semitones,
-      spans.reduce((sum, span) => sum + span, 0),
-    );
-  }
-  const capos = Math.max(0, ...necks.map((neck) => neck.capos.length));
-  const taking = scarce ? times.capoOff : 0;
-  const swaps = guitars.length > 1 ? 1 : 0;
-  const seconds =
-    swaps * times.swap +
-    strings * times.string +
-    semitones * times.semitone +
-    capos * Math.max(times.capoMove, times.capoOff + times.capoOn + taking) +
-    times.check;
-  return { exposed: seconds, strings, semitones, capoActions: capos * (scarce ? 3 : 2), swaps };
-}
-
 function mostWishes({ wishes = [], songs }: Problem): number {
   return wishes.reduce(
     (sum, wish) => sum + wish.seconds * songs.length * (wish.kind === "energy" ? 4 : 1),
@@ -56,28 +26,19 @@ function mostWishes({ wishes = [], songs }: Problem): number {
   );
 }
 
-/** The greatest weighed total that all but what leads can come to. Talk counts in full: it covers work on stage. */
+/** The greatest weighed total that all but what leads can come to. */
 function mostBesides(problem: Problem, lead: Exclude<Lead, "own">): number {
-  const { aim, songs, times, rules } = problem;
-  const begun = problem.guitars.some(({ start }) => start !== null);
-  const gaps = Math.max(0, begun ? songs.length : songs.length - 1);
-  const talked = songs.filter((song) => begun || rules.at[song.id] !== 1);
-  const talk = talked.reduce((sum, song) => sum + (song.cover ?? times.cover), 0);
-  const most = mostInAGap(problem);
-  const penalties = songs.reduce(
-    (sum, song) => sum + Math.max(0, ...song.necks.map((neck) => neck.penalty)),
-    0,
-  );
-  const weight = (key: keyof Aim, leads: boolean) => (leads ? 0 : aim[key]);
-  const deadAir = gaps * most.exposed + penalties + mostWishes(problem);
+  const { aim } = problem;
+  const most = mostWork(problem);
+  const deadAir = most.seconds + mostWishes(problem);
+  const weight = (kind: Exclude<Lead, "own">) => (kind === lead ? 0 : aim[counts[kind]]);
   return (
-    weight("exposed", lead === "dead-air") * deadAir +
-    aim.seconds * (talk + (lead === "dead-air" ? 0 : deadAir)) +
-    gaps *
-      (weight("strings", lead === "strings") * most.strings +
-        aim.semitones * most.semitones +
-        weight("capoActions", lead === "capos") * most.capoActions +
-        weight("swaps", lead === "guitars") * most.swaps)
+    weight("dead-air") * deadAir +
+    aim.seconds * (most.talk + (lead === "dead-air" ? 0 : deadAir)) +
+    weight("strings") * most.strings +
+    aim.semitones * most.semitones +
+    weight("capos") * most.capoActions +
+    weight("guitars") * most.swaps
   );
 }
 

@@ -33,7 +33,12 @@ export function RungCard({ gig, plan, repertoire, lead, described, open, onOpen 
         className="flex w-full items-baseline gap-2 text-left"
       >
         <span className="min-w-0 flex-1 font-semibold text-lg leading-tight">{rungTitles[rung]}</span>
-        {change ? <span className="tabular font-display text-[15px] text-grey-600">{change}</span> : null}
+        {change ? (
+          <span className="tabular font-display text-[15px] text-grey-600">
+            <span aria-hidden="true">{change}</span>
+            <span className="sr-only">, {said.saved[0]},</span>
+          </span>
+        ) : null}
         <span className="tabular shrink-0 font-semibold text-xl leading-tight">
           {value} <span className={lead === "dead-air" ? "" : "font-medium text-base"}>{unit}</span>
         </span>

@@ -96,7 +96,7 @@ export function SetSuggestionsBlock(props: SetSuggestionsProps) {
   };
 
   return (
-    <section className="flex flex-col">
+    <section aria-label={`Less retuning in ${plan.set.name}`} className="flex flex-col">
       {alone ? null : <h3 className="font-semibold text-lg leading-tight">{plan.set.name}</h3>}
       <p className="pb-2 text-grey-600 leading-snug">{nowWords(plan, lead)}</p>
       <ol>{steps.map(drawn)}</ol>

@@ -78,7 +78,7 @@ function HoldingLine({ holding: { name, saves, instead, proven } }: { holding: H
   return (
     <li>
       <p className="flex items-baseline gap-3">
-        <span className="min-w-0 flex-1">{name}</span>
+        <span className="min-w-0 flex-1">{name}</span>{" "}
         <span className="tabular shrink-0 font-display font-semibold text-base">
           {proven ? "" : "at least "}
           {first}
