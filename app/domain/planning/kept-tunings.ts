@@ -12,7 +12,8 @@ const MOST_TRIES = 20_000;
 
 type Way = { guitar: number; tuning: string };
 
-const tuningOf = (model: Model, neck: number) => model.necks[neck]!.open.join();
+/** The open pitches of a neck as one word. */
+export const tuningOf = (model: Model, neck: number) => model.necks[neck]!.open.join();
 
 /** The ways of a song on kept guitars; null where a guitar that may be retuned can play it. */
 function keptWays(model: Model, song: number): Way[] | null {

@@ -30,6 +30,8 @@ export const LOOKS_PER_EFFORT = 10;
 /** Looks between two moments at which a search may be stopped: some milliseconds. */
 export const PORTION = 20_000;
 
+/** States kept for a first look at a case. */
+const ROOM_AT_FIRST = 10_000;
 const PATIENCE = 6_000_000;
 const STATE_MEMORY = 180_000_000;
 const FIRST_IMPROVEMENT = 200_000;
@@ -77,34 +79,59 @@ export function* tryChanges(run: Run, steps: number): Generator<Progress, void> 
   }
 }
 
+/** One of several cases that every plan belongs to: its space, made when it is needed, and a bound known before. */
+export type Case = { space: () => SetSpace; least: number };
+
+type OpenCase = Case & { made: SetSpace | null; proof: BestFirst | null };
+
+const floorOf = ({ proof, least }: OpenCase) => (proof ? Math.max(least, proof.floor()) : least);
+
 /**
- * Goes through a space best first until its cheapest way is proven, or so many looks are spent in all. Where that takes
- * long, a better plan is looked for in between: what costs more than a known plan need not be kept.
+ * Goes through all cases best first, always the one of which least is known, until the cheapest way of all is proven, or so
+ * many looks are spent in all. Where that takes long, a better plan is looked for in between: what costs more than a known
+ * plan need not be kept.
  *
  * @param patient whether to go on beyond `looks`, within reason, while there is no plan at all
  */
 export function* prove(
   run: Run,
-  space: SetSpace,
+  cases: readonly Case[],
   looks: number,
   patient: boolean,
 ): Generator<Progress, void> {
-  const proof = new BestFirst(space, Math.floor(STATE_MEMORY / (60 + 6 * space.width)));
+  const open = cases.map((one): OpenCase => ({ ...one, made: null, proof: null }));
+  const floor = () => open.reduce((least, one) => Math.min(least, floorOf(one)), Number.POSITIVE_INFINITY);
   let nextChanges = FIRST_IMPROVEMENT;
-  for (let first = true; !proof.exhausted; first = false) {
+  let reached = 0;
+  for (let first = true; ; first = false) {
+    const limit = run.best ? run.best.total * (1 - 5e-10) : Number.POSITIVE_INFINITY;
+    const left = open.filter((one) => floorOf(one) < limit && !one.proof?.exhausted);
+    if (left.length === 0) break;
     const enough = run.plan || !patient ? looks : Math.max(looks, PATIENCE);
     if (!first && run.looks >= enough) break;
-    if (run.best) proof.setLimit(run.best.total * (1 - 5e-10));
-    const before = proof.reached;
-    proof.run(PORTION);
-    run.looks += proof.reached - before;
-    if (proof.found) offer(run, space.planOf(proof.found.moves));
-    run.floor = Math.max(run.floor, proof.floor());
+    const one = left.reduce((a, b) => (floorOf(b) < floorOf(a) ? b : a));
+    one.made ??= one.space();
+    const room = STATE_MEMORY / (60 + 6 * one.made.width) / Math.min(4, left.length);
+    one.proof ??= new BestFirst(one.made, Math.floor(room));
+    one.proof.setLimit(limit);
+    const before = one.proof.reached;
+    one.proof.run(PORTION);
+    run.looks += one.proof.reached - before;
+    reached += one.proof.reached - before;
+    if (one.proof.found) offer(run, one.made.planOf(one.proof.found.moves));
+    run.floor = Math.max(run.floor, floor());
     yield progress(run);
-    if (!proof.exhausted && proof.reached >= nextChanges) {
+    if (!one.proof.exhausted && reached >= nextChanges) {
       nextChanges *= 2;
       yield* tryChanges(run, IMPROVEMENT);
     }
   }
-  run.floor = Math.max(run.floor, proof.floor());
+  run.floor = Math.max(run.floor, floor());
+}
+
+/** What a case costs at least, from a look at its first songs. */
+export function leastAtFirst(space: SetSpace): number {
+  const proof = new BestFirst(space, ROOM_AT_FIRST);
+  proof.run(1);
+  return proof.floor();
 }

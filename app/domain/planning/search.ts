@@ -9,15 +9,18 @@ import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { fixedOrderSpace, onlyOrder, planInOrder, spaceInOrder } from "#app/domain/planning/fixed-order.ts";
+import { keptCases } from "#app/domain/planning/kept-cases.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
-import { modelOf } from "#app/domain/planning/model.ts";
+import { type Model, modelOf } from "#app/domain/planning/model.ts";
 import { orderTest } from "#app/domain/planning/order-holds.ts";
 import { compileRules } from "#app/domain/planning/order-rules.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import { orderThatHolds, ruleConflict } from "#app/domain/planning/rule-conflict.ts";
 import {
+  type Case,
   isProven,
   LOOKS_PER_EFFORT,
+  leastAtFirst,
   offer,
   PORTION,
   type Progress,
@@ -40,6 +43,9 @@ const TO_THE_END = 500_000_000;
 
 /** What is tried with the cheap bound before the dear one is made. */
 const CHEAP_LOOKS = 60_000;
+
+/** What is tried before the tunings that kept guitars may have are told apart. */
+const WHOLE_LOOKS = 300_000;
 const MOST_ROUNDS = 60;
 const FEWEST_ROUNDS = 10;
 const SWEEP_STEPS = 100_000_000;
@@ -83,7 +89,7 @@ function undecided({ order }: Problem): Reason {
 }
 
 /** The space with bounds that are made in no time. */
-function cheapSpace({ model, rules, problem }: Run): SetSpace {
+function cheapSpace({ rules, problem }: Run, model: Model): SetSpace {
   const bound = overLooseCapos(model, (plain, layout) => {
     const shared = partitionBound(plain, rules, layout, "cheap");
     return layout.limited ? greatest(movesLeft(rules, layout, problem.maxMoved!), shared) : shared;
@@ -92,10 +98,10 @@ function cheapSpace({ model, rules, problem }: Run): SetSpace {
 }
 
 /** The space with all that is known about bounds. */
-function dearSpace(run: Run): SetSpace {
+function dearSpace(run: Run, whole: Model): SetSpace {
   const { rules } = run;
   const target = run.best?.total ?? 0;
-  const bound = overLooseCapos(run.model, (model, layout) => {
+  const bound = overLooseCapos(whole, (model, layout) => {
     const bounds = [partitionBound(model, rules, layout, "dear")];
     const ending = lastSectionBound(model, rules, layout, target * WORTHWHILE_ENDING);
     if (ending) bounds.push(ending);
@@ -112,8 +118,8 @@ function dearSpace(run: Run): SetSpace {
     }
     return greatest(...bounds);
   });
-  const closer = overLooseCapos(run.model, (model, layout) => partitionBound(model, rules, layout, "close"));
-  return setSpace(run.model, rules, bound, closer);
+  const closer = overLooseCapos(whole, (model, layout) => partitionBound(model, rules, layout, "close"));
+  return setSpace(whole, rules, bound, closer);
 }
 
 /**
@@ -142,7 +148,11 @@ export function* search(
   const fixed = only !== null || problem.maxMoved === 0;
   const small = model.songs <= SMALL_SET;
   const looks = Math.max(effort * LOOKS_PER_EFFORT, small || (fixed && !model.tech) ? TO_THE_END : 0);
-  const space = only ? spaceInOrder(model, only) : fixed ? fixedOrderSpace(model, rules) : cheapSpace(run);
+  const space = only
+    ? spaceInOrder(model, only)
+    : fixed
+      ? fixedOrderSpace(model, rules)
+      : cheapSpace(run, model);
 
   yield* firstPlans(run, space, looks);
   if (!run.plan) {
@@ -150,13 +160,26 @@ export function* search(
     if (conflict) return { status: "infeasible", why: [conflict] };
   }
   const inOneGo = small || fixed;
-  yield* prove(run, space, inOneGo ? looks : Math.min(looks, run.looks + CHEAP_LOOKS), inOneGo);
+  yield* prove(
+    run,
+    [{ space: () => space, least: 0 }],
+    inOneGo ? looks : Math.min(looks, run.looks + CHEAP_LOOKS),
+    inOneGo,
+  );
   if (!inOneGo && !isProven(run) && run.looks < looks) {
     yield* tryChanges(run, PORTION);
-    const dear = dearSpace(run);
+    const dear = dearSpace(run, model);
     tryBeam(run, dear, (looks - run.looks) / 10, 64);
     yield progress(run);
-    yield* prove(run, dear, looks, true);
+    const found = keptCases(model);
+    const asOne = found.length > 1 ? Math.min(looks, run.looks + WHOLE_LOOKS) : looks;
+    yield* prove(run, [{ space: () => dear, least: 0 }], asOne, found.length === 1);
+    if (!isProven(run) && run.looks < looks) {
+      const cases = found.map((one): Case => {
+        return { space: () => dearSpace(run, one), least: leastAtFirst(cheapSpace(run, one)) };
+      });
+      yield* prove(run, cases, looks, true);
+    }
   }
   if (run.plan) return answerOf(problem, run.plan, run.floor);
   const decided = run.floor === Number.POSITIVE_INFINITY;
