@@ -59,7 +59,7 @@ function WhatHolds({ gig, plan, repertoire, lead, best }: WhyNotLessProps) {
   return (
     <div className="flex flex-col gap-1.5 pt-1 text-sm leading-snug">
       {why.holding.length > 0 ? (
-        <ul className="flex flex-col gap-1.5">
+        <ul aria-label="What holds it up" className="flex flex-col gap-1.5">
           {why.holding.map((holding) => (
             <HoldingLine key={holding.name} holding={holding} />
           ))}
