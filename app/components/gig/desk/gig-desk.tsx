@@ -1,6 +1,7 @@
-import { useId, useMemo } from "react";
+import { useMemo } from "react";
 import { LiveGig } from "#app/components/gig/desk/live-gig.tsx";
 import { PageToolsProvider } from "#app/components/gig/desk/page-context.tsx";
+import { SidePanel } from "#app/components/gig/desk/side-panel.tsx";
 import { type GigDeskProps, useGigDesk } from "#app/components/gig/desk/use-gig-desk.ts";
 import { ConflictDialog } from "#app/components/gig/dialogs/conflict-dialog.tsx";
 import { GigDialogs } from "#app/components/gig/dialogs/gig-dialogs.tsx";
@@ -11,8 +12,9 @@ import { LiveSaveState } from "#app/components/gig/header/save-state.tsx";
 import { NeckChooser } from "#app/components/gig/rows/neck-chooser.tsx";
 import { RowMenu } from "#app/components/gig/rows/row-menu.tsx";
 import { partsOf } from "#app/components/gig/sets/moves.ts";
-import { SuggestionsDialog, SuggestionsPanel } from "#app/components/gig/suggestions/suggestions-panel.tsx";
+import { SuggestionsDialog } from "#app/components/gig/suggestions/suggestions-panel.tsx";
 import { useSuggestions } from "#app/components/gig/suggestions/use-suggestions.ts";
+import { WhatIfDialog } from "#app/components/gig/what-if/what-if-section.tsx";
 import { planGig } from "#app/domain/gig/plan.ts";
 
 /** The gig on the desk: header, sets with their ribbons, suggestions, and what opens above them. */
@@ -21,7 +23,6 @@ export function GigDesk(props: GigDeskProps) {
   const desk = useGigDesk(props);
   const { edits, tools, setDialog } = desk;
   const { gig } = edits;
-  const asideId = useId();
   const kept = useMemo(() => planGig(gig, repertoire, reader.naming), [gig, repertoire, reader.naming]);
   const parts = partsOf(gig, desk.openEncores);
   useHistoryKeys(edits.undo, edits.redo);
@@ -32,15 +33,7 @@ export function GigDesk(props: GigDeskProps) {
   return (
     <PageToolsProvider value={tools}>
       <LiveGig desk={desk} kept={kept} repertoire={repertoire} reader={reader}>
-        <aside
-          aria-labelledby={asideId}
-          className="sticky top-[81px] hidden h-[calc(100dvh-81px)] overflow-y-auto border-grey-200 border-l bg-white py-5 pr-4 pl-5 min-[85rem]:block"
-        >
-          <h2 id={asideId} className="pb-1 font-semibold text-xl leading-tight">
-            Less retuning
-          </h2>
-          <SuggestionsPanel {...panel} />
-        </aside>
+        <SidePanel {...panel} />
       </LiveGig>
       <BottomBar
         gigId={gig.id}
@@ -48,6 +41,7 @@ export function GigDesk(props: GigDeskProps) {
         pending={edits.pendingCount}
         onAdd={tools.may.plan ? () => setDialog({ kind: "add", setId: kept.sets[0]!.set.id }) : null}
         onSuggestions={() => setDialog({ kind: "suggestions" })}
+        onWhatIf={() => setDialog({ kind: "what-if" })}
       />
       <RowMenu gig={edits.gig} parts={parts} titleOf={desk.titleOf} />
       <NeckChooser gig={edits.gig} repertoire={repertoire} />
@@ -64,6 +58,9 @@ export function GigDesk(props: GigDeskProps) {
       />
       {desk.dialog?.kind === "suggestions" ? (
         <SuggestionsDialog {...panel} onClose={() => setDialog(null)} />
+      ) : null}
+      {desk.dialog?.kind === "what-if" ? (
+        <WhatIfDialog gig={gig} plan={kept} repertoire={repertoire} onClose={() => setDialog(null)} />
       ) : null}
       <ConflictDialog troubles={edits.conflicts} keepMine={edits.keepMine} keepTheirs={edits.keepTheirs} />
       <LiveTotals totals={kept.totals} />

@@ -58,6 +58,7 @@ export function LiveGig({ desk, kept, repertoire, reader, children }: LiveGigPro
         history={may.prepare ? history : null}
         onDetails={may.plan ? () => setDialog({ kind: "details" }) : null}
         onSuggestions={() => setDialog({ kind: "suggestions" })}
+        onWhatIf={() => setDialog({ kind: "what-if" })}
       />
       <div className="min-[85rem]:grid min-[85rem]:grid-cols-[minmax(0,1fr)_240px] min-[90rem]:grid-cols-[minmax(0,1fr)_264px]">
         <div ref={list} className="min-w-0 pb-28 lg:px-6 lg:pb-10">

@@ -15,6 +15,7 @@ export type OpenDialog =
   | { kind: "paste"; setId: string }
   | { kind: "suggestions" }
   | { kind: "wishes" }
+  | { kind: "what-if" }
   | { kind: "details" };
 
 export type EntryPayload = { entryId: string };

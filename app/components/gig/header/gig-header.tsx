@@ -20,6 +20,7 @@ type GigHeaderProps = {
   history: { undoLabel: string | null; redoLabel: string | null; undo: () => void; redo: () => void } | null;
   onDetails: (() => void) | null;
   onSuggestions: () => void;
+  onWhatIf: () => void;
 };
 
 /**
@@ -27,7 +28,7 @@ type GigHeaderProps = {
  * on a phone the figures do.
  */
 export function GigHeader(props: GigHeaderProps) {
-  const { gig, plan, before, paper, save, history, onDetails, onSuggestions } = props;
+  const { gig, plan, before, paper, save, history, onDetails, onSuggestions, onWhatIf } = props;
   const { clock } = plan;
   const songs = setsOf(gig).map((set) => entriesOf(gig, set.id).length);
   return (
@@ -74,8 +75,11 @@ export function GigHeader(props: GigHeaderProps) {
             <HistoryButtons {...history} />
           </>
         ) : null}
-        <Button className="mr-1 min-[85rem]:hidden" onClick={onSuggestions}>
+        <Button className="min-[85rem]:hidden" onClick={onSuggestions}>
           Less retuning
+        </Button>
+        <Button className="mr-1 min-[85rem]:hidden" onClick={onWhatIf}>
+          What if
         </Button>
         <SheetsMenu gigId={gig.id} paper={paper} pending={save.pending} />
       </div>
