@@ -46,7 +46,7 @@ export function SongFacts({ fields }: SongFactsProps) {
       />
       <Step
         field={fields.priority}
-        label="In the set"
+        label="Wanted in a set"
         steps={([5, 4, 3, 2, 1] as const).map((step) => [step, priorityNames[step]])}
       />
       <Line

@@ -27,7 +27,7 @@ export function SongView({ song, guitars, naming }: SongViewProps) {
         {song.key ? <Fact label="Key">{nameKey(song.key, naming)}</Fact> : null}
         {song.tempo === null ? null : <Fact label="Tempo">{`${song.tempo} beats a minute`}</Fact>}
         {song.energy === null ? null : <Fact label="Energy">{energyWords(song.energy)}</Fact>}
-        <Fact label="In the set">{priorityNames[song.priority]}</Fact>
+        <Fact label="In a set">{priorityNames[song.priority]}</Fact>
         {song.cover === null ? null : <Fact label="Talk before it">{`${song.cover} s`}</Fact>}
         {song.firstLine ? <Fact label="First line">{song.firstLine}</Fact> : null}
         {song.notes ? <Fact label="Notes">{song.notes}</Fact> : null}

@@ -8,6 +8,7 @@ import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 /** One thing that happens in a gap, ready to be drawn: a triangle for a peg, words for the rest. */
 export type GapToken =
   | { kind: "swap"; guitar: Guitar }
+  | { kind: "take"; words: string; said: string }
   | { kind: "capo"; words: string }
   | { kind: "string"; string: number; direction: "up" | "down"; semitones: number; to: string }
   | { kind: "tech"; words: string };
@@ -78,11 +79,12 @@ function inOrder(strings: readonly StringWork[], capos: readonly CapoWork[]) {
  */
 export function gapTokens(row: GapRow, naming: Naming): GapToken[] {
   const tokens: GapToken[] = [];
-  for (const giver of row.gap?.givers ?? []) {
-    const what = giver.capos === 1 ? "the capo" : `${giver.capos} capos`;
-    tokens.push({ kind: "capo", words: `take ${what} off ${giver.guitar.shortName}` });
-  }
   if (row.gap?.swap && row.guitar) tokens.push({ kind: "swap", guitar: row.guitar });
+  for (const { guitar, capos } of row.gap?.givers ?? []) {
+    const [short, long] = capos === 1 ? ["capo", "the capo"] : [`${capos} capos`, `${capos} capos`];
+    const off = `off ${guitar.shortName}`;
+    tokens.push({ kind: "take", words: `${short} ${off}`, said: `Take ${long} ${off}` });
+  }
   const change = changeOf(row);
   if (!change || !row.guitar) return tokens;
   const count = row.guitar.strings;
@@ -147,6 +149,7 @@ export function gapSentence(row: GapRow, naming: Naming): string {
   const parts: string[] = [];
   for (const token of gapTokens(row, naming)) {
     if (token.kind === "swap") parts.push(`Change to ${token.guitar.shortName}`);
+    if (token.kind === "take") parts.push(token.said);
     if (token.kind === "capo") parts.push(upperFirst(token.words));
     if (token.kind === "string")
       parts.push(`String ${token.string} ${token.direction} ${token.semitones}, to ${token.to}`);

@@ -60,7 +60,7 @@ export const songFieldLabels = {
   key: "Key",
   tempo: "Tempo",
   energy: "Energy",
-  priority: "In the set",
+  priority: "Wanted in a set",
   cover: "Talk before it",
   firstLine: "First line",
   notes: "Notes",

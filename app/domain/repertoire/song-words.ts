@@ -12,7 +12,7 @@ export const energyNames: Readonly<Record<Energy, string>> = {
 /** How much a song is wanted in the set, most first in a list of choices. */
 export const priorityNames: Readonly<Record<Priority, string>> = {
   5: "never without it",
-  4: "rather in",
+  4: "wanted",
   3: "as it fits",
   2: "if there is room",
   1: "first to drop",

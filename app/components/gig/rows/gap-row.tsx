@@ -39,7 +39,10 @@ function GapRowOnce({ row, gap }: { row: Row; gap: Gap }) {
       <GapStrokes row={row} gap={gap} mirrored={hand === "left"} />
       <GapTokens tokens={tokens} />
       {row.warnings.length > 0 ? (
-        <span aria-hidden="true" className="inline-flex min-w-4 items-center gap-1 pl-1 text-warning">
+        <span
+          aria-hidden="true"
+          className="inline-flex min-w-4 shrink-999 items-center gap-1 pl-1 text-warning"
+        >
           <Octagon size={13} />
           <span className="truncate font-medium max-lg:hidden">{warningWords(row.warnings)}</span>
         </span>

@@ -41,6 +41,7 @@ export function sameBody(a: Row, b: Row): boolean {
       a.neck === b.neck &&
       (a.gap === null) === (b.gap === null) &&
       sameValue(a.retuned, b.retuned) &&
+      sameWords(a.wishes, b.wishes) &&
       sameValue(a.rules, b.rules) &&
       (a.gap !== null || sameValue(a.warnings, b.warnings)))
   );

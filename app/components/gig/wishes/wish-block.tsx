@@ -40,7 +40,7 @@ export function WishNumber({ field, label }: NumberFieldProps) {
       label={label}
       inputMode="numeric"
       className="tabular max-w-28"
-      wrapClass="flex-1 min-w-44"
+      wrapClass="flex-1 min-w-32"
     />
   );
 }
