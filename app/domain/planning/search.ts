@@ -31,7 +31,8 @@ import {
   tryBeam,
   tryChanges,
 } from "#app/domain/planning/run.ts";
-import { type SetSpace, setSpace } from "#app/domain/planning/set-space.ts";
+import type { SetLayout } from "#app/domain/planning/set-layout.ts";
+import { type SetBound, type SetSpace, setSpace } from "#app/domain/planning/set-space.ts";
 import { reasonsAtOnce } from "#app/domain/planning/why-infeasible.ts";
 
 /** Enough for a set of an evening: about a second. One is ten states or small changes looked at. */
@@ -97,29 +98,37 @@ function cheapSpace({ rules, problem }: Run, model: Model): SetSpace {
   return setSpace(model, rules, bound);
 }
 
+/** Bounds for a set of which only some songs may move: following the present order says most, and quickly. */
+function fewMovesBound(run: Run, model: Model, layout: SetLayout): SetBound {
+  const most = run.problem.maxMoved!;
+  const steps = sweepSteps(model, most);
+  const left = movesLeft(run.rules, layout, most);
+  const rounds = Math.min(MOST_ROUNDS, Math.floor(SWEEP_STEPS / steps));
+  if (rounds < FEWEST_ROUNDS) return left;
+  run.looks += (rounds * steps) / STEPS_PER_LOOK;
+  return greatest(left, keptOrderBound(model, layout, { target: run.best?.total ?? 0, rounds }));
+}
+
+/** Bounds for a set in any order. */
+function anyOrderBound(run: Run, model: Model, layout: SetLayout): SetBound {
+  const worth = (run.best?.total ?? 0) * WORTHWHILE_ENDING;
+  const bounds = [
+    partitionBound(model, run.rules, layout, "dear"),
+    lastSectionBound(model, run.rules, layout, worth),
+    jointBound(model, run.rules, layout),
+  ];
+  return greatest(...bounds.filter((bound) => bound !== null));
+}
+
 /** The space with all that is known about bounds. */
 function dearSpace(run: Run, whole: Model): SetSpace {
-  const { rules } = run;
-  const target = run.best?.total ?? 0;
-  const bound = overLooseCapos(whole, (model, layout) => {
-    const bounds = [partitionBound(model, rules, layout, "dear")];
-    const ending = lastSectionBound(model, rules, layout, target * WORTHWHILE_ENDING);
-    if (ending) bounds.push(ending);
-    const joint = jointBound(model, rules, layout);
-    if (joint) bounds.push(joint);
-    if (layout.limited) {
-      bounds.unshift(movesLeft(rules, layout, run.problem.maxMoved!));
-      const affordable = Math.floor(SWEEP_STEPS / sweepSteps(model, run.problem.maxMoved!));
-      const rounds = Math.min(MOST_ROUNDS, affordable);
-      if (rounds >= FEWEST_ROUNDS) {
-        bounds.push(keptOrderBound(model, layout, { target, rounds }));
-        run.looks += (rounds * sweepSteps(model, run.problem.maxMoved!)) / STEPS_PER_LOOK;
-      }
-    }
-    return greatest(...bounds);
-  });
-  const closer = overLooseCapos(whole, (model, layout) => partitionBound(model, rules, layout, "close"));
-  return setSpace(whole, rules, bound, closer);
+  const bound = overLooseCapos(whole, (model, layout) =>
+    (layout.limited ? fewMovesBound : anyOrderBound)(run, model, layout),
+  );
+  const closer = overLooseCapos(whole, (model, layout) =>
+    partitionBound(model, run.rules, layout, layout.limited ? "dear" : "close"),
+  );
+  return setSpace(whole, run.rules, bound, closer);
 }
 
 /**
