@@ -14,7 +14,7 @@ export type CapoBar = {
   endY: number | null;
 };
 
-/** Share of a row's height that a bar takes. */
+/** Share of a row's height that a bar takes; of the lowest row, since some have more to say. */
 const barShare = 0.42;
 
 /** Neighbouring covered strings as runs from edge to edge, half a string's distance wider on either side. */
@@ -57,6 +57,7 @@ export function capoBars(
   { tops, heights }: RibbonFrame,
 ): CapoBar[] {
   const bars: CapoBar[] = [];
+  const usual = Math.min(...heights);
   story.uses.forEach(({ row, capos }, use) => {
     const earlier = story.uses[use - 1]?.capos ?? [];
     capos.forEach((capo, place) => {
@@ -69,7 +70,7 @@ export function capoBars(
       while (staysOn()) last += 1;
       const top = tops[row] ?? 0;
       const height = heights[row] ?? 0;
-      const thick = height * barShare * (capos.length > 1 ? 0.8 : 1);
+      const thick = usual * barShare * (capos.length > 1 ? 0.8 : 1);
       const middle = top + (height * (place + 1)) / (capos.length + 1);
       const used = story.uses[last]?.row ?? row;
       const lastRow = (takenAfter(story, last, capo) ?? used + 1) - 1;

@@ -11,8 +11,8 @@ import type { Song } from "#app/domain/repertoire/song.ts";
 
 type Told = { entry: { id: string }; song: Song | null; guitar: Guitar | null; neck: Neck | null };
 
-/** Steps from the energy curve that a row is silent about; they count all the same. */
-const silent = 0.5;
+/** A row is silent about less than a whole step from the energy curve; it counts all the same. */
+const silent = 1;
 
 function ordinal(count: number): string {
   const teen = count % 100 > 10 && count % 100 < 14;
@@ -69,7 +69,9 @@ export function wishBreaches(
     const entryId = told.at(-1)?.entry.id;
     if (!wish || entryId === undefined) return [];
     const what = brokenWords(wish, told, { place: places.get(entryId) ?? 0, of: rows.length, naming });
-    return what === null ? [] : [{ entryId, message: `${what}, counts as ${tenth(seconds)} s.` }];
+    return what === null
+      ? []
+      : [{ entryId, message: `${what}, counts as ${Math.max(1, Math.round(seconds))} s.` }];
   });
 }
 

@@ -295,3 +295,68 @@ describe("always", () => {
     );
   });
 });
+
+describe("a capo that another guitar gives", () => {
+  const one = [{ id: "k", name: "Steel", strings: null, count: 1 }];
+  const ways: [string, "alder" | "birch"][] = [
+    ["EADGBE capo 2", "alder"],
+    ["DADGBE capo 4", "birch"],
+    ["EADGBE", "birch"],
+    ["EADGBE", "alder"],
+    ["EADGBE capo 1", "alder"],
+  ];
+  const songs = ways.map(([way], index) => song(`s${index}`, way));
+
+  function rowsWith(order: number[], changes: Parameters<typeof gigOf>[1] = {}): Row[] {
+    const placed = order.map((index) => ({ song: `s${index}`, guitar: ways[index]![1] }));
+    return planGig(gigOf([placed], changes), repertoireOf(songs, [alder, birch], one)).sets[0]!.rows;
+  }
+
+  test("of the guitar just played: the capo goes along", () => {
+    const [, row] = rowsWith([0, 1]);
+    // By hand: guitar 15, off 3, on 5, check 5 = 28; talk covers 12. Birch was prepared in drop D, without a capo.
+    expect(gapSentence(row!, "english")).toBe(
+      "Change to Birch. Take the capo off Alder. Capo on 4. About 28 s, 16 s longer than the talk covers.",
+    );
+    expect(gapTokens(row!, "english").map((token) => ("words" in token ? token.words : token.kind))).toEqual([
+      "swap",
+      "capo off Alder",
+      "capo on 4",
+    ]);
+    expect(stageWords(row!, "english")).toBe("take the capo with you, capo on 4");
+  });
+
+  test("of a guitar that rests: from whom", () => {
+    const rows = rowsWith([1, 3, 4]);
+    expect(gapSentence(rows[2]!, "english")).toBe(
+      "Take the capo off Birch. Capo on 1. About 13 s, 1 s longer than the talk covers.",
+    );
+    expect(stageWords(rows[2]!, "english")).toBe("capo from Birch, capo on 1");
+  });
+
+  test("with a tech: only what waits for the gap is the player's, the rest is ready", () => {
+    const deep = [
+      song("a", "EADGBE", { title: "Harrow" }),
+      song("b", "EADGBE capo 2", { title: "Copper" }),
+      song("c", "DADGAD capo 4", { title: "Slow Water" }),
+    ];
+    const gig = gigOf(
+      [
+        [
+          { song: "a", guitar: "birch" },
+          { song: "b", guitar: "alder" },
+          { song: "c", guitar: "birch" },
+        ],
+      ],
+      { crew: "tech", times: defaultTimes.tech },
+    );
+    const row = planGig(gig, repertoireOf(deep, [alder, birch], one)).sets[0]!.rows[2]!;
+    expect(row.gap).toMatchObject({ late: false, restsAfter: "Harrow", givers: [{ justPlayed: true }] });
+    // Three strings down 2 each and a check at the side: 3 × (8 + 2) + 5; off 3 and on 5 wait for the gap.
+    expect(gapSentence(row, "english")).toContain(
+      "The tech does 35 s of this at the side, once Harrow is over; 8 s are left for the stage.",
+    );
+    expect(gapTokens(row, "english").at(-1)).toEqual({ kind: "tech", words: "the rest at the side" });
+    expect(stageWords(row, "english")).toBe("take the capo with you, capo on 4");
+  });
+});

@@ -109,6 +109,33 @@ describe("a ribbon", () => {
     expect(capo?.endY).toBe(64 + 40 - 2);
   });
 
+  test("a capo that another guitar takes ends at the gap where it is taken, and begins anew when put on again", () => {
+    const one = [{ id: "k", name: "Steel", strings: null, count: 1 }];
+    const ways: [string, string][] = [
+      ["EADGBE capo 2", "alder"],
+      ["EADGBE", "birch"],
+      ["EADGBE capo 4", "birch"],
+      ["EADGBE capo 2", "alder"],
+    ];
+    const all = ways.map(([way], index) => song(`s${index}`, way));
+    const gig = gigOf([ways.map(([, on], index) => ({ song: `s${index}`, guitar: on }))]);
+    const bars = (capos: typeof one) => {
+      const rows = planGig(gig, repertoireOf(all, guitars, capos)).sets[0]!.rows;
+      return ribbonLanes(rows, guitars, frameFor(4)).map((lane) =>
+        lane.capos.map(({ fret, y1, endY }) => [fret, Math.floor(y1 / 64), endY]),
+      );
+    };
+    // Rows are 64 apart and 40 high. Alder rests with its capo during the second song; the gap into the third takes it.
+    expect(bars(one)).toEqual([
+      [
+        [2, 0, 64 + 40 - 2],
+        [2, 3, null],
+      ],
+      [[4, 2, null]],
+    ]);
+    expect(bars([{ ...one[0]!, count: 2 }])).toEqual([[[2, 0, 3 * 64 + 40 - 2]], [[4, 2, null]]]);
+  });
+
   test("mirrored for the left hand: the low string on the right", () => {
     const first = (lanes: RibbonLane[], string: number) =>
       lanes[0]?.strings.find((one) => one.string === string)?.pieces[0]?.x1 ?? Number.NaN;

@@ -27,7 +27,7 @@ export const TotalsBar = memo(function TotalsBar({ totals, clock, before }: Tota
       <Figure value={totals.swaps} change={against("swaps")} label="guitar changes" short="guitars" />
       {totals.wishes > 0 || (before && before.wishes > 0) ? (
         <div className="max-lg:hidden">
-          <Figure value={totals.wishes} unit="s" change={against("wishes")} label="broken wishes" />
+          <Figure value={totals.wishes} unit="s" change={against("wishes")} label="wishes" />
         </div>
       ) : null}
       <Figure

@@ -41,7 +41,7 @@ export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: 
 
 type RowTroublesProps = { troubles: readonly string[]; wishes: readonly string[] };
 
-/** What must be mended about a row, and the wishes it breaks, a line each. */
+/** What must be mended about a row, a line each, and the wishes it breaks. */
 export function RowTroubles({ troubles, wishes }: RowTroublesProps) {
   if (troubles.length + wishes.length === 0) return null;
   return (
@@ -49,11 +49,7 @@ export function RowTroubles({ troubles, wishes }: RowTroublesProps) {
       {troubles.map((message) => (
         <Warning key={message}>{message}</Warning>
       ))}
-      {wishes.map((message) => (
-        <p key={message} className="text-grey-800 text-sm leading-5">
-          {message}
-        </p>
-      ))}
+      {wishes.length > 0 ? <p className="text-grey-800 text-sm leading-5">{wishes.join(" ")}</p> : null}
     </div>
   );
 }

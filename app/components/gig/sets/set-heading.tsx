@@ -20,10 +20,10 @@ export function SetHeading({ gig, plan, alone, hasEncore, id }: SetHeadingProps)
       data-section={0}
       className="flex h-11 items-center gap-x-3 pl-3 lg:h-9 lg:pl-0"
     >
-      <h2 id={id} className="min-w-0 truncate font-semibold text-xl leading-none">
+      <h2 id={id} className="max-w-1/2 shrink-0 truncate font-semibold text-xl leading-none">
         {set.name}
       </h2>
-      <p className="tabular truncate text-base text-grey-600">
+      <p className="tabular line-clamp-2 text-grey-600 max-lg:text-sm max-lg:leading-tight lg:line-clamp-1">
         {from} to {to}, {formatDuration(plan.seconds)}
         {alone ? "" : `, ${Math.round(plan.totals.exposed)} s dead air`}
         {plan.totals.wishes > 0 ? `, wishes ${Math.round(plan.totals.wishes)} s` : ""}

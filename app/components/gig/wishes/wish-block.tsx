@@ -1,6 +1,6 @@
 import type { FieldMetadata } from "@conform-to/react";
 import type { ReactNode } from "react";
-import { TextField } from "#app/components/ui/field.tsx";
+import { Field, fieldIds } from "#app/components/ui/field.tsx";
 
 type WishBlockProps = {
   on: FieldMetadata<boolean | undefined>;
@@ -27,20 +27,28 @@ export function WishBlock({ on, title, children }: WishBlockProps) {
   );
 }
 
-type NumberFieldProps = { field: FieldMetadata<string | undefined>; label: string };
+type NumberFieldProps = { field: FieldMetadata<string | undefined>; label: string; unit: string };
 
-/** A number of a wish, beside its label. */
-export function WishNumber({ field, label }: NumberFieldProps) {
+/** A number of a wish with its unit. */
+export function WishNumber({ field, label, unit }: NumberFieldProps) {
+  const unitId = `${field.id}-unit`;
+  const wrong = field.errors?.length ? fieldIds(field.id).errorId : "";
   return (
-    <TextField
-      id={field.id}
-      name={field.name}
-      defaultValue={field.initialValue}
-      errors={field.errors}
-      label={label}
-      inputMode="numeric"
-      className="tabular max-w-28"
-      wrapClass="flex-1 min-w-32"
-    />
+    <Field id={field.id} label={label} errors={field.errors} className="min-w-32 flex-1">
+      <div className="flex items-center gap-2">
+        <input
+          id={field.id}
+          name={field.name}
+          defaultValue={field.initialValue}
+          inputMode="numeric"
+          aria-invalid={wrong ? true : undefined}
+          aria-describedby={`${unitId} ${wrong}`.trim()}
+          className="tabular min-h-11 w-16 rounded-sm border border-grey-400 bg-white px-3 text-base aria-[invalid=true]:border-2 aria-[invalid=true]:border-warning"
+        />
+        <span id={unitId} className="text-grey-600">
+          {unit}
+        </span>
+      </div>
+    </Field>
   );
 }

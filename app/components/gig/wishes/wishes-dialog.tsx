@@ -71,24 +71,24 @@ export function WishesDialog({ gig, songs, edit, onClose }: WishesDialogProps) {
       <form {...getFormProps(form)} className="flex flex-col">
         <WishBlock on={run.on} title="Not too many songs in a row in one tuning">
           <div className="flex flex-wrap gap-4">
-            <WishNumber field={run.most} label="At most, songs in a row" />
-            <WishNumber field={run.seconds} label="Each further one counts as, s" />
+            <WishNumber field={run.most} label="At most" unit="songs" />
+            <WishNumber field={run.seconds} label="Each further counts as" unit="s" />
           </div>
         </WishBlock>
         <WishBlock on={slow.on} title="No two slow songs together">
           <div className="flex flex-wrap gap-4">
-            <WishNumber field={slow.below} label="Slow is below, beats a minute" />
-            <WishNumber field={slow.seconds} label="Each time counts as, s" />
+            <WishNumber field={slow.below} label="Slow is below" unit="beats a minute" />
+            <WishNumber field={slow.seconds} label="Each time counts as" unit="s" />
           </div>
           <Unknown count={unknown.tempo} of={unknown.of} what="a tempo" so="are never slow" />
         </WishBlock>
         <WishBlock on={key.on} title="The same key not twice in a row">
-          <WishNumber field={key.seconds} label="Each time counts as, s" />
+          <WishNumber field={key.seconds} label="Each time counts as" unit="s" />
           <Unknown count={unknown.key} of={unknown.of} what="a key" so="go with any" />
         </WishBlock>
         <WishBlock on={energy.on} title="Energy follows a curve">
           <CurveField name={energy.curve.name} start={values.energy.curve.map(Number)} />
-          <WishNumber field={energy.seconds} label="Each step off the curve counts as, s" />
+          <WishNumber field={energy.seconds} label="Each step off counts as" unit="s" />
           <Unknown count={unknown.energy} of={unknown.of} what="an energy" so="may stand anywhere" />
         </WishBlock>
       </form>
