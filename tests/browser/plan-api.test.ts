@@ -10,8 +10,8 @@ import { signInAs } from "#tests/support/sign-in.ts";
 process.env.PLANNER_THREADS = "1";
 const app = useApp();
 
-/** One runs and so many wait, see planner-pool.server.ts. */
-const mostAtOnce = 13;
+/** More than run and wait at once, see planner-pool.server.ts. */
+const tooMany = 16;
 
 /** A set that takes the server far longer than any of these tests. */
 const endless = JSON.stringify(
@@ -83,26 +83,25 @@ test("what is no problem is refused with all that is wrong, what is too long at 
 test("a full queue says when to come back, and clients that go make room at once", async () => {
   const cookie = await member();
   const gone = new AbortController();
-  const waiting = Array.from({ length: mostAtOnce }, () =>
+  const refused: Response[] = [];
+  const waiting = Array.from({ length: tooMany }, () =>
     plan(cookie, endless, { signal: gone.signal, effort: 100_000_000 }).then(
-      (answer) => `answered ${answer.status}`,
+      (answer) => refused.push(answer),
       (error: Error) => error.name,
     ),
   );
-  const isFull = async () => {
-    const signal = AbortSignal.timeout(3_000);
-    const answer = await plan(cookie, endless, { effort: 100_000_000, signal }).catch(() => null);
-    return answer?.status ?? null;
-  };
-  await expect.poll(isFull, { timeout: 10_000 }).toBe(429);
-  const refused = await plan(cookie, endless, { effort: 100_000_000 });
-  expect(refused.status).toBe(429);
-  expect(Number(refused.headers.get("Retry-After"))).toBeGreaterThan(0);
-  expect((await refused.json()).message).toContain("Try again");
+  await expect.poll(() => refused.length, { timeout: 10_000 }).toBeGreaterThan(0);
+  for (const answer of refused) {
+    expect(answer.status).toBe(429);
+    expect(Number(answer.headers.get("Retry-After"))).toBeGreaterThan(0);
+    expect((await answer.json()).message).toContain("Try again");
+  }
 
   const began = performance.now();
   gone.abort();
-  expect(new Set(await Promise.all(waiting))).toEqual(new Set(["AbortError"]));
+  const ends = await Promise.all(waiting);
+  expect(ends.filter((end) => end === "AbortError")).toHaveLength(tooMany - refused.length);
+  expect(refused.length).toBeLessThan(tooMany / 2);
   const next = async () => (await plan(cookie, JSON.stringify(workedExample))).status;
   await expect.poll(next, { timeout: 10_000 }).toBe(200);
   // Had the thread gone on with what nobody waits for, this would have taken the 20 s that a plan may take.
