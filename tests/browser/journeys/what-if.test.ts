@@ -82,7 +82,7 @@ test("a tech: less dead air in the same order, used and undone", async () => {
   await asking.getByRole("radio", { name: "This order" }).check();
   const less = await deadAirIn(asking, "This order");
   expect(less).toBeLessThan(await deadAirIn(asking, "As planned"));
-  await asking.getByText(/^Proven: no choice of guitars needs less/).waitFor();
+  await asking.getByText(/^Proven: in this order, no choice of guitars needs less/).waitFor();
   await useAndUndo(page, asking, async () => {
     await expect.poll(() => deadAirOf(page)).toBe(less);
     await asking.getByRole("button", { name: "There is no tech" }).waitFor();

@@ -90,7 +90,7 @@ export function replannedOutcome(
     kind: freedom,
     ...restOutcome(of, now, { order, plays }),
     unplayable: of.rest.unplayable.map(title),
-    certainty: done ? certaintyOf(freedom, [job], known) : null,
+    certainty: done ? certaintyOf(of.gig, freedom, [{ name: "", problem: job.problem, answer }]) : null,
     done,
   };
   return { outcome, refused: [] };

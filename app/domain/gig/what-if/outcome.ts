@@ -1,20 +1,16 @@
 import { applyEdits } from "#app/domain/gig/apply-edit.ts";
-import { leastDeadAir } from "#app/domain/gig/certainty.ts";
+import { certaintyWords } from "#app/domain/gig/certainty.ts";
 import type { Edit } from "#app/domain/gig/edit.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { infeasibleWords } from "#app/domain/gig/infeasible-words.ts";
 import { type GigPlan, planGig, type SetPlan } from "#app/domain/gig/plan.ts";
 import { isFound, suggestionEdits } from "#app/domain/gig/suggest.ts";
 import { type Needs, needsOf } from "#app/domain/gig/what-if/needs.ts";
-import {
-  type Freedom,
-  type Job,
-  jobOf,
-  type Known,
-  type Supposed,
-} from "#app/domain/gig/what-if/supposed.ts";
+import { type Freedom, jobOf, type Known, type Supposed } from "#app/domain/gig/what-if/supposed.ts";
 import { changeWords, newStrain, nowUnplayable, titlesOf } from "#app/domain/gig/what-if/what-changes.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
+import type { FoundAnswer } from "#app/domain/planning/answer.ts";
+import type { Problem } from "#app/domain/planning/problem.ts";
 
 /** One answer to a question, beside the plan as it stands. */
 export type Outcome = {
@@ -94,30 +90,24 @@ export function asItIs(asked: Asked): Outcome {
   };
 }
 
-const provenWords: Record<Freedom, string> = {
-  "same-order": "Proven: no choice of guitars needs less in this order.",
-  "any-order": "Proven: no order needs less.",
-};
+/** One answered problem and the name of its set. */
+export type Answered = { name: string; problem: Problem; answer: FoundAnswer };
 
-/** How sure it is that nothing needs less, of the sets together. */
-export function certaintyOf(
-  freedom: Freedom,
-  jobs: readonly Pick<Job, "key" | "problem">[],
-  known: ReadonlyMap<string, Known>,
-): string {
-  let less = 0;
-  let proven = true;
-  for (const { key, problem } of jobs) {
-    const { answer, bound = 0 } = known.get(key) ?? {};
-    if (!answer || !isFound(answer) || answer.status === "optimal") continue;
-    proven = false;
-    less += answer.totals.exposed - leastDeadAir(problem, Math.max(bound, answer.bound));
-  }
-  if (proven) return provenWords[freedom];
-  const seconds = Math.ceil(less - 1e-6);
-  return seconds > 0
-    ? `Not proven: at most ${seconds} s less is possible.`
-    : "Not proven: no less dead air is possible, fewer strings or changes may be.";
+/**
+ * How sure it is that nothing needs less, by what the gig looks at first: one sentence, or one for each set where they
+ * differ.
+ * @example certaintyOf(gig, "any-order", answered) // "Set 1, proven: no order needs less dead air. Set 2, not proven: …"
+ */
+export function certaintyOf(gig: Pick<Gig, "aim">, freedom: Freedom, answered: readonly Answered[]): string {
+  const told = answered.map(({ name, problem, answer }) => ({
+    name,
+    words: certaintyWords(problem, answer, freedom, gig.aim.kind),
+  }));
+  const different = new Set(told.map(({ words }) => words));
+  if (different.size <= 1) return told[0]?.words ?? "";
+  return told
+    .map(({ name, words }) => `${name}, ${words.charAt(0).toLowerCase()}${words.slice(1)}`)
+    .join(" ");
 }
 
 /** What was found with a freedom so far. `refused`: why there is no order at all; null: nothing is known yet. */
@@ -135,12 +125,14 @@ export function foundOutcome(asked: Asked, freedom: Freedom, known: ReadonlyMap<
   );
   const jobs = sets.map((set) => jobOf(set, set.problem.songs.length > 1 ? freedom : "same-order"));
   const edits: Edit[] = [];
+  const answered: Answered[] = [];
   for (const [index, set] of sets.entries()) {
     const answer = known.get(jobs[index]!.key)?.answer;
     if (!answer) return { outcome: null, refused: [] };
     if (!isFound(answer))
       return { outcome: null, refused: infeasibleWords(supposed.gig, set, answer, supposed.repertoire) };
     edits.push(...suggestionEdits(supposed.gig, set, answer));
+    answered.push({ name: set.set.name, problem: jobs[index]!.problem, answer });
   }
   const applied = applyEdits(supposed.gig, edits);
   if (!applied.ok) return { outcome: null, refused: [applied.conflict.message] };
@@ -149,7 +141,7 @@ export function foundOutcome(asked: Asked, freedom: Freedom, known: ReadonlyMap<
     kind: freedom,
     ...told(asked, planGig(applied.gig, supposed.repertoire, naming)),
     edits: [...supposed.edits, ...edits],
-    certainty: done ? certaintyOf(freedom, jobs, known) : null,
+    certainty: done ? certaintyOf(supposed.gig, freedom, answered) : null,
     done,
   };
   return { outcome, refused: [] };
