@@ -1,3 +1,4 @@
+import { setTimeout as wait } from "node:timers/promises";
 import { type Browser, chromium, type Page } from "playwright-core";
 import { getDb } from "#app/services/db.server.ts";
 import { makeAct } from "#tests/support/factories.ts";
@@ -13,22 +14,32 @@ const sizes = [12, 60];
 const sweep = 8;
 const moves = 48;
 
-/** Moves the pointer, and marks in the trace when the page has painted what came of it. */
-async function move(page: Page, x: number, y: number): Promise<void> {
-  await page.mouse.move(x, y);
-  await page.evaluate(
-    () =>
-      new Promise<void>((done) => {
+/**
+ * Has the page mark in the trace when it has painted what came of a move: the frame that a move comes with begins with
+ * it, so two frames on it is painted and what was left for after it is done.
+ */
+async function markPaints(page: Page): Promise<void> {
+  await page.evaluate(() => {
+    document.addEventListener("pointermove", () =>
+      requestAnimationFrame(() =>
         requestAnimationFrame(() =>
-          requestAnimationFrame(() =>
-            setTimeout(() => {
-              performance.mark("painted");
-              done();
-            }),
-          ),
-        );
-      }),
-  );
+          setTimeout(() => {
+            performance.mark("painted");
+          }),
+        ),
+      ),
+    );
+  });
+}
+
+/** So long nothing is asked of the page after a move, since answering is work too. */
+const quietMilliseconds = 80;
+
+/** Moves the pointer, leaves the page alone, and answers once it has marked its paint. */
+async function move(page: Page, x: number, y: number, marks: number): Promise<void> {
+  await page.mouse.move(x, y);
+  await wait(quietMilliseconds);
+  await page.waitForFunction((count) => performance.getEntriesByName("painted").length === count, marks);
 }
 
 /** The place at which a row stands now, 0 first. */
@@ -74,12 +85,13 @@ async function dragAbout(browser: Browser, page: Page, songs: number, step: numb
   await page.mouse.move(x, y, { steps: 8 });
   let place = await placeOf(page, entryId);
   await settled(page);
+  await markPaints(page);
   await browser.startTracing(page, { categories: traceCategories });
   for (let made = 0; made < moves; made += 1) {
     const by = Math.floor((made * step) / sweep) % 2 === 0 ? step : -step;
     y += by * pitch;
     place += by;
-    await move(page, x, y);
+    await move(page, x, y, made + 1);
     const stands = await placeOf(page, entryId);
     if (stands !== place) throw new Error(`The row stands at ${stands}, not at ${place}`);
   }

@@ -71,7 +71,7 @@ export function LiveGig({ desk, kept, repertoire, reader, children }: LiveGigPro
             {plan.sets.map((setPlan, index) => (
               <SetBlock
                 key={setPlan.set.id}
-                gig={gig}
+                gig={edits.gig}
                 plan={setPlan}
                 first={index === 0}
                 allParts={parts}
@@ -83,7 +83,7 @@ export function LiveGig({ desk, kept, repertoire, reader, children }: LiveGigPro
               />
             ))}
           </RowGrips>
-          {may.plan ? <AddSet gig={gig} /> : null}
+          {may.plan ? <AddSet gig={edits.gig} /> : null}
           {plan.note ? <p className="px-4 pt-3 text-grey-600 lg:px-0">{plan.note}</p> : null}
         </div>
         {children}

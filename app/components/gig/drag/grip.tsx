@@ -90,6 +90,9 @@ const accessibility = {
 const nowhere = { top: 0, right: 0, bottom: 0, left: 0, width: 0, height: 0 };
 const measuring = { draggable: { measure: () => nowhere } };
 
+/** Where the row would go is worked out elsewhere. */
+const noCollisions = () => [];
+
 const pointerOptions = { activationConstraint: { distance: 4 } };
 
 type DragListenerProps = { press: RefObject<Grip["press"]>; latest: RefObject<DragHandlers> };
@@ -118,6 +121,7 @@ const DragListener = memo(function DragListener({ press, latest }: DragListenerP
       sensors={sensors}
       accessibility={accessibility}
       measuring={measuring}
+      collisionDetection={noCollisions}
       onDragStart={({ activatorEvent }: DragStartEvent) => latest.current.start(held.current, activatorEvent)}
       onDragEnd={() => latest.current.end()}
       onDragCancel={() => latest.current.cancel()}

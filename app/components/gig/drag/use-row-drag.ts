@@ -124,7 +124,10 @@ export function useRowDrag({ list, onStart, onPlace, onDrop, onCancel }: RowDrag
       const slot = slotOf(on, now.entryId) + by;
       if (slot < 1 || slot > slotCount(on)) return;
       put({ ...now, place: placeOfSlot(on, now.entryId, slot) });
-      rowOf(list.current, now.entryId)?.scrollIntoView({ block: "nearest" });
+      const row = rowOf(list.current, now.entryId);
+      row?.scrollIntoView({ block: "nearest" });
+      // A row that goes into another section is made anew there.
+      row?.querySelector<HTMLElement>("[data-handle]")?.focus({ preventScroll: true });
     },
     end() {
       const last = finish();

@@ -69,7 +69,7 @@ export function GigHeader(props: GigHeaderProps) {
       <div className="order-2 hidden items-center justify-end gap-2 lg:ml-auto lg:flex min-[85rem]:order-3">
         {history ? (
           <>
-            <span className="mr-2 text-grey-600">
+            <span className="text-grey-600">
               <SaveState {...save} />
             </span>
             <HistoryButtons {...history} />

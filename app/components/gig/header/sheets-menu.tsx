@@ -1,4 +1,5 @@
 import { Menu } from "@base-ui/react/menu";
+import { memo } from "react";
 import { buttonClass } from "#app/components/ui/button.tsx";
 import { MenuLink, MenuPopup } from "#app/components/ui/menu.tsx";
 
@@ -10,7 +11,8 @@ const papers = [
 ] as const;
 
 /** What can be printed of a gig. Without JavaScript it is a link to the stage sheet. */
-export function SheetsMenu({ gigId, paper, pending, className = "" }: SheetsMenuProps) {
+export const SheetsMenu = memo(function SheetsMenu(props: SheetsMenuProps) {
+  const { gigId, paper, pending, className = "" } = props;
   const address = `/gigs/${gigId}/stage-sheet.pdf`;
   const sorted = papers.toSorted((a, b) => Number(b.paper === paper) - Number(a.paper === paper));
   return (
@@ -37,4 +39,4 @@ export function SheetsMenu({ gigId, paper, pending, className = "" }: SheetsMenu
       </MenuPopup>
     </Menu.Root>
   );
-}
+});

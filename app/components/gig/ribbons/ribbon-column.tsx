@@ -1,4 +1,4 @@
-import { useMemo, useState } from "react";
+import { useCallback, useLayoutEffect, useMemo, useRef, useState } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { Ribbon, ribbonWords } from "#app/components/gig/ribbons/ribbon.tsx";
 import { RibbonHead } from "#app/components/gig/ribbons/ribbon-head.tsx";
@@ -46,9 +46,16 @@ export function RibbonColumn({ plan, guitars, boxes }: RibbonColumnProps) {
       }),
     [plan.rows, guitars, boxes, laneWidth, hand, opened],
   );
-  const sentences = useMemo(
-    () => new Map(plan.rows.map((row) => [row.entry.id, gapSentence(row, naming)])),
-    [plan.rows, naming],
+  const rows = useRef(plan.rows);
+  useLayoutEffect(() => {
+    rows.current = plan.rows;
+  });
+  const tell = useCallback(
+    (entryId: string) => {
+      const row = rows.current.find((one) => one.entry.id === entryId);
+      return row ? gapSentence(row, naming) : "";
+    },
+    [naming],
   );
   const width = lanes.reduce((sum, lane) => sum + lane.width, 0);
   const toggle = (guitarId: string) =>
@@ -69,7 +76,7 @@ export function RibbonColumn({ plan, guitars, boxes }: RibbonColumnProps) {
         className="absolute inset-0 overflow-visible font-display"
       >
         {lanes.map((lane) => (
-          <Ribbon key={lane.guitar.id} lane={lane} sentences={sentences} />
+          <Ribbon key={lane.guitar.id} lane={lane} tell={tell} />
         ))}
       </svg>
     </div>

@@ -4,7 +4,11 @@ import type { Knot, RibbonLane, RibbonString } from "#app/domain/gig/ribbon.ts";
 import type { CapoBar } from "#app/domain/gig/ribbon-capos.ts";
 import type { StepLabel } from "#app/domain/gig/ribbon-labels.ts";
 
-type RibbonProps = { lane: RibbonLane; sentences: ReadonlyMap<string, string> };
+type RibbonProps = {
+  lane: RibbonLane;
+  /** What happens in the gap into an entry. The same function for as long as the page is open. */
+  tell: (entryId: string) => string;
+};
 
 /**
  * What a ribbon shows, for those who hear it.
@@ -21,8 +25,8 @@ export function ribbonWords(lane: RibbonLane): string {
   return `${lane.guitar.name}: ${retuned}${capos > 0 ? `, capo put on ${capos === 1 ? "once" : `${capos} times`}` : ""}`;
 }
 
-/** One guitar's strings through the set. */
-export const Ribbon = memo(function Ribbon({ lane, sentences }: RibbonProps) {
+/** One guitar's strings through the set. Marks are known by where they stand, so that most stay when a row is moved. */
+export const Ribbon = memo(function Ribbon({ lane, tell }: RibbonProps) {
   return (
     <g transform={`translate(${lane.x} 0)`}>
       {lane.strings.map((string) => (
@@ -32,14 +36,22 @@ export const Ribbon = memo(function Ribbon({ lane, sentences }: RibbonProps) {
         <CapoShape key={`${capo.y1}/${capo.fret}/${capo.runs[0]?.x1}`} capo={capo} />
       ))}
       {lane.labels.map((label) => (
-        <StepMark key={`${label.entryId}/${label.string}`} label={label} />
+        <StepMark
+          key={`${label.x}/${label.y}`}
+          direction={label.direction}
+          semitones={label.semitones}
+          x={label.x}
+          y={label.y}
+        />
       ))}
       {lane.knots.map((knot) => (
         <KnotArea
-          key={knot.entryId}
-          knot={knot}
+          key={knot.y1}
+          entryId={knot.entryId}
+          y1={knot.y1}
+          y2={knot.y2}
           width={lane.width}
-          sentence={sentences.get(knot.entryId) ?? ""}
+          tell={tell}
         />
       ))}
     </g>
@@ -48,48 +60,42 @@ export const Ribbon = memo(function Ribbon({ lane, sentences }: RibbonProps) {
 
 const rounded = (value: number) => Math.round(value * 10) / 10;
 
-function pathOf(string: RibbonString, take: (piece: RibbonString["pieces"][number]) => boolean): string {
-  return string.pieces
-    .filter(take)
-    .map(({ x1, y1, x2, y2 }) => `M${rounded(x1)} ${rounded(y1)}L${rounded(x2)} ${rounded(y2)}`)
-    .join("");
+type Look = "rest" | "played" | "up" | "down";
+
+const colours: Record<Look, string> = {
+  rest: "stroke-grey-300",
+  played: "stroke-ink",
+  up: "stroke-up",
+  down: "stroke-down",
+};
+
+/** What of a string looks alike, as one path each; looks that it has nowhere are left out. */
+function pathsOf(string: RibbonString): [Look, string][] {
+  const paths = new Map<Look, string>();
+  for (const { x1, y1, x2, y2, active, step } of string.pieces) {
+    const look = step ?? (active ? "played" : "rest");
+    const line = `M${rounded(x1)} ${rounded(y1)}L${rounded(x2)} ${rounded(y2)}`;
+    paths.set(look, (paths.get(look) ?? "") + line);
+  }
+  return [...paths].sort(([a], [b]) => drawnFirst.indexOf(a) - drawnFirst.indexOf(b));
 }
 
+const drawnFirst: readonly Look[] = ["rest", "played", "up", "down"];
+
 /** A string: full where the guitar is played, thinned where it rests, coloured where it steps. */
-export const StringLine = memo(function StringLine({
-  string,
-  folded,
-}: {
-  string: RibbonString;
-  folded: boolean;
-}) {
-  return (
-    <g fill="none">
-      <path
-        d={pathOf(string, (piece) => piece.step === null && !piece.active)}
-        className="stroke-grey-300"
-        strokeWidth={folded ? 1.2 : Math.max(0.7, string.weight * 0.4)}
-      />
-      <path
-        d={pathOf(string, (piece) => piece.step === null && piece.active)}
-        className="stroke-ink"
-        strokeWidth={string.weight}
-      />
-      <path
-        d={pathOf(string, (piece) => piece.step === "up")}
-        className="stroke-up"
-        strokeWidth={string.weight}
-        strokeLinecap="round"
-      />
-      <path
-        d={pathOf(string, (piece) => piece.step === "down")}
-        className="stroke-down"
-        strokeWidth={string.weight}
-        strokeLinecap="round"
-      />
-    </g>
-  );
-});
+export function StringLine({ string, folded }: { string: RibbonString; folded: boolean }) {
+  const thinned = folded ? 1.2 : Math.max(0.7, string.weight * 0.4);
+  return pathsOf(string).map(([look, path]) => (
+    <path
+      key={look}
+      d={path}
+      fill="none"
+      className={colours[look]}
+      strokeWidth={look === "rest" ? thinned : string.weight}
+      strokeLinecap={look === "up" || look === "down" ? "round" : undefined}
+    />
+  ));
+}
 
 /** A capo: a brass bar over the covered strings with its fret, and a frame down to the last song it stays on for. */
 function CapoShape({ capo }: { capo: CapoBar }) {
@@ -125,8 +131,12 @@ function CapoShape({ capo }: { capo: CapoBar }) {
 }
 
 /** A triangle and the semitones beside a step. */
-function StepMark({ label }: { label: StepLabel }) {
-  const { direction, semitones, x, y } = label;
+const StepMark = memo(function StepMark({
+  direction,
+  semitones,
+  x,
+  y,
+}: Omit<StepLabel, "entryId" | "string">) {
   const tip = direction === "up" ? `M${x} ${y + 3.5}l4-7l4 7z` : `M${x} ${y - 3.5}l4 7l4-7z`;
   return (
     <g className={direction === "up" ? "fill-up" : "fill-down"}>
@@ -144,21 +154,23 @@ function StepMark({ label }: { label: StepLabel }) {
       </text>
     </g>
   );
-}
+});
+
+type KnotAreaProps = Pick<Knot, "entryId" | "y1" | "y2"> & { width: number } & Pick<RibbonProps, "tell">;
 
 /** Where a knot can be pointed at. The gap line beside it says the same to a keyboard. */
-function KnotArea({ knot, width, sentence }: { knot: Knot; width: number; sentence: string }) {
+const KnotArea = memo(function KnotArea({ entryId, y1, y2, width, tell }: KnotAreaProps) {
   const { show, hide } = usePointAt();
-  const point = (anchor: Element) => show({ key: knot.entryId, sentence, anchor });
+  const point = (anchor: Element) => show({ key: entryId, sentence: tell(entryId), anchor });
   return (
     <rect
       x={0}
-      y={knot.y1 - 3}
+      y={y1 - 3}
       width={width}
-      height={knot.y2 - knot.y1 + 6}
+      height={y2 - y1 + 6}
       fill="transparent"
       onPointerEnter={(event) => point(event.currentTarget)}
-      onPointerLeave={() => hide(knot.entryId)}
+      onPointerLeave={() => hide(entryId)}
     />
   );
-}
+});

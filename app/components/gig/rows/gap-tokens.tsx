@@ -19,17 +19,13 @@ function Turn({
   );
 }
 
-export function Triangle({ direction }: { direction: "up" | "down" }) {
+/** Drawn by borders: there are hundreds on a page, and each SVG would be a picture of its own for the browser to place. */
+function Triangle({ direction }: { direction: "up" | "down" }) {
   return (
-    <svg
-      width="11"
-      height="9"
-      viewBox="0 0 11 9"
+    <span
       aria-hidden="true"
-      className={`mx-px inline-block ${direction === "up" ? "text-up" : "text-down"}`}
-    >
-      <path d={direction === "up" ? "M5.500 0L11 9H0z" : "M0 0h11L5.500 9z"} fill="currentColor" />
-    </svg>
+      className={`mx-px inline-block size-0 border-x-[5.5px] border-x-transparent forced-color-adjust-none ${direction === "up" ? "border-b-9 border-b-up" : "border-t-9 border-t-down"}`}
+    />
   );
 }
 

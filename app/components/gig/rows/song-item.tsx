@@ -35,7 +35,7 @@ function SongItemOnce({ row, order, set, first, last, troubles, dragged }: SongI
   return (
     <li
       style={order === null ? undefined : { order }}
-      className={`relative isolate ${dragged === "pointer" ? "opacity-35" : ""} ${dragged === "keys" ? "z-10" : ""}`}
+      className={`relative contain-layout contain-style ${dragged === "pointer" ? "opacity-35" : ""} ${dragged === "keys" ? "z-10" : ""}`}
     >
       {row.gap ? <GapRow row={row} gap={row.gap} /> : null}
       <div

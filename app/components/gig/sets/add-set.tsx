@@ -1,4 +1,5 @@
 import { nanoid } from "nanoid";
+import { memo } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { Button } from "#app/components/ui/button.tsx";
 import type { Gig } from "#app/domain/gig/gig.ts";
@@ -9,7 +10,7 @@ import { rankBetween, setsOf } from "#app/domain/gig/order.ts";
 const usualInterval = 1200;
 
 /** Adds another set after the last one. */
-export function AddSet({ gig }: { gig: Gig }) {
+export const AddSet = memo(function AddSet({ gig }: { gig: Gig }) {
   const { edit } = usePageTools();
   const add = () => {
     const last = setsOf(gig).at(-1);
@@ -28,4 +29,4 @@ export function AddSet({ gig }: { gig: Gig }) {
       </Button>
     </div>
   );
-}
+});

@@ -14,6 +14,7 @@ import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
 
 type SetBlockProps = {
+  /** As it is kept: of it the block needs what a drag does not change. */
   gig: Gig;
   plan: SetPlan;
   first: boolean;

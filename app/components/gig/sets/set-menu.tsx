@@ -1,5 +1,6 @@
 import { Menu } from "@base-ui/react/menu";
 import { Ellipsis } from "lucide-react";
+import { memo } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { MenuCheck, MenuItem, MenuLine, MenuPopup } from "#app/components/ui/menu.tsx";
 import type { Edit } from "#app/domain/gig/edit.ts";
@@ -9,7 +10,7 @@ import { entriesOf } from "#app/domain/gig/order.ts";
 type SetMenuProps = { set: GigSet; gig: Gig; hasEncore: boolean };
 
 /** What can be done with a whole set. */
-export function SetMenu({ set, gig, hasEncore }: SetMenuProps) {
+export const SetMenu = memo(function SetMenu({ set, gig, hasEncore }: SetMenuProps) {
   const { edit, openDialog, showEncore } = usePageTools();
   const remove = () => {
     const songs: Edit[] = entriesOf(gig, set.id).map((entry) => ({
@@ -65,4 +66,4 @@ export function SetMenu({ set, gig, hasEncore }: SetMenuProps) {
       </MenuPopup>
     </Menu.Root>
   );
-}
+});

@@ -58,6 +58,11 @@ function Between({ tolerance, ...props }: QuestionProps & { tolerance: number })
           figure: signedSeconds(now, one.needs.exposed),
         }))}
       />
+      {gig.wishes.length > 0 ? (
+        <p className="text-grey-600 text-sm leading-snug">
+          Found by what hands must do, then weighed with your wishes.
+        </p>
+      ) : null}
       <Changed key={keyOf(change)} {...props} change={change} />
     </>
   );
