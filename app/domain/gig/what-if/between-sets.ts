@@ -21,6 +21,9 @@ export type SetChange = {
 /** As many changes are offered. */
 const offered = 5;
 
+/** So many of the best are weighed again with what is wished of the sets, which the scores leave out. */
+const weighedWithWishes = 60;
+
 /** Before which song of its new set a song comes, as an index among all that stand in the main part there. */
 function indexIn(gig: Gig, { plan, index }: Coming, leaving: ReadonlySet<string>): number {
   const follows = plan.problem.order.filter((id) => !leaving.has(id))[index];
@@ -81,7 +84,8 @@ function allowed(now: GigPlan, then: GigPlan, tolerance: number): boolean {
 
 /**
  * The moves of one song to another set, and the exchanges of two, that need least; the best first. Exact over both, with
- * all other songs where and as they are.
+ * all other songs where and as they are. Where a gig has wishes they are found without them, and then the best of them
+ * are weighed with the wishes.
  * @param tolerance seconds by which a set may become longer than it is now
  * @example betweenSets(gig, plan, repertoire, 300)[0].goes // [{ title: "Slow Water", to: "Set 2", … }]
  */
@@ -89,9 +93,10 @@ export function betweenSets(gig: Gig, plan: GigPlan, repertoire: Repertoire, tol
   if (plan.sets.length < 2) return [];
   const scores = songScores(plan.sets);
   const now = needsOf(plan.sets);
+  const enough = gig.wishes.length > 0 ? weighedWithWishes : offered;
   const changes: SetChange[] = [];
   for (const candidate of setChanges(gig, plan, scores)) {
-    if (changes.length === offered) break;
+    if (changes.length === enough) break;
     const made = moved(gig, plan, scores, candidate);
     if (!made) continue;
     const then = planGig(made.gig, repertoire);
@@ -113,5 +118,5 @@ export function betweenSets(gig: Gig, plan: GigPlan, repertoire: Repertoire, tol
       supposed: { gig: made.gig, repertoire, edits: made.edits, setIds: [...new Set([...setIds, ...into])] },
     });
   }
-  return changes.toSorted((a, b) => a.needs.total - b.needs.total);
+  return changes.toSorted((a, b) => a.needs.total - b.needs.total).slice(0, offered);
 }
