@@ -2,12 +2,11 @@ import type { Answer, Reason } from "#app/domain/planning/answer.ts";
 import { answerOf } from "#app/domain/planning/answer-of.ts";
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
-import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
-import { sweepSteps } from "#app/domain/planning/bounds/kept-order-part.ts";
 import { lastSectionBound } from "#app/domain/planning/bounds/last-section-bound.ts";
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
+import { fewMayMove, fewMovesSpace, planFewMoves } from "#app/domain/planning/few-moves.ts";
 import { fixedOrderSpace, onlyOrder, planInOrder, spaceInOrder } from "#app/domain/planning/fixed-order.ts";
 import { keptCases } from "#app/domain/planning/kept-cases.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
@@ -47,10 +46,6 @@ const CHEAP_LOOKS = 60_000;
 
 /** What is tried before the tunings that kept guitars may have are told apart. */
 const WHOLE_LOOKS = 300_000;
-const MOST_ROUNDS = 60;
-const FEWEST_ROUNDS = 10;
-const SWEEP_STEPS = 100_000_000;
-const STEPS_PER_LOOK = 150;
 
 /** Share of the best total so far that the last section must cost by itself to be looked at by itself. */
 const WORTHWHILE_ENDING = 0.1;
@@ -89,6 +84,14 @@ function undecided({ order }: Problem): Reason {
   return { code: "rules", songs: [...order], message };
 }
 
+/** The best plan there is; or why there is none. */
+function lastWord({ problem, plan, floor }: Run): Answer {
+  if (plan) return answerOf(problem, plan, floor);
+  const decided = floor === Number.POSITIVE_INFINITY;
+  const why = decided ? ruleConflict(problem, CONFLICT_LOOKS) : undecided(problem);
+  return { status: "infeasible", why: [why] };
+}
+
 /** The space with bounds that are made in no time. */
 function cheapSpace({ rules, problem }: Run, model: Model): SetSpace {
   const bound = overLooseCapos(model, (plain, layout) => {
@@ -96,17 +99,6 @@ function cheapSpace({ rules, problem }: Run, model: Model): SetSpace {
     return layout.limited ? greatest(movesLeft(rules, layout, problem.maxMoved!), shared) : shared;
   });
   return setSpace(model, rules, bound);
-}
-
-/** Bounds for a set of which only some songs may move: following the present order says most, and quickly. */
-function fewMovesBound(run: Run, model: Model, layout: SetLayout): SetBound {
-  const most = run.problem.maxMoved!;
-  const steps = sweepSteps(model, most);
-  const left = movesLeft(run.rules, layout, most);
-  const rounds = Math.min(MOST_ROUNDS, Math.floor(SWEEP_STEPS / steps));
-  if (rounds < FEWEST_ROUNDS) return left;
-  run.looks += (rounds * steps) / STEPS_PER_LOOK;
-  return greatest(left, keptOrderBound(model, layout, { target: run.best?.total ?? 0, rounds }));
 }
 
 /** Bounds for a set in any order. */
@@ -123,11 +115,11 @@ function anyOrderBound(run: Run, model: Model, layout: SetLayout): SetBound {
 /** The space with all that is known about bounds. */
 function dearSpace(run: Run, whole: Model): SetSpace {
   const bound = overLooseCapos(whole, (model, layout) =>
-    (layout.limited ? fewMovesBound : anyOrderBound)(run, model, layout),
+    layout.limited
+      ? greatest(movesLeft(run.rules, layout, run.problem.maxMoved!), anyOrderBound(run, model, layout))
+      : anyOrderBound(run, model, layout),
   );
-  const closer = overLooseCapos(whole, (model, layout) =>
-    partitionBound(model, run.rules, layout, layout.limited ? "dear" : "close"),
-  );
+  const closer = overLooseCapos(whole, (model, layout) => partitionBound(model, run.rules, layout, "close"));
   return setSpace(whole, run.rules, bound, closer);
 }
 
@@ -161,12 +153,18 @@ export function* search(
     ? spaceInOrder(model, only)
     : fixed
       ? fixedOrderSpace(model, rules)
-      : cheapSpace(run, model);
+      : fewMayMove(run)
+        ? fewMovesSpace(run, 0)
+        : cheapSpace(run, model);
 
   yield* firstPlans(run, space, looks);
   if (!run.plan) {
     const conflict = anyPlan(run);
     if (conflict) return { status: "infeasible", why: [conflict] };
+  }
+  if (!fixed && fewMayMove(run)) {
+    yield* planFewMoves(run, looks);
+    return lastWord(run);
   }
   const inOneGo = small || fixed;
   yield* prove(
@@ -190,10 +188,5 @@ export function* search(
       yield* prove(run, cases, looks, true);
     }
   }
-  if (run.plan) return answerOf(problem, run.plan, run.floor);
-  const decided = run.floor === Number.POSITIVE_INFINITY;
-  return {
-    status: "infeasible",
-    why: [decided ? ruleConflict(problem, CONFLICT_LOOKS) : undecided(problem)],
-  };
+  return lastWord(run);
 }

@@ -108,7 +108,7 @@ export function setSpace(
     }
     const skipped = moved + leftBehind(state, kept, song);
     if (skipped <= maxMoved) play(state, depth, song, song + 1, skipped, false, child, emit);
-    if (moved + 1 <= maxMoved) play(state, depth, song, kept, moved + 1, true, child, emit);
+    if (song > kept && moved + 1 <= maxMoved) play(state, depth, song, kept, moved + 1, true, child, emit);
   }
 
   function expand(

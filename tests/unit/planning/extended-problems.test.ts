@@ -172,7 +172,7 @@ test("along every prefix of a plan proven optimal, the bound is at most what rem
       const bounds = [partitionBound(plain, rules, layout, "dear")];
       const joint = jointBound(plain, rules, layout);
       if (joint) bounds.push(joint);
-      if (layout.limited) bounds.push(keptOrderBound(plain, layout, { target: 0, rounds: 20 }));
+      if (layout.limited) bounds.push(keptOrderBound(plain, rules, layout, { target: null, rounds: 20 }));
       return greatest(...bounds);
     });
     prefixes += expectBelow(setSpace(model, rules, all), `seed ${seed}`);

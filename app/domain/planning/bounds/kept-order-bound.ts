@@ -1,75 +1,94 @@
-import { keptOrderPart } from "#app/domain/planning/bounds/kept-order-part.ts";
+import { HELD, INSERTED, OPENED, RESTING } from "#app/domain/planning/bounds/kept-order-part.ts";
+import { keptOrderPrices, startingValue } from "#app/domain/planning/bounds/kept-order-prices.ts";
 import type { Model } from "#app/domain/planning/model.ts";
-import { raisePrices } from "#app/domain/planning/search/raise-prices.ts";
-import { isPlayed, type SetLayout } from "#app/domain/planning/set-layout.ts";
+import type { OrderRules } from "#app/domain/planning/order-rules.ts";
+import type { SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
+
+/** Numbers of the songs whose bit is set in a word, from `base` on. */
+function eachBit(word: number, base: number, visit: (song: number) => void): void {
+  for (let left = word; left !== 0; left &= left - 1) visit(base + 31 - Math.clz32(left & -left));
+}
 
 /**
  * For a set of which only some songs may leave the present order: each guitar goes through the present order for itself
- * and chooses which songs to play at their places, which to insert elsewhere and which to pass over, at a price that
- * every song pays to whoever plays it and one that every insertion costs.
+ * and chooses which songs to play at their places, which to insert in other slots and which to pass over.
  *
- * Why it bounds: in a real plan each song is played by exactly one guitar, so the song prices cancel. A song that moved is
- * inserted by one guitar, so there are at most as many insertions as songs may still move, and the insertion prices paid
- * are no more than what is taken off for them. What one guitar does in the plan is one of its choices: songs of others
- * are left to them (then it is no longer in hand), songs that moved are passed over, no more than may move. What a gap
- * costs depends on the guitar of the song that it leads into alone, and staying in hand never costs more than what the
- * plan pays.
+ * Why it bounds: in a real plan some songs move and some slots are opened for them, no more than may move. Each song that
+ * stays is played at its place by exactly one guitar, each that moved is inserted by one; a guitar stays in hand while a
+ * song is passed over only if that song moved, and across a slot only if the slot is not opened, which is one guitar at
+ * most; it inserts songs only in slots that are opened. All this is left to prices: what is paid for it and what is
+ * taken off cancel in a real plan, or leave something to be taken off, whatever the prices. What a gap costs depends on the
+ * guitar of the song that it leads into alone, so that what each guitar does in the plan is one of its own choices.
  *
- * @param target total of a known plan
+ * @param target total of a known plan, if there is one; songs that no cheaper plan moves stay where they are
  * @param rounds how often the prices are adjusted
  */
 export function keptOrderBound(
   model: Model,
+  rules: OrderRules,
   layout: SetLayout,
-  { target, rounds }: { target: number; rounds: number },
+  { target, rounds }: { target: number | null; rounds: number },
 ): SetBound {
   const most = model.problem.maxMoved!;
-  const { songs } = model;
-  const parts = Array.from({ length: model.guitars }, (_, guitar) => keptOrderPart(model, guitar, most));
-  const priced = raisePrices(
-    new Float64Array(songs + 1),
-    (tried) => {
-      const prices = tried.subarray(0, songs);
-      const insertionPrice = tried[songs]!;
-      const lack = new Float64Array(songs + 1).fill(1);
-      lack[songs] = -most;
-      let value = prices.reduce((sum, price) => sum + price, 0) - most * insertionPrice;
-      for (const [guitar, part] of parts.entries()) {
-        part.sweep(prices, insertionPrice);
-        value += part.least[part.stateOf(0, 0, 0, part.places.get(model.start[guitar]!)!, 0)]!;
-        part.trace(prices, insertionPrice, lack);
-      }
-      if (insertionPrice === 0 && lack[songs]! < 0) lack[songs] = 0;
-      return { value, lack };
-    },
-    { target, rounds, free: songs },
-  );
-  const prices = priced.subarray(0, songs);
-  const insertionPrice = priced[songs]!;
-  for (const part of parts) part.sweep(prices, insertionPrice);
+  const { songs, guitars } = model;
+  const { parts, prices, staying, holding, leaving, opening } = keptOrderPrices(model, rules, {
+    target,
+    rounds,
+  });
+  const atFirst = startingValue(model, { parts, prices, staying, holding, leaving, opening });
+  const { kept, moved, passAll } = prices;
+
+  /** What songs from `followed` on that may still leave take off, without those that were played early. */
+  function leavingBut(followed: number, mayMove: number, early: (song: number) => boolean): number {
+    let value = 0;
+    let left = mayMove;
+    for (let i = 0; i < leaving.order.length && left > 0; i += 1) {
+      const song = leaving.order[i]!;
+      if (song < followed || early(song)) continue;
+      value += leaving.costs[song]!;
+      left -= 1;
+    }
+    return value;
+  }
 
   return (state, depth) => {
     if (depth === songs) return 0;
+    if (depth === 0) return atFirst;
     const followed = state[layout.kept]!;
     const mayMove = most - state[layout.moved]!;
-    let value = 0;
-    let toInsert = mayMove;
-    let toPass = mayMove;
-    for (let song = 0; song < songs; song += 1) {
-      const played = isPlayed(layout, state, song);
-      if (!played) value += prices[song]!;
-      if (song < followed && !played) toInsert += 1;
-      if (song >= followed && played) toPass += 1;
+    const isEarly = (song: number) => ((state[layout.played + (song >>> 5)]! >>> (song & 31)) & 1) === 1;
+    let value = staying[followed]!;
+    let early = 0;
+    let pending = 0;
+    for (let word = 0; word < layout.playedWords; word += 1) {
+      const base = word * 32;
+      const gone = followed <= base ? 0 : followed >= base + 32 ? -1 : (1 << (followed - base)) - 1;
+      const played = state[layout.played + word]!;
+      eachBit(played & ~gone, base, (song) => {
+        value -= kept[song]! + passAll[song]!;
+        early += 1;
+      });
+      eachBit(~played & gone, base, (song) => {
+        value += moved[song]!;
+        pending += 1;
+      });
     }
-    value -= insertionPrice * toInsert;
+    const toInsert = mayMove + pending;
+    if (early > 0) value += leavingBut(followed, mayMove, isEarly);
+    else value += leaving.least[followed * (most + 1) + mayMove]!;
     const current = state[layout.current]!;
-    for (let guitar = 0; guitar < parts.length; guitar += 1) {
+    const untouched = state[layout.moved] === pending;
+    let closed = opening.least[followed * (most + 1) + toInsert]! - holding[followed]!;
+    let opened =
+      followed < songs ? opening.least[(followed + 1) * (most + 1) + toInsert]! - holding[followed + 1]! : 0;
+    for (let guitar = 0; guitar < guitars; guitar += 1) {
       const part = parts[guitar]!;
       const place = part.places.get(state[layout.necks + guitar]!)!;
-      const hand = guitar === current ? 1 : 0;
-      value += part.least[part.stateOf(followed, most - toInsert, most - toPass, place, hand)]!;
+      const at = part.stateOf(followed, most - toInsert, place, 0);
+      closed += part.least[at + (guitar === current ? HELD : RESTING)]!;
+      opened += part.least[at + (guitar === current ? INSERTED : OPENED)]!;
     }
-    return value;
+    return value + (untouched ? closed : Math.min(closed, opened));
   };
 }
