@@ -26,9 +26,13 @@ export const TotalsBar = memo(function TotalsBar({ totals, clock, before }: Tota
       <Figure value={totals.capoActions} change={against("capoActions")} label="capo changes" short="capo" />
       <Figure value={totals.swaps} change={against("swaps")} label="guitar changes" short="guitars" />
       {totals.wishes > 0 || (before && before.wishes > 0) ? (
-        <div className="max-lg:hidden">
-          <Figure value={totals.wishes} unit="s" change={against("wishes")} label="wishes" />
-        </div>
+        <Figure
+          value={totals.wishes}
+          unit="s"
+          change={against("wishes")}
+          label="wishes"
+          className="max-lg:hidden"
+        />
       ) : null}
       <Figure
         value={formatDuration(clock.seconds)}
@@ -49,6 +53,7 @@ type FigureProps = {
   short?: string;
   strong?: boolean;
   alarm?: boolean;
+  className?: string;
 };
 
 function shown(value: number | string): string {
@@ -60,9 +65,9 @@ function signed(change: number): string {
   return whole > 0 ? `+${whole}` : whole < 0 ? `−${-whole}` : "±0";
 }
 
-function Figure({ value, unit, change, label, short, strong, alarm }: FigureProps) {
+function Figure({ value, unit, change, label, short, strong, alarm, className = "" }: FigureProps) {
   return (
-    <div className={`flex min-w-0 flex-col-reverse justify-end ${strong ? "lg:pr-3" : ""}`}>
+    <div className={`flex min-w-0 flex-col-reverse justify-end ${strong ? "lg:pr-3" : ""} ${className}`}>
       <dt className="truncate font-display font-medium text-grey-600 text-sm lg:text-[15px] lg:leading-tight">
         {short ? (
           <>
