@@ -77,7 +77,7 @@ export function WishesDialog({ gig, songs, edit, onClose }: WishesDialogProps) {
         </WishBlock>
         <WishBlock on={slow.on} title="No two slow songs together">
           <div className="flex flex-wrap gap-4">
-            <WishNumber field={slow.below} label="Slow is below" unit="beats a minute" />
+            <WishNumber field={slow.below} label="Slow is below" unit="bpm" />
             <WishNumber field={slow.seconds} label="Each time counts as" unit="s" />
           </div>
           <Unknown count={unknown.tempo} of={unknown.of} what="a tempo" so="are never slow" />
