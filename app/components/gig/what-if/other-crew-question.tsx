@@ -16,8 +16,8 @@ export function OtherCrewQuestion(props: QuestionProps) {
     <>
       <p className="text-grey-600 text-sm leading-snug">
         {comes
-          ? `Resting guitars are changed at the side while songs are played. A change of guitar takes ${supposed.gig.times.swap} s.`
-          : `You do everything on stage. A change of guitar takes ${supposed.gig.times.swap} s.`}
+          ? `Resting guitars are changed at the side while songs are played. A change of guitar takes ${supposed.gig.times.swap}\u00a0s.`
+          : `You do everything on stage. A change of guitar takes ${supposed.gig.times.swap}\u00a0s.`}
       </p>
       <Answers
         found={found}

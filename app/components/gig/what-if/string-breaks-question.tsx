@@ -6,6 +6,7 @@ import type { QuestionProps } from "#app/components/gig/what-if/question.ts";
 import { SongChoice } from "#app/components/gig/what-if/song-choice.tsx";
 import { freedoms, type Outcomes } from "#app/components/gig/what-if/use-outcomes.ts";
 import { SelectField } from "#app/components/ui/field.tsx";
+import type { Crew } from "#app/domain/gig/gig.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
 import { replannedOutcome, restJobs, spareOutcome } from "#app/domain/gig/what-if/break-outcomes.ts";
 import { needsOf } from "#app/domain/gig/what-if/needs.ts";
@@ -65,10 +66,11 @@ export function StringBreaksQuestion(props: QuestionProps) {
   );
 }
 
-/** What the spare is to look like when it is handed over. */
-function spareWords({ guitar, neck, takes }: Spare, naming: Naming): string {
+/** How the spare should stand when it is taken up. */
+function spareWords({ guitar, neck, takes }: Spare, crew: Crew, naming: Naming): string {
   if (takes.length === 0) return `Nothing of the rest is on the guitar, so ${guitar.name} is not needed.`;
-  return `Hand over ${guitar.name}, prepared alike: ${compactTuning(neck.open, naming)}, ${caposWords(neck.capos, neck.open.length)}.`;
+  const verb = crew === "tech" ? "Hand over" : "Take";
+  return `${verb} ${guitar.name}, prepared alike: ${compactTuning(neck.open, naming)}, ${caposWords(neck.capos, neck.open.length)}.`;
 }
 
 type BrokenProps = QuestionProps & { set: SetPlan; entryId: string; guitar: Guitar };
@@ -106,7 +108,7 @@ function Broken({ gig, set, repertoire, entryId, guitar }: BrokenProps) {
         use={() => `${guitar.name} out before ${title}`}
         head={(outcome: Outcome) =>
           outcome.kind === "spare" && spare ? (
-            <p className="font-semibold">{spareWords(spare, naming)}</p>
+            <p className="font-semibold">{spareWords(spare, gig.crew, naming)}</p>
           ) : null
         }
         next={<Caution />}
