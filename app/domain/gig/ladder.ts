@@ -56,7 +56,8 @@ export function ladderOf(
       best = found;
       return { kind: "gains", rung, answer: found, done: done || found.status === "optimal" };
     }
-    const so = best && standing(best, floor);
+    // What was proven of it among fewer orders is not proven among more.
+    const so = best && standing<Standing>({ ...best, status: "feasible", bound: 0 }, floor);
     return so && (done || so.status === "optimal")
       ? { kind: "folded", rungs: [rung], best: so }
       : { kind: "looking", rung, best: so };

@@ -81,6 +81,14 @@ describe("a ladder", () => {
     expect(shape(ladderOf(now, known()))).toEqual(rungs.map((rung) => ["looking", rung]));
   });
 
+  test("what is proven with one song moved is not proven with two, while that is looked at", () => {
+    const steps = ladderOf(now, known([90, 90], [80, 80], [80, 30, false]));
+    expect(steps[1]).toMatchObject({ kind: "gains", done: true, answer: { status: "optimal" } });
+    expect(steps[2]).toMatchObject({ kind: "looking", best: { total: 80, status: "feasible", bound: 30 } });
+    const ended = ladderOf(now, known([90, 90], [80, 80], [80, 30], [80, 30], [80, 30]));
+    expect(ended[2]).toMatchObject({ kind: "folded", best: { status: "feasible", bound: 30 } });
+  });
+
   test("a rung is done before its search ends where nothing less can be", () => {
     const steps = ladderOf(now, known([90, 90], [80, 40, false], null, null, [80, 80, false]));
     expect(steps[1]).toMatchObject({ kind: "gains", done: true });

@@ -8,8 +8,9 @@ import type { Guitar } from "#app/domain/repertoire/guitar.ts";
 type RibbonThumbnailsProps = { before: SetPlan; after: SetPlan; guitars: Guitar[] };
 
 const width = 94;
-const row = 5;
-const gap = 4;
+/** A song with the gap below it; less in a long set, which is to be taken in at a glance like any other. */
+const tallestStep = 9;
+const tallest = 108;
 const foldedWidth = 12;
 
 /** How the ribbons look now and how they would: a calm set is a page of straight lines. */
@@ -24,12 +25,14 @@ export function RibbonThumbnails({ before, after, guitars }: RibbonThumbnailsPro
 
 function Thumbnail({ plan, guitars, label }: { plan: SetPlan; guitars: Guitar[]; label: string }) {
   const { hand } = usePageTools();
-  const height = plan.rows.length * (row + gap) - gap;
+  const step = Math.min(tallestStep, tallest / Math.max(1, plan.rows.length));
+  const row = step * 0.56;
+  const height = plan.rows.length * step - (step - row);
   const lanes = useMemo(() => {
     const folded = plan.before.filter(({ guitar }) => guitar.keeps).length;
     const open = Math.max(1, plan.before.length - folded);
     return ribbonLanes(plan.rows, guitars, {
-      tops: plan.rows.map((_, index) => index * (row + gap)),
+      tops: plan.rows.map((_, index) => index * step),
       heights: plan.rows.map(() => row),
       bottom: height,
       laneWidth: Math.max(20, (width - folded * foldedWidth) / open),
@@ -38,7 +41,7 @@ function Thumbnail({ plan, guitars, label }: { plan: SetPlan; guitars: Guitar[];
       labelWidth: 6,
       labelHeight: 4,
     });
-  }, [plan, guitars, hand, height]);
+  }, [plan, guitars, hand, height, step, row]);
   return (
     <figure className="flex flex-col gap-1">
       <figcaption className="font-display font-medium text-grey-600 text-sm">

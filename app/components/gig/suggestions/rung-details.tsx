@@ -95,15 +95,20 @@ function Against({ now, then }: { now: Totals; then: Totals }) {
   );
 }
 
-/** So many changes stand there at once; the rest is asked for. */
-const shownAtOnce = 4;
+/** So many letters of changes stand there at once; the rest is asked for. */
+const mostLetters = 150;
 
 function Changes({ changes }: { changes: string[] }) {
-  const more = changes.slice(shownAtOnce);
+  let letters = 0;
+  const fitting = changes.filter((words, index) => {
+    letters += words.length;
+    return index === 0 || letters <= mostLetters;
+  });
+  const more = changes.slice(fitting.length);
   return (
     <div className="text-grey-800 text-sm leading-snug">
       <ul className="flex flex-col gap-0.5">
-        {changes.slice(0, shownAtOnce).map((words) => (
+        {fitting.map((words) => (
           <li key={words} className="pl-3 -indent-3">
             {words}
           </li>

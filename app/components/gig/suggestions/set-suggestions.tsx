@@ -50,7 +50,7 @@ export function SetSuggestionsBlock(props: SetSuggestionsProps) {
   const steps = ladderOf(plan.evaluation, rungs);
   const first = steps.find((step) => step.kind === "gains");
   const open = opened ?? first?.rung ?? "none";
-  const running = steps.find((step) => step.kind === "looking");
+  const running = steps.find((step) => step.kind === "looking" || (step.kind === "gains" && !step.done));
   const best = bestOf(rungs);
   const now = leadOf(lead, plan.evaluation);
 
@@ -98,7 +98,7 @@ export function SetSuggestionsBlock(props: SetSuggestionsProps) {
   return (
     <section aria-label={`Less retuning in ${plan.set.name}`} className="flex flex-col">
       {alone ? null : <h3 className="font-semibold text-lg leading-tight">{plan.set.name}</h3>}
-      <p className="pb-2 text-grey-600 leading-snug">{nowWords(plan, lead)}</p>
+      <p className="pb-2 text-grey-600 text-sm leading-snug">{nowWords(plan, lead)}</p>
       <ol>{steps.map(drawn)}</ol>
       {best ? <WhyNotLess gig={gig} plan={plan} repertoire={repertoire} lead={lead} best={best} /> : null}
     </section>

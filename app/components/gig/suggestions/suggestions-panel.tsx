@@ -20,7 +20,7 @@ export const SuggestionsPanel = memo(function SuggestionsPanel(props: Suggestion
   const { gig, plan, repertoire, suggestions } = props;
   const { sets, begun, failed } = suggestions;
   return (
-    <div className="flex flex-col gap-4">
+    <div className="flex flex-col gap-3">
       <AimChooser aim={gig.aim} />
       {failed ? <Warning>{failed}</Warning> : null}
       <noscript>

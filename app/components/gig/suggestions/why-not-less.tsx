@@ -21,6 +21,9 @@ type WhyNotLessProps = {
 /** How much the search may do for each thing that is lifted. */
 const effort = 100_000;
 
+/** So many things that hold it up stand there at once; the others are asked for. */
+const shownAtOnce = 5;
+
 /** What holds the best answer up, asked for by a press: each single thing is lifted in turn, and the set planned anew. */
 export function WhyNotLess(props: WhyNotLessProps) {
   const [open, setOpen] = useState(false);
@@ -41,6 +44,7 @@ export function WhyNotLess(props: WhyNotLessProps) {
 
 function WhatHolds({ gig, plan, repertoire, lead, best }: WhyNotLessProps) {
   const { naming } = usePageTools();
+  const [all, setAll] = useState(false);
   const lifts = useMemo(
     () =>
       liftsOf(gig, plan, best, { repertoire, naming }).map((lift) => ({
@@ -56,14 +60,20 @@ function WhatHolds({ gig, plan, repertoire, lead, best }: WhyNotLessProps) {
     return told?.done && told.answer ? [{ lift, answer: told.answer }] : [];
   });
   const why = whyNotLess(lead, best, tried);
+  const more = why.holding.length - shownAtOnce;
   return (
     <div className="flex flex-col gap-1.5 pt-1 text-sm leading-snug">
       {why.holding.length > 0 ? (
         <ul aria-label="What holds it up" className="flex flex-col gap-1.5">
-          {why.holding.map((holding) => (
+          {(all ? why.holding : why.holding.slice(0, shownAtOnce)).map((holding) => (
             <HoldingLine key={holding.name} holding={holding} />
           ))}
         </ul>
+      ) : null}
+      {more > 0 && !all ? (
+        <button type="button" onClick={() => setAll(true)} className="w-fit underline underline-offset-2">
+          {more} more
+        </button>
       ) : null}
       <p role="status" className="text-grey-600">
         {failed ?? endWords(why, lifts.length, best)}
