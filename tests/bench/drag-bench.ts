@@ -16,14 +16,14 @@ const moves = 48;
 
 /**
  * Has the page mark in the trace when it has painted what came of a move: the frame that a move comes with begins with
- * it, so two frames on it is painted and what was left for after it is done.
+ * it, so two frames on it is painted, and when the page is idle then, what was left for later is done too.
  */
 async function markPaints(page: Page): Promise<void> {
   await page.evaluate(() => {
     document.addEventListener("pointermove", () =>
       requestAnimationFrame(() =>
         requestAnimationFrame(() =>
-          setTimeout(() => {
+          requestIdleCallback(() => {
             performance.mark("painted");
           }),
         ),
