@@ -10,6 +10,7 @@ import { fewMayMove, fewMovesSpace, planFewMoves } from "#app/domain/planning/fe
 import { fixedOrderSpace, onlyOrder, planInOrder, spaceInOrder } from "#app/domain/planning/fixed-order.ts";
 import { keptCases } from "#app/domain/planning/kept-cases.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
+import { type KnownPlan, knownPlan } from "#app/domain/planning/known-plan.ts";
 import { type Model, modelOf } from "#app/domain/planning/model.ts";
 import { orderTest } from "#app/domain/planning/order-holds.ts";
 import { compileRules } from "#app/domain/planning/order-rules.ts";
@@ -129,10 +130,11 @@ function dearSpace(run: Run, whole: Model): SetSpace {
  * same way.
  *
  * @param effort how much to do, see `usualEffort`
+ * @param from a plan that is known already, taken for a first answer where it is one: see `knownPlan`
  */
 export function* search(
   problem: Problem,
-  { effort = usualEffort }: { effort?: number } = {},
+  { effort = usualEffort, from = null }: { effort?: number; from?: KnownPlan | null } = {},
 ): Generator<Progress, Answer> {
   if (problem.songs.length === 0) return answerOf(problem, { songs: [], options: [] }, 0);
   const everyWay = modelOf(problem);
@@ -143,6 +145,8 @@ export function* search(
   const model = withoutRetuningKept(everyWay);
   const { rules } = compiled;
   const run = startRun(problem, model, rules);
+  const known = from && knownPlan(model, rules, from);
+  if (known) offer(run, known);
   const only = onlyOrder(rules);
   if (only && !orderTest(rules, problem.maxMoved)(Int32Array.from(only)))
     return { status: "infeasible", why: [ruleConflict(problem, CONFLICT_LOOKS)] };

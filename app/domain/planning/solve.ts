@@ -1,4 +1,5 @@
 import type { Answer } from "#app/domain/planning/answer.ts";
+import type { KnownPlan } from "#app/domain/planning/known-plan.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import { search, usualEffort } from "#app/domain/planning/search.ts";
 
@@ -11,14 +12,20 @@ import { search, usualEffort } from "#app/domain/planning/search.ts";
  * @param effort states to look at; see `usualEffort`
  * @param stop asked every few milliseconds; once it says so, the best answer so far is returned. While there is none
  *   yet, it goes on until there is.
+ * @param from a plan that is known already, such as the answer to the same set of which fewer songs may move: the answer is
+ *   no worse. One that does not hold for this problem is overlooked. The same problem, effort and plan give the same answer.
  * @throws nothing, for any problem that `parseProblem` lets through
  * @example solve(problem).status // "optimal"
  */
 export function solve(
   problem: Problem,
-  { effort = usualEffort, stop = () => false }: { effort?: number; stop?: () => boolean } = {},
+  {
+    effort = usualEffort,
+    stop = () => false,
+    from = null,
+  }: { effort?: number; stop?: () => boolean; from?: KnownPlan | null } = {},
 ): Answer {
-  const run = search(problem, { effort });
+  const run = search(problem, { effort, from });
   for (;;) {
     const step = run.next();
     if (step.done) return step.value;

@@ -1,8 +1,10 @@
 import { describe, expect, test } from "vitest";
+import type { Answer, FoundAnswer } from "#app/domain/planning/answer.ts";
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { check } from "#app/domain/planning/check.ts";
+import type { Problem } from "#app/domain/planning/problem.ts";
 import { BestFirst } from "#app/domain/planning/search/best-first.ts";
 import { type SetSpace, setSpace } from "#app/domain/planning/set-space.ts";
 import { solve } from "#app/domain/planning/solve.ts";
@@ -102,5 +104,55 @@ describe("against brute force", () => {
       expect(Math.abs(answer.total - least), `seed ${seed}`).toBeLessThanOrEqual(1e-6 * Math.max(1, least));
     }
     expect(possible).toBeGreaterThan(30);
+  });
+});
+
+describe("a plan that is known", () => {
+  const ladder = [0, 1, 2, 3, null];
+
+  test("is carried from rung to rung: no rung costs more than the one before", () => {
+    for (let seed = 1; seed <= 12; seed += 1) {
+      const problem = limitedSet(seed, 14, 0);
+      let from: FoundAnswer | null = null;
+      for (const maxMoved of ladder) {
+        const rung: Problem = { ...problem, maxMoved };
+        const answer: Answer = solve(rung, { effort: 300, from });
+        if (answer.status === "infeasible") continue;
+        expect(check(rung, answer), `seed ${seed}`).toEqual([]);
+        if (from) expect(answer.total, `seed ${seed}`).toBeLessThanOrEqual(from.total * (1 + 1e-9));
+        from = answer;
+      }
+    }
+  });
+
+  test("changes no proven total", () => {
+    for (let seed = 1; seed <= 40; seed += 1) {
+      const problem = limitedSet(seed, 8, 2);
+      const alone = solve(problem);
+      const fewer = solve({ ...problem, maxMoved: 1 });
+      if (alone.status === "infeasible" || fewer.status === "infeasible") continue;
+      const carried = solve(problem, { from: fewer });
+      expect(carried.status).toBe("optimal");
+      expect("total" in carried && carried.total, `seed ${seed}`).toBeCloseTo(alone.total, 6);
+    }
+  });
+
+  test("is overlooked where it does not hold for the problem", () => {
+    const problem = { ...limitedSet(4, 8, 1), maxMoved: null };
+    const best = solve(problem);
+    if (best.status === "infeasible") throw new Error("This set can be played.");
+    expect(best.totals.moved).toBeGreaterThan(1);
+    const strict = { ...problem, maxMoved: 1 };
+    const alone = JSON.stringify(solve(strict));
+    const { order, plays } = best;
+    const wrong = [
+      { order, plays },
+      { order: order.slice(1), plays: plays.slice(1) },
+      { order: order.map(() => order[0]!), plays },
+      { order: strict.order, plays },
+      { order: [...order.slice(1), "nobody's"], plays },
+      { order: strict.order, plays: strict.order.map((song) => ({ song, guitar: "z", neck: 0 })) },
+    ];
+    for (const from of wrong) expect(JSON.stringify(solve(strict, { from }))).toBe(alone);
   });
 });
