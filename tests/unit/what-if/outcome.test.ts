@@ -43,6 +43,19 @@ describe("what an answer changes, in words", () => {
     expect(free.slice(1).join()).toMatch(/(before|to the end)/);
   });
 
+  test("what is wished is weighed, and told apart from dead air", () => {
+    const calm = repertoireOf(
+      songs.map((one) => ({ ...one, tempo: one.id === "Ferry" || one.id === "Meadow" ? 60 : 120 })),
+      [alder, birch],
+    );
+    const wishing: Gig = { ...gig, wishes: [{ kind: "slow-apart", below: 80, seconds: 30 }] };
+    const { asked, answer } = ask(wishing, calm, otherCrew);
+    // Ferry and Meadow, both slow, follow each other now; with a tech they need not, at no dead air.
+    expect(asItIs(asked).needs.wishes).toBe(30);
+    expect(answer("same-order").needs).toMatchObject({ wishes: 30, exposed: 0 });
+    expect(answer("any-order").needs).toMatchObject({ wishes: 0, exposed: 0 });
+  });
+
   test("sets that are not equally sure are told one by one", () => {
     const { problem } = planGig(gig, repertoire).sets[0]!;
     const answer = solve(problem, { effort: 200_000 });

@@ -58,7 +58,7 @@ export function Answers(props: AnswersProps) {
       </p>
       {unsupposed ? <Unsupposed name={unsupposed} found={found} chosen={chosen} /> : null}
       {chosen ? (
-        <Chosen outcome={chosen} guitars={guitars(chosen)} use={use} head={head} next={next} />
+        <Chosen outcome={chosen} now={now} guitars={guitars(chosen)} use={use} head={head} next={next} />
       ) : null}
     </div>
   );
@@ -87,11 +87,12 @@ function Unsupposed({ name, found, chosen }: UnsupposedProps) {
 
 type ChosenProps = {
   outcome: Outcome;
+  now: Needs;
   guitars: Guitar[];
 } & Pick<AnswersProps, "use" | "head" | "next">;
 
-function Chosen({ outcome, guitars, use, head, next }: ChosenProps) {
-  const { sets, changes, unplayable, strain, certainty, done, kind } = outcome;
+function Chosen({ outcome, now, guitars, use, head, next }: ChosenProps) {
+  const { needs, sets, changes, unplayable, strain, certainty, done, kind } = outcome;
   const changed = sets.filter(({ before, after }) => before.rows.length > 0 || after.rows.length > 0);
   return (
     <div className="flex flex-col gap-3">
@@ -109,6 +110,11 @@ function Chosen({ outcome, guitars, use, head, next }: ChosenProps) {
         </div>
       ))}
       <ChangeList changes={changes} />
+      {now.wishes > 0 || needs.wishes > 0 ? (
+        <p className="text-grey-800 text-sm leading-snug">
+          Broken wishes count as {Math.round(needs.wishes)} s then, {Math.round(now.wishes)} s now.
+        </p>
+      ) : null}
       {kind === "as-it-is" || kind === "spare" ? null : (
         <p className="text-grey-600 text-sm">{done ? certainty : "Still looking for less."}</p>
       )}

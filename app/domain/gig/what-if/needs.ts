@@ -7,6 +7,8 @@ export type Needs = {
   capoActions: number;
   swaps: number;
   length: number;
+  /** Seconds that broken wishes count as. */
+  wishes: number;
   /** The weighted total that the planner keeps low. */
   total: number;
 };
@@ -23,6 +25,7 @@ export function needsOf(sets: readonly SetPlan[]): Needs {
     capoActions: sum((set) => set.totals.capoActions),
     swaps: sum((set) => set.totals.swaps),
     length: sum((set) => set.seconds),
+    wishes: sum((set) => set.totals.wishes),
     total: sum((set) => set.evaluation.total),
   };
 }
