@@ -1,8 +1,12 @@
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
+import { jointKeptOrderBound } from "#app/domain/planning/bounds/joint-kept-order-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
+import { keptCases } from "#app/domain/planning/kept-cases.ts";
+import type { Model } from "#app/domain/planning/model.ts";
 import {
+  type Case,
   isProven,
   type Progress,
   progress,
@@ -24,6 +28,13 @@ const ROUNDS = 240;
 const EASY_LOOKS = 10_000;
 const CHANGES = 4_000;
 
+/** What is tried before the tunings that kept guitars may have are told apart. */
+const WHOLE_LOOKS = 300_000;
+
+/** What following all guitars together may take, and how much of it counts as one look. */
+const WALK_STEPS = 600_000_000;
+const STEPS_PER_LOOK = 150;
+
 /** Whether so few songs may move that plans are best looked for along the present order. */
 export function fewMayMove({ problem, model }: Run): boolean {
   const { maxMoved } = problem;
@@ -31,7 +42,7 @@ export function fewMayMove({ problem, model }: Run): boolean {
 }
 
 /** The space of plans of which few songs have moved, with bounds that follow the present order. */
-export function fewMovesSpace({ model, rules, problem, best }: Run, rounds: number): SetSpace {
+export function fewMovesSpace({ rules, problem, best }: Run, model: Model, rounds: number): SetSpace {
   const target = best?.total ?? null;
   const bound = overLooseCapos(model, (plain, layout) =>
     greatest(
@@ -42,16 +53,41 @@ export function fewMovesSpace({ model, rules, problem, best }: Run, rounds: numb
   return setSpace(model, rules, bound);
 }
 
+/** The same with all guitars followed together, where their joint states are few enough for that; else with dear prices. */
+function closeSpace(run: Run, looks: number): SetSpace {
+  const { model, rules, problem } = run;
+  const target = run.best?.total ?? 0;
+  const steps = Math.min(WALK_STEPS, ((looks - run.looks) * STEPS_PER_LOOK) / 2);
+  let together = true;
+  const bound = overLooseCapos(model, (plain, layout) => {
+    const walk = jointKeptOrderBound(plain, rules, layout, { target, steps });
+    together = walk !== null;
+    if (!walk) return () => 0;
+    run.looks += walk.spent / STEPS_PER_LOOK;
+    return greatest(movesLeft(rules, layout, problem.maxMoved!), walk.bound);
+  });
+  const space = setSpace(model, rules, bound);
+  return together ? space : fewMovesSpace(run, run.model, ROUNDS);
+}
+
 /** Looks for the best plan of few moves, and proves it where so many looks suffice. */
 export function* planFewMoves(run: Run, looks: number): Generator<Progress, void> {
-  const easy = fewMovesSpace(run, ROUNDS_AT_FIRST);
+  const easy = fewMovesSpace(run, run.model, ROUNDS_AT_FIRST);
   tryBeam(run, easy, looks / 10, 32);
   yield progress(run);
   yield* prove(run, [{ space: () => easy, least: 0 }], Math.min(looks, run.looks + EASY_LOOKS), false);
   if (isProven(run) || run.looks >= looks) return;
   yield* tryChanges(run, Math.min(CHANGES, looks - run.looks));
-  const close = fewMovesSpace(run, ROUNDS);
+  const close = closeSpace(run, looks);
   tryBeam(run, close, (looks - run.looks) / 10, 64);
   yield progress(run);
-  yield* prove(run, [{ space: () => close, least: 0 }], looks, true);
+  const found = keptCases(run.model);
+  const asOne = found.length > 1 ? Math.min(looks, run.looks + WHOLE_LOOKS) : looks;
+  yield* prove(run, [{ space: () => close, least: 0 }], asOne, found.length === 1);
+  if (isProven(run) || run.looks >= looks) return;
+  const cases = found.map((one): Case => {
+    const first = fewMovesSpace(run, one, ROUNDS_AT_FIRST);
+    return { space: () => fewMovesSpace(run, one, ROUNDS), least: first.bound(first.start, 0) };
+  });
+  yield* prove(run, cases, looks, true);
 }

@@ -158,7 +158,7 @@ export function* search(
     : fixed
       ? fixedOrderSpace(model, rules)
       : fewMayMove(run)
-        ? fewMovesSpace(run, 0)
+        ? fewMovesSpace(run, model, 0)
         : cheapSpace(run, model);
 
   yield* firstPlans(run, space, looks);
