@@ -1,13 +1,8 @@
 import { z } from "zod";
-import {
-  aimSchema,
-  entrySchema,
-  ruleSchema,
-  setSchema,
-  timesSchema,
-  wishesSchema,
-} from "#app/domain/gig/edit-schema.ts";
+import { aimSchema } from "#app/domain/gig/aim-schema.ts";
+import { entrySchema, ruleSchema, setSchema, timesSchema } from "#app/domain/gig/edit-schema.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
+import { wishesSchema } from "#app/domain/gig/wish-schema.ts";
 import { readJson } from "#app/models/stored-json.server.ts";
 
 /** What is selected of the gigs table; the start as text, so that no driver's zone comes between. */

@@ -1,6 +1,7 @@
 import { afterAll, describe, expect, test } from "vitest";
 import { evaluate } from "#app/domain/planning/evaluate.ts";
 import { parseProblem } from "#app/domain/planning/problem.ts";
+import { createCapo } from "#app/models/capos.server.ts";
 import { closePlannerPool } from "#app/services/planner-pool.server.ts";
 import { ask } from "#tests/support/ask.ts";
 import { useDatabase } from "#tests/support/database.ts";
@@ -71,6 +72,23 @@ describe("GET /api/gigs/:gigId/plan-problem", () => {
     expect(JSON.parse(empty.text)).toMatchObject({ version: 1, songs: [], order: [] });
     const first = await ask(`/api/gigs/${gigId}/plan-problem`, { cookie });
     expect(first.text).toBe(answer.text);
+  });
+
+  test("knows the act's capos and the gig's wishes and aim", async () => {
+    const { wren, cookie } = await owner();
+    await createCapo(database.db, wren, { name: "Steel", strings: null, count: 2 });
+    const { gigId, gig } = await makeGig(database.db, wren, {
+      aim: { kind: "strings" },
+      wishes: [{ kind: "key-apart", seconds: 10 }],
+    });
+    const answer = await ask(`/api/gigs/${gigId}/plan-problem?set=1`, { cookie });
+    const parsed = parseProblem(JSON.parse(answer.text));
+    expect(parsed.ok && parsed.problem).toMatchObject({
+      capos: [{ strings: [1, 2, 3, 4, 5, 6], count: 2 }],
+      wishes: [{ kind: "apart", groups: [gig.entries.map((entry) => entry.id)], seconds: 10 }],
+    });
+    expect(parsed.ok && parsed.problem.aim.strings).toBeGreaterThan(1000);
+    expect((await plan(cookie, answer.text)).status).toBe(200);
   });
 
   test("answers 404 for an unknown set or another act's gig, 401 without a session", async () => {

@@ -70,6 +70,44 @@ function post(address: string, cookie: string, body: unknown) {
 }
 
 describe("posted edits", () => {
+  test("of aim and wishes: kept, taken back, and planning, so no tech's affair", async () => {
+    const { own, gig, join, window } = await stage();
+    const wishes: Edit = {
+      kind: "gig.set",
+      field: "wishes",
+      value: [{ kind: "tuning-run", most: 3, seconds: 20 }],
+    };
+    const aim: Edit = { kind: "gig.set", field: "aim", value: { kind: "strings" } };
+    expect(await gig()).toMatchObject({ aim: { kind: "dead-air" }, wishes: [] });
+    await own.send([{ id: "b1", edits: [wishes, aim] }]);
+    expect(await gig()).toMatchObject({ aim: aim.value, wishes: wishes.value });
+    const none: Edit = { kind: "gig.set", field: "wishes", value: [] };
+    await own.send([{ id: "b2", on: 1, edits: [none] }]);
+    expect(await gig()).toMatchObject({ aim: aim.value, wishes: [] });
+
+    const sabe = await join("tech", "Sabe Okell");
+    const refused = await window(sabe.cookie, "phone").send([{ id: "b3", on: 2, edits: [wishes] }], 2);
+    expect(refused.results).toMatchObject([{ id: "b3", status: "refused" }]);
+    expect((await gig()).wishes).toEqual([]);
+  });
+
+  test("of wishes by two at once: the second is told both in words", async () => {
+    const { own, join, window } = await stage();
+    const set = (value: Extract<Edit, { field: "wishes" }>["value"]): Edit => ({
+      kind: "gig.set",
+      field: "wishes",
+      value,
+    });
+    await own.send([{ id: "b1", edits: [set([{ kind: "key-apart", seconds: 10 }])] }]);
+    const ivo = await join("performer", "Ivo Tarrant");
+    const answer = await window(ivo.cookie, "phone").send([
+      { id: "b2", edits: [set([{ kind: "tuning-run", most: 2, seconds: 20 }])] },
+    ]);
+    expect(JSON.stringify(answer.results)).toContain(
+      "Wren Halloway changed the wishes since. Theirs: the same key not twice in a row (10 s). Yours: at most 2 songs in a row in one tuning (20 s).",
+    );
+  });
+
   test("are applied, logged with their inverse, and told to others", async () => {
     const { own, gig, address, cookie, log, songIds } = await stage();
     const answer = await own.send([{ id: "b1", label: "Rename the gig", edits: [named("Late set")] }]);

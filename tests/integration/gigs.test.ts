@@ -141,6 +141,8 @@ describe("a copy", () => {
     const { gig, gigId } = await makeGig(database.db, wren, {
       startsAt: "2027-10-29T19:30:00.000Z",
       revision: 7,
+      aim: { kind: "capos" },
+      wishes: [{ kind: "energy", curve: [2, 3.5, 5], seconds: 4 }],
       rules: [
         { id: "into.e1.e2", kind: "into", a: "e1", b: "e2" },
         { id: "before.e1.gone", kind: "before", a: "e1", b: "gone" },
@@ -155,6 +157,8 @@ describe("a copy", () => {
     const copy = (await findGig(database.db, wren, answer.location!.replace("/gigs/", "")))!;
     expect(copy).toMatchObject({ name: "Autumn evening", startsAt: "2027-11-05T20:30:00.000Z", revision: 0 });
     expect(copy.times).toEqual(gig.times);
+    expect(copy.aim).toEqual({ kind: "capos" });
+    expect(copy.wishes).toEqual([{ kind: "energy", curve: [2, 3.5, 5], seconds: 4 }]);
     const [set] = setsOf(copy);
     expect(entriesOf(copy, set!.id).map((entry) => entry.songId)).toEqual(
       entriesOf(gig, "s1").map((entry) => entry.songId),

@@ -105,14 +105,30 @@ describe("who may do what with songs", () => {
 describe("saving a song", () => {
   test("errors come back with everything that was typed", async () => {
     const answer = await answerOf(
-      newPage.action(visit(performer, "/songs/new", {}, { ...filled, length: "long", notes: "Kept" })),
+      newPage.action(
+        visit(
+          performer,
+          "/songs/new",
+          {},
+          {
+            ...filled,
+            length: "long",
+            energy: "4",
+            priority: "9",
+            notes: "Kept",
+          },
+        ),
+      ),
     );
     expect(answer.status).toBe(400);
     expect(answer.data).toMatchObject({
       result: {
         status: "error",
-        initialValue: { title: "Low Meadow", length: "long", notes: "Kept" },
-        error: { length: ['"long" is no length that can be read. Write minutes and seconds, such as 3:15.'] },
+        initialValue: { title: "Low Meadow", length: "long", energy: "4", priority: "9", notes: "Kept" },
+        error: {
+          length: ['"long" is no length that can be read. Write minutes and seconds, such as 3:15.'],
+          priority: ["Choose how much you want it in the set."],
+        },
       },
     });
     expect(await listSongs(database.db, act)).toEqual([]);

@@ -25,6 +25,8 @@ describe("a song of an act", () => {
       credit: "Trad.",
       key: "Bb mixolydian",
       tempo: 96,
+      energy: 5,
+      priority: 1,
       cover: 25,
       firstLine: "The harrow drags the weather in",
       notes: "Tell the story first.\nThen play.",

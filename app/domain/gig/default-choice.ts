@@ -1,3 +1,4 @@
+import { capoKinds, lackingCapo } from "#app/domain/gig/capo-stock.ts";
 import type { Entry, Gig, Section } from "#app/domain/gig/gig.ts";
 import { entriesOf } from "#app/domain/gig/order.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
@@ -94,13 +95,15 @@ export function defaultChoice(
   { song, setId, section }: { song: Song; setId: string; section: Section },
 ): Choice {
   const songs = new Map(repertoire.songs.map((one) => [one.id, one]));
-  const { guitars } = repertoire;
+  const { guitars, capos } = repertoire;
   let stand = atDoors;
   for (const entry of entriesOf(gig, setId)) {
     if (entry.section > section) continue;
     const play = presentPlay(entry, songs.get(entry.songId)?.necks ?? [], guitars, stand, gig);
     if (play) stand = standAfter(stand, play.on, play.way);
   }
-  const play = presentPlay({ id: "", guitarId: null, neckId: null }, song.necks, guitars, stand, gig);
+  const kinds = capoKinds(capos, guitars) ?? [];
+  const ways = song.necks.filter((way) => lackingCapo(kinds, way) === null);
+  const play = presentPlay({ id: "", guitarId: null, neckId: null }, ways, guitars, stand, gig);
   return { guitarId: play?.guitar ?? null, neckId: play?.way.id ?? null };
 }

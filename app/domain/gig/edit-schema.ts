@@ -1,8 +1,10 @@
 import { z } from "zod";
+import { aimSchema } from "#app/domain/gig/aim-schema.ts";
 import type { Batch, Edit } from "#app/domain/gig/edit.ts";
 import type { Rule } from "#app/domain/gig/gig.ts";
 import { clockTime, isZone } from "#app/domain/gig/local-time.ts";
 import { idOfRule, isRank } from "#app/domain/gig/order.ts";
+import { wishesSchema } from "#app/domain/gig/wish-schema.ts";
 
 /** What a gig's fields may hold. Forms and the API keep to the same limits. */
 export const gigFieldLimits = {
@@ -17,11 +19,6 @@ export const gigFieldLimits = {
   longestIntervalSeconds: 4 * 3600,
   coverSeconds: 1800,
   workSeconds: 600,
-  wishSeconds: 600,
-  tuningRun: { least: 1, most: 20 },
-  slowBelow: { least: 20, most: 400 },
-  curvePoints: { least: 1, most: 12 },
-  aimWeight: 100_000,
 } as const;
 
 const limits = gigFieldLimits;
@@ -78,71 +75,6 @@ export const timesSchema = z.strictObject({
   encoreCover: talk,
   intoCover: talk,
 });
-
-const weight = z
-  .number({ error: "A weight is a number." })
-  .min(0, `A weight is 0 to ${limits.aimWeight}.`)
-  .max(limits.aimWeight, `A weight is 0 to ${limits.aimWeight}.`);
-
-export const aimSchema = z.discriminatedUnion(
-  "kind",
-  [
-    z.strictObject({ kind: z.enum(["dead-air", "strings", "capos", "guitars"]) }),
-    z.strictObject({
-      kind: z.literal("own"),
-      weights: z.strictObject({
-        exposed: weight,
-        seconds: weight,
-        strings: weight,
-        semitones: weight,
-        capoActions: weight,
-        swaps: weight,
-      }),
-    }),
-  ],
-  { error: "An aim is dead-air, strings, capos, guitars or own." },
-);
-
-function wholeBetween(what: string, { least, most }: { least: number; most: number }) {
-  const message = `${what} is a whole number, ${least} to ${most}.`;
-  return z.int({ error: message }).min(least, message).max(most, message);
-}
-
-const wishSeconds = whole("What a break of a wish counts as", 0, limits.wishSeconds);
-const curvePoint = z
-  .number({ error: "A point of a curve is a number." })
-  .min(1, "A point of a curve is 1 to 5.")
-  .max(5, "A point of a curve is 1 to 5.");
-
-const wishSchema = z.discriminatedUnion(
-  "kind",
-  [
-    z.strictObject({
-      kind: z.literal("tuning-run"),
-      most: wholeBetween("The length of a run", limits.tuningRun),
-      seconds: wishSeconds,
-    }),
-    z.strictObject({
-      kind: z.literal("slow-apart"),
-      below: wholeBetween("The tempo of a slow song", limits.slowBelow),
-      seconds: wishSeconds,
-    }),
-    z.strictObject({ kind: z.literal("key-apart"), seconds: wishSeconds }),
-    z.strictObject({
-      kind: z.literal("energy"),
-      curve: z.array(curvePoint).min(limits.curvePoints.least).max(limits.curvePoints.most),
-      seconds: wishSeconds,
-    }),
-  ],
-  { error: "A wish is tuning-run, slow-apart, key-apart or energy." },
-);
-
-export const wishesSchema = z
-  .array(wishSchema)
-  .refine(
-    (wishes) => new Set(wishes.map((wish) => wish.kind)).size === wishes.length,
-    "A gig has at most one wish of each kind.",
-  );
 
 export const setSchema = z.strictObject({
   id: idSchema,

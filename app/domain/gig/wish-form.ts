@@ -1,12 +1,10 @@
 import { z } from "zod";
 import { type Edit, stableJson } from "#app/domain/gig/edit.ts";
-import { gigFieldLimits } from "#app/domain/gig/edit-schema.ts";
 import type { Gig, GigWish } from "#app/domain/gig/gig.ts";
+import { wishLimits } from "#app/domain/gig/wish-schema.ts";
 import { curveAt } from "#app/domain/planning/wishes.ts";
 import { tick } from "#app/domain/repertoire/form-fields.ts";
 import type { Song } from "#app/domain/repertoire/song.ts";
-
-const { wishSeconds, tuningRun, slowBelow } = gigFieldLimits;
 
 /** Points of a curve as the form draws it, from the start of a set to its end. */
 const curvePoints = 5;
@@ -25,9 +23,9 @@ const block = { on: tick(), seconds: written };
 type Range = { least: number; most: number; what: string };
 
 const ranges = {
-  seconds: { least: 1, most: wishSeconds, what: "whole seconds" },
-  run: { ...tuningRun, what: "how many songs" },
-  below: { ...slowBelow, what: "whole beats a minute" },
+  seconds: { least: 1, most: wishLimits.mostSeconds, what: "whole seconds" },
+  run: { ...wishLimits.run, what: "how many songs" },
+  below: { ...wishLimits.below, what: "whole beats a minute" },
 } satisfies Record<string, Range>;
 
 /**

@@ -2,8 +2,9 @@ import { caposWords } from "#app/domain/music/capo.ts";
 import { nameKey, spellingFifths } from "#app/domain/music/key.ts";
 import type { Naming } from "#app/domain/music/note-names.ts";
 import { formatDuration } from "#app/domain/repertoire/read-duration.ts";
-import type { Song, SongNeck } from "#app/domain/repertoire/song.ts";
+import { type Priority, type Song, type SongNeck, usualPriority } from "#app/domain/repertoire/song.ts";
 import type { SongFormInput } from "#app/domain/repertoire/song-form.ts";
+import { energyWords, priorityNames } from "#app/domain/repertoire/song-words.ts";
 import { tuningText } from "#app/domain/repertoire/tuning-text.ts";
 import { type UsualChoice, usualCode, usualFor } from "#app/domain/repertoire/usual-choices.ts";
 
@@ -68,7 +69,7 @@ export const songFieldLabels = {
 } as const;
 
 /**
- * The fields of a song with each way in one line, so that two states can be laid side by side. `guitars` names ids.
+ * The fields of a song with each way in one line and steps in words, so that two states can be laid side by side. `guitars` names ids.
  * @example comparableSong({ ways: [{ tuning: "CGCFFC", capos: "capo 3, leave 6" }] }, []).ways
  * // ["CGCFFC, capo 3, leave 6"]
  */
@@ -83,5 +84,12 @@ export function comparableSong(
     const kept = names.length > 0 ? `only on ${names.join(", ")}` : "";
     return [tuning, capos, kept, penalty ? `counts as ${penalty} s` : ""].filter(Boolean).join(", ");
   });
-  return { ...form, ways: lines };
+  const energy = Number(form.energy);
+  const priority = Number(form.priority) || usualPriority;
+  return {
+    ...form,
+    ways: lines,
+    energy: energy ? energyWords(energy) : "",
+    priority: priorityNames[priority as Priority],
+  };
 }

@@ -82,7 +82,7 @@ describe("an edit over the wire", () => {
       "a curve of nothing",
       gigSet("wishes", [{ kind: "energy", curve: [], seconds: 4 }]),
       "value.0.curve",
-      />=1/,
+      /1 to 12 points/,
     ],
     [
       "a run of none",

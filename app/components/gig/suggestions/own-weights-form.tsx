@@ -1,7 +1,7 @@
 import { useId, useState } from "react";
 import { Button } from "#app/components/ui/button.tsx";
 import { Warning } from "#app/components/ui/warning.tsx";
-import { aimSchema } from "#app/domain/gig/edit-schema.ts";
+import { aimSchema } from "#app/domain/gig/aim-schema.ts";
 import type { Aim } from "#app/domain/planning/problem.ts";
 
 const fields: readonly [keyof Aim, string][] = [
