@@ -55,14 +55,14 @@ function Thumbnail({ plan, guitars, label }: { plan: SetPlan; guitars: Guitar[];
         aria-label={`${label}: ${lanes.map(ribbonWords).join(". ")}`}
       >
         {lanes.map((lane) => (
-          <Sketch key={lane.guitar.id} lane={lane} />
+          <Sketch key={lane.guitar.id} lane={lane} barHeight={Math.min(4, step * 0.6)} />
         ))}
       </svg>
     </figure>
   );
 }
 
-function Sketch({ lane }: { lane: RibbonLane }) {
+function Sketch({ lane, barHeight }: { lane: RibbonLane; barHeight: number }) {
   return (
     <g transform={`translate(${lane.x} 0)`}>
       {lane.strings.map((string) => (
@@ -79,7 +79,7 @@ function Sketch({ lane }: { lane: RibbonLane }) {
             x={x1}
             y={capo.y1 - 1}
             width={x2 - x1}
-            height={4}
+            height={barHeight}
             className="fill-brass"
           />
         )),
