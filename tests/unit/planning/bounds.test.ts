@@ -1,6 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { greatest } from "#app/domain/planning/bounds/greatest.ts";
 import { jointBound } from "#app/domain/planning/bounds/joint-bound.ts";
+import { jointKeptOrderBound } from "#app/domain/planning/bounds/joint-kept-order-bound.ts";
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { lastSectionBound } from "#app/domain/planning/bounds/last-section-bound.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
@@ -104,6 +105,24 @@ describe("along every prefix of a plan proven optimal, the bound is at most what
           keptOrderBound(model, rules, layout, { target, rounds: [0, 20, 90][seed % 3]! }),
         ),
       );
+      prefixes += expectBelow(space, `seed ${seed}`);
+    }
+    expect(prefixes).toBeGreaterThan(300);
+  });
+
+  test("the present order followed with all guitars together", () => {
+    let prefixes = 0;
+    for (let seed = 1; seed <= 300; seed += 1) {
+      const problem = randomSet(seed, 1 + (seed % 3));
+      const parts = ready(problem);
+      if (!parts || problem.maxMoved! >= problem.songs.length - 1) continue;
+      const { model, rules } = parts;
+      const plain = optimalStates(setSpace(model, rules, () => () => 0));
+      const target = plain?.[0]?.rest ?? 0;
+      const space = setSpace(model, rules, (layout) => {
+        const made = jointKeptOrderBound(model, rules, layout, { target, steps: 20_000_000 });
+        return made?.bound ?? (() => 0);
+      });
       prefixes += expectBelow(space, `seed ${seed}`);
     }
     expect(prefixes).toBeGreaterThan(300);

@@ -1,13 +1,19 @@
+import {
+  type Joint,
+  jointOf,
+  jointStates,
+  type Step,
+  stepOf,
+  type Target,
+  targetOf,
+} from "#app/domain/planning/bounds/joint-states.ts";
 import { canBeLeft, chainsOf, needsOf, precedence } from "#app/domain/planning/bounds/needs.ts";
 import { openNeedsOf } from "#app/domain/planning/bounds/open-needs.ts";
-import { type Model, type Option, UNUSED } from "#app/domain/planning/model.ts";
+import type { Model } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
 import { NOBODY, type SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
-import { stepCost } from "#app/domain/planning/step-cost.ts";
 
-/** A tech is never late in a bound. */
-const ENOUGH = Number.POSITIVE_INFINITY;
 const MOST_NEEDS = 18;
 const FEWEST_NEEDS = 6;
 const TABLE_STEPS = 60_000_000;
@@ -16,69 +22,6 @@ const STEPS_OF_ONE = 150_000_000;
 /** Share of the needs that may go to songs of rules about which comes first. */
 const ORDERED = 0.2;
 const MOST_CELLS = 8_000_000;
-const MOST_JOINT_STATES = 20_000;
-
-/** All necks of all guitars and the guitar in hand, as one number. */
-type Joint = {
-  count: number;
-  /** Necks of each guitar; the last row of each is that of a guitar still free to be prepared. */
-  necks: number[][];
-  strides: number[];
-  /** Row of guitar g in joint state j at `j × guitars + g`, and the guitar in hand. */
-  rows: Int32Array;
-  current: Int32Array;
-};
-
-function jointStates(model: Model): Joint | null {
-  const necks = Array.from({ length: model.guitars }, (_, guitar) => {
-    const own = model.options.flatMap((list) =>
-      list.filter((o) => o.guitar === guitar).map(({ neck }) => neck),
-    );
-    return [...new Set([...own, model.start[guitar]!, UNUSED])];
-  });
-  const strides: number[] = [];
-  let count = model.guitars;
-  for (const list of necks) {
-    strides.push(count);
-    count *= list.length;
-  }
-  if (count > MOST_JOINT_STATES) return null;
-  const rows = new Int32Array(count * model.guitars);
-  const current = new Int32Array(count);
-  for (let j = 0; j < count; j += 1) {
-    current[j] = j % model.guitars;
-    for (let guitar = 0; guitar < model.guitars; guitar += 1)
-      rows[j * model.guitars + guitar] = Math.floor(j / strides[guitar]!) % necks[guitar]!.length;
-  }
-  return { count, necks, strides, rows, current };
-}
-
-type Step = { guitar: number; neck: number; cover: number; penalty: number };
-
-/** One way to go on: what it costs from each joint state, and which state it leads to. */
-type Target = { costs: Float64Array; next: Int32Array };
-
-function stepOf(model: Model, song: number, option: Option): Step {
-  return { guitar: option.guitar, neck: option.neck, cover: model.cover[song]!, penalty: option.penalty };
-}
-
-/** Songs played one right after the other, each in one of its ways. */
-function targetOf(model: Model, joint: Joint, steps: Step[]): Target {
-  const costs = new Float64Array(joint.count);
-  const next = Int32Array.from(costs, (_, j) => j);
-  for (const { guitar, neck, cover, penalty } of steps) {
-    const necks = joint.necks[guitar]!;
-    const row = necks.indexOf(neck);
-    for (let j = 0; j < joint.count; j += 1) {
-      const at = next[j]!;
-      const from = joint.rows[at * model.guitars + guitar]!;
-      const changing = joint.current[at] !== guitar;
-      costs[j]! += stepCost(model, guitar, necks[from]!, neck, cover, false, changing, ENOUGH) + penalty;
-      next[j] = at + (row - from) * joint.strides[guitar]! + guitar - joint.current[at]!;
-    }
-  }
-  return { costs, next };
-}
 
 /** For each neck of each guitar that a passing song can bring about, the cheapest way to it. */
 function passingTargets(model: Model, joint: Joint, passing: number[]): Target[] {
@@ -190,13 +133,10 @@ export function jointBound(model: Model, rules: OrderRules, layout: SetLayout): 
     units.map(({ openWith }) => openWith),
     layout,
   );
-  const rowOf = joint.necks.map((necks) => new Map(necks.map((neck, row) => [neck, row])));
 
   return (state, depth) => {
     if (depth === 0 || depth === model.songs) return 0;
-    let j = state[layout.current]!;
-    for (let guitar = 0; guitar < model.guitars; guitar += 1)
-      j += rowOf[guitar]!.get(state[layout.necks + guitar]!)! * joint.strides[guitar]!;
+    const j = jointOf(joint, (guitar) => state[layout.necks + guitar]!, state[layout.current]!);
     const open = openUnits(state);
     const last = state[layout.last]!;
     const begun = last !== NOBODY && rules.next[last] !== -1 && inChains.has(last);
