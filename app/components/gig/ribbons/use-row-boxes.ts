@@ -18,7 +18,7 @@ export function expectedBoxes(rows: readonly Row[], troubles: ReadonlyMap<string
   rows.forEach((row, index) => {
     if (index > 0 && rows[index - 1]!.section !== row.section) y += usual.encore;
     if (row.gap) y += usual.gap - usual.overlap;
-    const lines = (troubles.get(row.entry.id)?.length ?? 0) + (row.wishes.length > 0 ? 1 : 0);
+    const lines = (troubles.get(row.entry.id)?.length ?? 0) + (row.wishes.length > 0 ? 1.2 : 0);
     const height = usual.row + (lines > 0 ? usual.trouble * lines + usual.below : 0);
     tops.push(y);
     heights.push(height);

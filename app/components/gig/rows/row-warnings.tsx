@@ -1,3 +1,4 @@
+import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { usePointer } from "#app/components/gig/rows/gap-focus.tsx";
 import { Octagon, Warning } from "#app/components/ui/warning.tsx";
 import type { RowWarning } from "#app/domain/gig/warnings.ts";
@@ -39,17 +40,40 @@ export function RowWarnings({ entryId, warnings }: { entryId: string; warnings: 
   );
 }
 
-type RowTroublesProps = { troubles: readonly string[]; wishes: readonly string[] };
+type RowTroublesProps = {
+  troubles: readonly string[];
+  wishes: readonly string[];
+  /** Without anything to press. */
+  plain: boolean;
+};
 
 /** What must be mended about a row, a line each, and the wishes it breaks. */
-export function RowTroubles({ troubles, wishes }: RowTroublesProps) {
+export function RowTroubles({ troubles, wishes, plain }: RowTroublesProps) {
   if (troubles.length + wishes.length === 0) return null;
   return (
     <div className="flex flex-col pr-3 pb-1.5 pl-3 [grid-area:warn] lg:pl-3.5">
       {troubles.map((message) => (
         <Warning key={message}>{message}</Warning>
       ))}
-      {wishes.length > 0 ? <p className="text-grey-800 text-sm leading-5">{wishes.join(" ")}</p> : null}
+      {wishes.length > 0 ? <BrokenWishes words={wishes.join(" ")} plain={plain} /> : null}
     </div>
+  );
+}
+
+const quiet = "text-left text-grey-800 text-sm leading-5";
+
+/** Which wishes a row breaks. A press opens them, for those who may change them. */
+function BrokenWishes({ words, plain }: { words: string; plain: boolean }) {
+  const { may, openDialog } = usePageTools();
+  if (plain || !may.plan) return <p className={quiet}>{words}</p>;
+  return (
+    <button
+      type="button"
+      className={`${quiet} min-h-6 self-start hover:underline`}
+      onClick={() => openDialog({ kind: "wishes" })}
+    >
+      {words}
+      <span className="sr-only"> Change the wishes</span>
+    </button>
   );
 }

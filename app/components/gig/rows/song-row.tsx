@@ -117,7 +117,7 @@ function RowBodyOnce({ row, set, first, last, troubles, plain = false }: RowBody
       <div className="flex justify-end [grid-area:menu]">
         {may.prepare && !plain ? <MenuButton entryId={entry.id} title={title} /> : null}
       </div>
-      <RowTroubles troubles={troubles} wishes={row.wishes} />
+      <RowTroubles troubles={troubles} wishes={row.wishes} plain={plain} />
     </>
   );
 }
