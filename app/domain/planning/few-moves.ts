@@ -3,6 +3,7 @@ import { jointKeptOrderBound } from "#app/domain/planning/bounds/joint-kept-orde
 import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts";
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
+import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { keptCases } from "#app/domain/planning/kept-cases.ts";
 import type { Model } from "#app/domain/planning/model.ts";
 import {
@@ -25,7 +26,7 @@ const ROUNDS_AT_FIRST = 60;
 const ROUNDS = 240;
 
 /** What a proof may take before its bound is made as close as it can be. */
-const EASY_LOOKS = 10_000;
+const EASY_LOOKS = 100_000;
 const CHANGES = 4_000;
 
 /** What is tried before the tunings that kept guitars may have are told apart. */
@@ -50,7 +51,10 @@ export function fewMovesSpace({ rules, problem, best }: Run, model: Model, round
       keptOrderBound(plain, rules, layout, { target, rounds }),
     ),
   );
-  return setSpace(model, rules, bound);
+  if (problem.maxMoved === 1) return setSpace(model, rules, bound);
+  const closeness = rounds > ROUNDS_AT_FIRST ? "dear" : "cheap";
+  const work = overLooseCapos(model, (plain, layout) => partitionBound(plain, rules, layout, closeness));
+  return setSpace(model, rules, bound, work);
 }
 
 /** The same with all guitars followed together, where their joint states are few enough for that; else with dear prices. */
@@ -66,7 +70,8 @@ function closeSpace(run: Run, looks: number): SetSpace {
     run.looks += walk.spent / STEPS_PER_LOOK;
     return greatest(movesLeft(rules, layout, problem.maxMoved!), walk.bound);
   });
-  const space = setSpace(model, rules, bound);
+  const work = overLooseCapos(model, (plain, layout) => partitionBound(plain, rules, layout, "dear"));
+  const space = setSpace(model, rules, bound, work);
   return together ? space : fewMovesSpace(run, run.model, ROUNDS);
 }
 
