@@ -1,4 +1,5 @@
 import type { Answer } from "#app/domain/planning/answer.ts";
+import type { KnownPlan } from "#app/domain/planning/known-plan.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import { search } from "#app/domain/planning/search.ts";
 
@@ -10,9 +11,13 @@ export type PlanStep = { answer: Answer | null; bound: number; effort: number; d
  * the same answers as anybody else. Leave it at any step; its answer is valid and its bound true.
  *
  * @param effort how much to do, see `usualEffort`
+ * @param from a plan that is known already, to begin with
  */
-export function* planInSteps(problem: Problem, { effort }: { effort: number }): Generator<PlanStep, void> {
-  const steps = search(problem, { effort });
+export function* planInSteps(
+  problem: Problem,
+  { effort, from = null }: { effort: number; from?: KnownPlan | null },
+): Generator<PlanStep, void> {
+  const steps = search(problem, { effort, from });
   let spent = 0;
   for (;;) {
     const step = steps.next();

@@ -1,9 +1,16 @@
 import type { Answer } from "#app/domain/planning/answer.ts";
+import type { KnownPlan } from "#app/domain/planning/known-plan.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
 import { type PlanStep, planInSteps } from "#app/workers/plan-in-steps.ts";
 
+/**
+ * A problem with a key. A plan that is known begins it: `from`, or the answer to the problem of the key `after`, where this
+ * worker has it.
+ */
+export type PlannerJob = { key: string; problem: Problem; from?: KnownPlan; after?: string };
+
 /** What the page asks for: these problems instead of whatever was asked before. No problems: stop. */
-export type PlannerAsk = { run: number; jobs: { key: string; problem: Problem }[]; effort: number };
+export type PlannerAsk = { run: number; jobs: PlannerJob[]; effort: number };
 
 /** What is known of one problem so far; `done` where nothing better will come. */
 export type PlannerTold = {
@@ -18,7 +25,11 @@ export type PlannerTold = {
 /** How long the search goes on before it looks whether something else was asked meanwhile. */
 const breathMilliseconds = 40;
 
+/** Answers that are kept to begin others with. */
+const keptAnswers = 60;
+
 const scope = self as DedicatedWorkerGlobalScope;
+const answers = new Map<string, KnownPlan>();
 let current = 0;
 
 scope.addEventListener("message", ({ data }: MessageEvent<PlannerAsk>) => {
@@ -27,25 +38,29 @@ scope.addEventListener("message", ({ data }: MessageEvent<PlannerAsk>) => {
 });
 
 async function work({ run, jobs, effort }: PlannerAsk): Promise<void> {
-  for (const { key, problem } of jobs) {
-    const step = await solveInBreaths(run, key, problem, effort);
+  for (const job of jobs) {
+    const step = await solveInBreaths(run, job, effort);
     if (step === null) return;
-    tell({ run, key, ...step });
+    keep(job.key, step);
+    tell({ run, key: job.key, ...step });
   }
 }
 
+function keep(key: string, { answer }: PlanStep): void {
+  if (!answer || answer.status === "infeasible") return;
+  answers.set(key, { order: answer.order, plays: answer.plays });
+  const [oldest] = answers.keys();
+  if (answers.size > keptAnswers && oldest !== undefined) answers.delete(oldest);
+}
+
 /** The last step, telling the steps on the way; null where something else was asked meanwhile. */
-async function solveInBreaths(
-  run: number,
-  key: string,
-  problem: Problem,
-  effort: number,
-): Promise<PlanStep | null> {
+async function solveInBreaths(run: number, job: PlannerJob, effort: number): Promise<PlanStep | null> {
+  const from = job.from ?? answers.get(job.after ?? "");
   let breath = performance.now();
-  for (const step of planInSteps(problem, { effort })) {
+  for (const step of planInSteps(job.problem, { effort, ...(from ? { from } : {}) })) {
     if (step.done) return step;
     if (performance.now() - breath < breathMilliseconds) continue;
-    tell({ run, key, ...step });
+    tell({ run, key: job.key, ...step });
     await breathe();
     if (run !== current) return null;
     breath = performance.now();

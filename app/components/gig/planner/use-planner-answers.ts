@@ -1,10 +1,6 @@
 import { useEffect, useMemo, useRef, useState } from "react";
 import type { Answer } from "#app/domain/planning/answer.ts";
-import type { Problem } from "#app/domain/planning/problem.ts";
-import type { PlannerAsk, PlannerTold } from "#app/workers/planner.browser.ts";
-
-/** A problem to be planned, known by a key: problems that are equal have equal keys. */
-export type PlannerJob = { key: string; problem: Problem };
+import type { PlannerAsk, PlannerJob, PlannerTold } from "#app/workers/planner.browser.ts";
 
 /** What is known of a problem so far: the best answer (null: none yet), what no plan undercuts, the effort spent. */
 export type PlannerKnown = { answer: Answer | null; bound: number; effort: number; done: boolean };
@@ -67,7 +63,7 @@ function withTold(
  * Plans problems beside the page, one after another in the order given, in a worker of this component's own. What runs is
  * cancelled when the problems change or the component goes; answers are kept by key.
  *
- * @param jobs none: nothing is asked, what runs is cancelled
+ * @param jobs problems that are equal have equal keys; none: nothing is asked, what runs is cancelled
  * @param effort what each may cost, see `usualEffort`
  */
 export function usePlannerAnswers(
@@ -95,7 +91,8 @@ export function usePlannerAnswers(
     run.current += 1;
     asked.current = new Set(jobs.map((job) => job.key));
     const open = jobs.filter((job) => !knownNow.current.get(job.key)?.done);
-    ask({ run: run.current, jobs: open.map(({ key, problem }) => ({ key, problem })), effort });
+    const sent = open.map(({ key, problem, from, after }) => ({ key, problem, from, after }));
+    ask({ run: run.current, jobs: sent, effort });
     if (jobs.length > 0) setBegun(true);
   }, [keys, effort, ask]);
   return useMemo(() => ({ known, begun, failed }), [known, begun, failed]);

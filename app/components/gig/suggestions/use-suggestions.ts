@@ -13,17 +13,20 @@ export type Suggestions = Pick<PlannerAnswers, "begun" | "failed"> & { sets: Set
 /** How much the search may do for one rung: a few seconds for a set of 20 songs. */
 const effort = 400_000;
 
-type Job = { setId: string; rung: Rung; key: string; problem: Problem };
+type Job = { setId: string; rung: Rung; key: string; problem: Problem; after?: string };
 
-/** Cheapest first: each rung of every set before the next rung of any. */
+/** Cheapest first: each rung of every set before the next rung of any. Each begins with the answer to the one before. */
 function jobsOf(plan: GigPlan): Job[] {
+  const sets = plan.sets.filter((set) => set.problem.songs.length > 1);
+  const before = new Map<string, string>();
   return rungs.flatMap((rung) =>
-    plan.sets
-      .filter((set) => set.problem.songs.length > 1)
-      .map((set) => {
-        const problem = rungProblem(set.problem, rung);
-        return { setId: set.set.id, rung, key: JSON.stringify(problem), problem };
-      }),
+    sets.map(({ set, problem: whole }): Job => {
+      const problem = rungProblem(whole, rung);
+      const key = JSON.stringify(problem);
+      const after = before.get(set.id);
+      before.set(set.id, key);
+      return { setId: set.id, rung, key, problem, ...(after ? { after } : {}) };
+    }),
   );
 }
 

@@ -51,6 +51,7 @@ function WhatHolds({ gig, plan, repertoire, lead, best }: WhyNotLessProps) {
         lift,
         problem: lift.problem,
         key: JSON.stringify(lift.problem),
+        from: { order: best.order, plays: best.plays },
       })),
     [gig, plan, best, repertoire, naming],
   );
