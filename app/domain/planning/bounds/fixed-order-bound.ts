@@ -6,7 +6,7 @@ import { stepCost } from "#app/domain/planning/step-cost.ts";
 
 /** A tech is never late in a bound. */
 const ENOUGH = Number.POSITIVE_INFINITY;
-const ROUNDS = 400;
+const ROUNDS = 160;
 
 type Way = { place: number; penalty: number };
 
@@ -64,8 +64,9 @@ function sweep(part: GuitarPart, prices: Float64Array): void {
       for (let hand = 0; hand < 2; hand += 1) {
         let best = leave;
         const from = ((song * rows + place) * 2 + hand) * most;
-        for (const [w, way] of ways[song]!.entries()) {
-          const cost = steps[from + w]! - price + least[(after + way.place) * 2 + 1]!;
+        const list = ways[song]!;
+        for (let w = 0; w < list.length; w += 1) {
+          const cost = steps[from + w]! - price + least[(after + list[w]!.place) * 2 + 1]!;
           if (cost < best) best = cost;
         }
         least[(song * rows + place) * 2 + hand] = best;

@@ -2,13 +2,16 @@ import { HELD, INSERTED, OPENED, RESTING } from "#app/domain/planning/bounds/kep
 import { keptOrderPrices, startingValue } from "#app/domain/planning/bounds/kept-order-prices.ts";
 import type { Model } from "#app/domain/planning/model.ts";
 import type { OrderRules } from "#app/domain/planning/order-rules.ts";
-import type { SetLayout } from "#app/domain/planning/set-layout.ts";
+import { isPlayed, type SetLayout } from "#app/domain/planning/set-layout.ts";
 import type { SetBound } from "#app/domain/planning/set-space.ts";
 
-/** Numbers of the songs whose bit is set in a word, from `base` on. */
-function eachBit(word: number, base: number, visit: (song: number) => void): void {
-  for (let left = word; left !== 0; left &= left - 1) visit(base + 31 - Math.clz32(left & -left));
+/** The songs of a word's bits that are before `followed`, `base` being the first song of the word. */
+function bitsBefore(followed: number, base: number): number {
+  if (followed <= base) return 0;
+  return followed >= base + 32 ? -1 : (1 << (followed - base)) - 1;
 }
+
+const firstBit = (word: number) => 31 - Math.clz32(word & -word);
 
 /**
  * For a set of which only some songs may leave the present order: each guitar goes through the present order for itself
@@ -40,12 +43,12 @@ export function keptOrderBound(
   const { kept, moved, passAll } = prices;
 
   /** What songs from `followed` on that may still leave take off, without those that were played early. */
-  function leavingBut(followed: number, mayMove: number, early: (song: number) => boolean): number {
+  function leavingBut(followed: number, mayMove: number, state: Int32Array): number {
     let value = 0;
     let left = mayMove;
     for (let i = 0; i < leaving.order.length && left > 0; i += 1) {
       const song = leaving.order[i]!;
-      if (song < followed || early(song)) continue;
+      if (song < followed || isPlayed(layout, state, song)) continue;
       value += leaving.costs[song]!;
       left -= 1;
     }
@@ -57,25 +60,25 @@ export function keptOrderBound(
     if (depth === 0) return atFirst;
     const followed = state[layout.kept]!;
     const mayMove = most - state[layout.moved]!;
-    const isEarly = (song: number) => ((state[layout.played + (song >>> 5)]! >>> (song & 31)) & 1) === 1;
     let value = staying[followed]!;
     let early = 0;
     let pending = 0;
     for (let word = 0; word < layout.playedWords; word += 1) {
       const base = word * 32;
-      const gone = followed <= base ? 0 : followed >= base + 32 ? -1 : (1 << (followed - base)) - 1;
+      const gone = bitsBefore(followed, base);
       const played = state[layout.played + word]!;
-      eachBit(played & ~gone, base, (song) => {
+      for (let ahead = played & ~gone; ahead !== 0; ahead &= ahead - 1) {
+        const song = base + firstBit(ahead);
         value -= kept[song]! + passAll[song]!;
         early += 1;
-      });
-      eachBit(~played & gone, base, (song) => {
-        value += moved[song]!;
+      }
+      for (let behind = ~played & gone; behind !== 0; behind &= behind - 1) {
+        value += moved[base + firstBit(behind)]!;
         pending += 1;
-      });
+      }
     }
     const toInsert = mayMove + pending;
-    if (early > 0) value += leavingBut(followed, mayMove, isEarly);
+    if (early > 0) value += leavingBut(followed, mayMove, state);
     else value += leaving.least[followed * (most + 1) + mayMove]!;
     const current = state[layout.current]!;
     const untouched = state[layout.moved] === pending;
