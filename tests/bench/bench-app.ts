@@ -3,6 +3,7 @@ import { randomBytes } from "node:crypto";
 import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { generateNKeysBetween } from "fractional-indexing";
+import { nanoid } from "nanoid";
 import { newGig } from "#app/domain/gig/new-gig.ts";
 import { buildIfChanged } from "#app/launch/build.ts";
 import { startMariaDb } from "#app/launch/mariadb.ts";
@@ -56,7 +57,7 @@ export async function seedGig(act: Act, guitars: readonly string[], songs: numbe
   );
   const ids = await createSongs(getDb(), act, fields);
   const ranks = generateNKeysBetween(null, null, songs);
-  const gig = newGig(gigDetails, { sets: 1, interval: 0, newId: () => `bench-${songs}` });
+  const gig = newGig(gigDetails, { sets: 1, interval: 0, newId: () => nanoid(16) });
   const entries = ids.map((songId, index) => ({
     id: `e${songs}-${index}`,
     songId,
