@@ -6,7 +6,8 @@ import { stepCost } from "#app/domain/planning/step-cost.ts";
 
 /** A tech is never late in a bound. */
 const ENOUGH = Number.POSITIVE_INFINITY;
-const ROUNDS = 160;
+const MOST_ROUNDS = 160;
+const ROUNDS_A_SONG = 4;
 
 type Way = { place: number; penalty: number };
 
@@ -123,7 +124,7 @@ export function fixedOrderBound(model: Model, layout: SetLayout, target: number)
       }
       return { value, lack };
     },
-    { target, rounds: ROUNDS, free: model.songs },
+    { target, rounds: Math.min(MOST_ROUNDS, ROUNDS_A_SONG * model.songs), free: model.songs },
   );
   for (const part of parts) sweep(part, prices);
   const rest = new Float64Array(model.songs + 1);
