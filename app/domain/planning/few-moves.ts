@@ -4,10 +4,9 @@ import { keptOrderBound } from "#app/domain/planning/bounds/kept-order-bound.ts"
 import { overLooseCapos } from "#app/domain/planning/bounds/loose-capos.ts";
 import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
-import { keptCases } from "#app/domain/planning/kept-cases.ts";
 import type { Model } from "#app/domain/planning/model.ts";
+import { proveByCases } from "#app/domain/planning/prove-cases.ts";
 import {
-  type Case,
   isProven,
   type Progress,
   progress,
@@ -28,9 +27,6 @@ const ROUNDS = 240;
 /** What a proof may take before its bound is made as close as it can be. */
 const EASY_LOOKS = 100_000;
 const CHANGES = 4_000;
-
-/** What is tried before the tunings that kept guitars may have are told apart. */
-const WHOLE_LOOKS = 300_000;
 
 /** What following all guitars together may take, and how much of it counts as one look. */
 const WALK_STEPS = 600_000_000;
@@ -70,7 +66,9 @@ function closeSpace(run: Run, looks: number): SetSpace {
     run.looks += walk.spent / STEPS_PER_LOOK;
     return greatest(movesLeft(rules, layout, problem.maxMoved!), walk.bound);
   });
-  const work = overLooseCapos(model, (plain, layout) => partitionBound(plain, rules, layout, "dear"));
+  const work = overLooseCapos(model, (plain, layout) =>
+    together ? partitionBound(plain, rules, layout, "dear") : () => 0,
+  );
   const space = setSpace(model, rules, bound, work);
   return together ? space : fewMovesSpace(run, run.model, ROUNDS);
 }
@@ -86,13 +84,8 @@ export function* planFewMoves(run: Run, looks: number): Generator<Progress, void
   const close = closeSpace(run, looks);
   tryBeam(run, close, (looks - run.looks) / 10, 64);
   yield progress(run);
-  const found = keptCases(run.model);
-  const asOne = found.length > 1 ? Math.min(looks, run.looks + WHOLE_LOOKS) : looks;
-  yield* prove(run, [{ space: () => close, least: 0 }], asOne, found.length === 1);
-  if (isProven(run) || run.looks >= looks) return;
-  const cases = found.map((one): Case => {
+  yield* proveByCases(run, close, looks, (one) => {
     const first = fewMovesSpace(run, one, ROUNDS_AT_FIRST);
     return { space: () => fewMovesSpace(run, one, ROUNDS), least: first.bound(first.start, 0) };
   });
-  yield* prove(run, cases, looks, true);
 }

@@ -8,16 +8,15 @@ import { movesLeft } from "#app/domain/planning/bounds/moves-left.ts";
 import { partitionBound } from "#app/domain/planning/bounds/partition-bound.ts";
 import { fewMayMove, fewMovesSpace, planFewMoves } from "#app/domain/planning/few-moves.ts";
 import { fixedOrderSpace, onlyOrder, planInOrder, spaceInOrder } from "#app/domain/planning/fixed-order.ts";
-import { keptCases } from "#app/domain/planning/kept-cases.ts";
 import { withoutRetuningKept } from "#app/domain/planning/kept-tunings.ts";
 import { type KnownPlan, knownPlan } from "#app/domain/planning/known-plan.ts";
 import { type Model, modelOf } from "#app/domain/planning/model.ts";
 import { orderTest } from "#app/domain/planning/order-holds.ts";
 import { compileRules } from "#app/domain/planning/order-rules.ts";
 import type { Problem } from "#app/domain/planning/problem.ts";
+import { proveByCases } from "#app/domain/planning/prove-cases.ts";
 import { orderThatHolds, ruleConflict } from "#app/domain/planning/rule-conflict.ts";
 import {
-  type Case,
   isProven,
   LOOKS_PER_EFFORT,
   leastAtFirst,
@@ -44,9 +43,6 @@ const TO_THE_END = 500_000_000;
 
 /** What is tried with the cheap bound before the dear one is made. */
 const CHEAP_LOOKS = 60_000;
-
-/** What is tried before the tunings that kept guitars may have are told apart. */
-const WHOLE_LOOKS = 300_000;
 
 /** Share of the best total so far that the last section must cost by itself to be looked at by itself. */
 const WORTHWHILE_ENDING = 0.1;
@@ -182,15 +178,9 @@ export function* search(
     const dear = dearSpace(run, model);
     tryBeam(run, dear, (looks - run.looks) / 10, 64);
     yield progress(run);
-    const found = keptCases(model);
-    const asOne = found.length > 1 ? Math.min(looks, run.looks + WHOLE_LOOKS) : looks;
-    yield* prove(run, [{ space: () => dear, least: 0 }], asOne, found.length === 1);
-    if (!isProven(run) && run.looks < looks) {
-      const cases = found.map((one): Case => {
-        return { space: () => dearSpace(run, one), least: leastAtFirst(cheapSpace(run, one)) };
-      });
-      yield* prove(run, cases, looks, true);
-    }
+    yield* proveByCases(run, dear, looks, (one) => {
+      return { space: () => dearSpace(run, one), least: leastAtFirst(cheapSpace(run, one)) };
+    });
   }
   return lastWord(run);
 }
