@@ -100,7 +100,8 @@ export type GigPlan = {
   note: string | null;
 };
 
-const nothing: Totals = {
+/** Totals of nothing at all. */
+export const noTotals: Totals = {
   exposed: 0,
   longestGap: 0,
   strings: 0,
@@ -123,7 +124,7 @@ function sumOf(totals: readonly Totals[]): Totals {
       seconds: sum.seconds + one.seconds,
       wishes: sum.wishes + one.wishes,
     }),
-    nothing,
+    noTotals,
   );
 }
 

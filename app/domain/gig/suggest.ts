@@ -4,7 +4,7 @@ import { entryTitles } from "#app/domain/gig/entry-titles.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import type { Lead } from "#app/domain/gig/lead.ts";
 import { leastChange } from "#app/domain/gig/least-change.ts";
-import { longestRising } from "#app/domain/gig/longest-rising.ts";
+import { moveWords, type Standing } from "#app/domain/gig/move-words.ts";
 import { reorderEdits } from "#app/domain/gig/order.ts";
 import type { SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
@@ -50,32 +50,9 @@ export type Suggested = {
   certainty: string;
 };
 
-/** The songs that move, those that come to stand side by side in one line, with the song they then stand before. */
-function movesOf(
-  { order: present, songs }: Problem,
-  order: readonly string[],
-  title: (id: string) => string,
-): string[] {
-  const places = new Map(present.map((id, index) => [id, index]));
+function standingIn({ songs }: Problem, order: readonly string[]): Standing[] {
   const sections = new Map(songs.map((song) => [song.id, song.section]));
-  const kept = new Set(longestRising(order.map((id) => places.get(id) ?? 0)).map((index) => order[index]));
-  const moves: string[] = [];
-  let run: string[] = [];
-  order.forEach((id, index) => {
-    if (kept.has(id)) return;
-    run.push(title(id));
-    const next = order[index + 1];
-    const here = next !== undefined && sections.get(next) === sections.get(id);
-    if (here && !kept.has(next)) return;
-    const where = here
-      ? `before ${title(next)}`
-      : next === undefined
-        ? "to the end"
-        : "just before the encore";
-    moves.push(`${run.join(", then ")} ${where}`);
-    run = [];
-  });
-  return moves;
+  return order.map((id) => ({ id, section: sections.get(id)! }));
 }
 
 /** What each song takes up instead: one line a guitar, one a song that is played another way. */
@@ -119,7 +96,7 @@ export function describeSuggestion(
   return {
     totals: answer.totals,
     saved: savedWords(lead, plan.evaluation, answer),
-    moves: movesOf(plan.problem, answer.order, title),
+    moves: moveWords(plan.problem.order, standingIn(plan.problem, answer.order), title),
     changes: changesOf(plan, answer, repertoire, title, naming),
     certainty: certaintyWords(plan.problem, answer, rung, lead),
   };

@@ -9,6 +9,11 @@ function sameValue(a: unknown, b: unknown): boolean {
   return keys.every((key) => sameValue(a[key as keyof typeof a], b[key as keyof typeof b]));
 }
 
+/** Whether two rows hold the same entry, played in the same way. */
+function sameSong(a: Row, b: Row): boolean {
+  return a.entry === b.entry && a.song === b.song && a.guitar === b.guitar && a.neck === b.neck;
+}
+
 /**
  * Whether a row would be drawn the same. A plan is made anew at each move of a drag, so its rows are new objects, but
  * most of them say what they said before. When a song begins is not drawn in its row.
@@ -16,10 +21,7 @@ function sameValue(a: unknown, b: unknown): boolean {
 export function sameRow(a: Row, b: Row): boolean {
   return (
     a === b ||
-    (a.entry === b.entry &&
-      a.song === b.song &&
-      a.guitar === b.guitar &&
-      a.neck === b.neck &&
+    (sameSong(a, b) &&
       a.number === b.number &&
       a.section === b.section &&
       a.left === b.left &&
@@ -35,10 +37,7 @@ export function sameRow(a: Row, b: Row): boolean {
 export function sameBody(a: Row, b: Row): boolean {
   return (
     a === b ||
-    (a.entry === b.entry &&
-      a.song === b.song &&
-      a.guitar === b.guitar &&
-      a.neck === b.neck &&
+    (sameSong(a, b) &&
       (a.gap === null) === (b.gap === null) &&
       sameValue(a.retuned, b.retuned) &&
       sameWords(a.wishes, b.wishes) &&
@@ -49,15 +48,7 @@ export function sameBody(a: Row, b: Row): boolean {
 
 /** Whether the line of the gap that leads into a row would be drawn the same. */
 export function sameGap(a: Row, b: Row): boolean {
-  return (
-    a === b ||
-    (a.entry === b.entry &&
-      a.song === b.song &&
-      a.guitar === b.guitar &&
-      a.neck === b.neck &&
-      sameValue(a.gap, b.gap) &&
-      sameValue(a.warnings, b.warnings))
-  );
+  return a === b || (sameSong(a, b) && sameValue(a.gap, b.gap) && sameValue(a.warnings, b.warnings));
 }
 
 /** Whether two lists of sentences are the same. */

@@ -1,6 +1,7 @@
 import { useMemo } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { RibbonThumbnails } from "#app/components/gig/ribbons/ribbon-thumbnails.tsx";
+import { ChangeList } from "#app/components/gig/suggestions/change-list.tsx";
 import type { Described } from "#app/components/gig/suggestions/described.ts";
 import { rungTitles } from "#app/components/gig/suggestions/rung-words.ts";
 import { Button } from "#app/components/ui/button.tsx";
@@ -97,37 +98,11 @@ function Against({ now, then }: { now: Totals; then: Totals }) {
 
 /** So many letters of changes stand there at once; the rest is asked for. */
 const mostLetters = 150;
-
 function Changes({ changes }: { changes: string[] }) {
   let letters = 0;
   const fitting = changes.filter((words, index) => {
     letters += words.length;
     return index === 0 || letters <= mostLetters;
   });
-  const more = changes.slice(fitting.length);
-  return (
-    <div className="text-grey-800 text-sm leading-snug">
-      <ul className="flex flex-col gap-0.5">
-        {fitting.map((words) => (
-          <li key={words} className="pl-3 -indent-3">
-            {words}
-          </li>
-        ))}
-      </ul>
-      {more.length > 0 ? (
-        <details className="pt-0.5">
-          <summary className="w-fit underline underline-offset-2">
-            {more.length === 1 ? "1 more change" : `${more.length} more changes`}
-          </summary>
-          <ul className="flex flex-col gap-0.5 pt-0.5">
-            {more.map((words) => (
-              <li key={words} className="pl-3 -indent-3">
-                {words}
-              </li>
-            ))}
-          </ul>
-        </details>
-      ) : null}
-    </div>
-  );
+  return <ChangeList changes={changes} atOnce={fitting.length} />;
 }

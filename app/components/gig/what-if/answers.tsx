@@ -1,7 +1,7 @@
 import { type ReactNode, useState } from "react";
 import { usePageTools } from "#app/components/gig/desk/page-context.tsx";
 import { RibbonThumbnails } from "#app/components/gig/ribbons/ribbon-thumbnails.tsx";
-import { ChangeList } from "#app/components/gig/what-if/change-list.tsx";
+import { ChangeList } from "#app/components/gig/suggestions/change-list.tsx";
 import { OutcomeTable } from "#app/components/gig/what-if/outcome-table.tsx";
 import type { Outcomes } from "#app/components/gig/what-if/use-outcomes.ts";
 import { useUsed } from "#app/components/gig/what-if/used-context.tsx";
@@ -11,6 +11,9 @@ import { actionFor } from "#app/domain/gig/edit.ts";
 import type { Needs } from "#app/domain/gig/what-if/needs.ts";
 import type { Outcome } from "#app/domain/gig/what-if/outcome.ts";
 import type { Guitar } from "#app/domain/repertoire/guitar.ts";
+
+/** So many changes of an answer stand there at once. */
+const changesAtOnce = 5;
 
 type AnswersProps = {
   found: Outcomes;
@@ -109,7 +112,7 @@ function Chosen({ outcome, now, guitars, use, head, next }: ChosenProps) {
           <RibbonThumbnails before={before} after={after} guitars={guitars} />
         </div>
       ))}
-      <ChangeList changes={changes} />
+      <ChangeList changes={changes} atOnce={changesAtOnce} />
       {now.wishes > 0 || needs.wishes > 0 ? (
         <p className="text-grey-800 text-sm leading-snug">
           Broken wishes count as {Math.round(needs.wishes)} s then, {Math.round(now.wishes)} s now.

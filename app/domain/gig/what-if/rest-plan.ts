@@ -1,7 +1,7 @@
 import { applyEdits } from "#app/domain/gig/apply-edit.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
 import { reorderEdits } from "#app/domain/gig/order.ts";
-import type { SetPlan, Totals } from "#app/domain/gig/plan.ts";
+import { noTotals, type SetPlan, type Totals } from "#app/domain/gig/plan.ts";
 import { rowsOf } from "#app/domain/gig/plan-rows.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import type { Rest } from "#app/domain/gig/what-if/string-breaks.ts";
@@ -10,17 +10,6 @@ import { weigh } from "#app/domain/planning/aim.ts";
 import type { Play } from "#app/domain/planning/answer.ts";
 import { type EvaluatedGap, type Evaluation, evaluate } from "#app/domain/planning/evaluate.ts";
 import { wishSeconds } from "#app/domain/planning/wishes.ts";
-
-const noTotals: Totals = {
-  exposed: 0,
-  longestGap: 0,
-  strings: 0,
-  semitones: 0,
-  capoActions: 0,
-  swaps: 0,
-  seconds: 0,
-  wishes: 0,
-};
 
 function inGaps(
   gaps: readonly EvaluatedGap[],

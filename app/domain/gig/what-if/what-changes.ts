@@ -1,6 +1,6 @@
 import { entryTitles } from "#app/domain/gig/entry-titles.ts";
 import type { Gig } from "#app/domain/gig/gig.ts";
-import { longestRising } from "#app/domain/gig/longest-rising.ts";
+import { moveWords } from "#app/domain/gig/move-words.ts";
 import type { Row, SetPlan } from "#app/domain/gig/plan.ts";
 import type { Repertoire } from "#app/domain/gig/repertoire.ts";
 import { caposWords } from "#app/domain/music/capo.ts";
@@ -17,28 +17,6 @@ export function titlesOf(gigs: readonly Gig[], setId: string, repertoire: Repert
     title: entryTitles(gig, setId, repertoire),
   }));
   return (id) => looks.find(({ ids }) => ids.has(id))?.title(id) ?? "A song";
-}
-
-/** Songs that move: those that come to stand side by side in one line, with the song they then stand before. */
-function movesOf(before: readonly Row[], after: readonly Row[], title: Title): string[] {
-  const places = new Map(before.map((row, index) => [row.entry.id, index]));
-  const common = after.filter((row) => places.has(row.entry.id));
-  const kept = new Set(
-    longestRising(common.map((row) => places.get(row.entry.id)!)).map((index) => common[index]!.entry.id),
-  );
-  const moves: string[] = [];
-  let run: string[] = [];
-  common.forEach((row, index) => {
-    if (kept.has(row.entry.id)) return;
-    run.push(title(row.entry.id));
-    const next = common[index + 1];
-    const here = next?.section === row.section ? next : undefined;
-    if (here && !kept.has(here.entry.id)) return;
-    const where = here ? `before ${title(here.entry.id)}` : next ? "just before the encore" : "to the end";
-    moves.push(`${run.join(", then ")} ${where}`);
-    run = [];
-  });
-  return moves;
 }
 
 const neckWords = ({ open, capos }: Neck, naming: Naming) =>
@@ -99,7 +77,11 @@ export function changeWords(
   const now = new Map(before.rows.map((row) => [row.entry.id, row]));
   return [
     ...comingOf(now, after.rows, title, naming),
-    ...movesOf(before.rows, after.rows, title),
+    ...moveWords(
+      before.rows.map(({ entry }) => entry.id),
+      after.rows.map(({ entry, section }) => ({ id: entry.id, section })),
+      title,
+    ),
     ...guitarsOf(now, after.rows, title),
     ...waysOf(now, after.rows, title, naming),
   ];

@@ -1,13 +1,10 @@
-/** So many changes stand there at once; the rest is asked for. */
-const shownAtOnce = 5;
-
-/** What is done otherwise, one line each. */
-export function ChangeList({ changes }: { changes: readonly string[] }) {
+/** What is done otherwise, one line each: so many stand there at once, the rest is asked for. */
+export function ChangeList({ changes, atOnce }: { changes: readonly string[]; atOnce: number }) {
   if (changes.length === 0) return null;
-  const more = changes.slice(shownAtOnce);
+  const more = changes.slice(atOnce);
   return (
     <div className="text-grey-800 text-sm leading-snug">
-      <Lines lines={changes.slice(0, shownAtOnce)} />
+      <Lines lines={changes.slice(0, atOnce)} />
       {more.length > 0 ? (
         <details className="pt-0.5">
           <summary className="w-fit underline underline-offset-2 max-lg:py-2">
