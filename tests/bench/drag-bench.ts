@@ -1,9 +1,9 @@
 import { setTimeout as wait } from "node:timers/promises";
-import { type Browser, chromium, type Page } from "playwright-core";
+import type { Browser, Page } from "playwright-core";
 import { getDb } from "#app/services/db.server.ts";
 import { makeAct } from "#tests/support/factories.ts";
 import { signInAs } from "#tests/support/sign-in.ts";
-import { seedGig, seedGuitars } from "./bench-app.ts";
+import { launchChromium, seedGig, seedGuitars } from "./bench-app.ts";
 import { type BenchRow, median, milliseconds, quantile } from "./timing.ts";
 import { traceCategories, type Work, workOfMoves } from "./trace.ts";
 
@@ -126,15 +126,7 @@ export async function dragBench(url: string): Promise<BenchRow[]> {
   const act = await makeAct(getDb());
   const { name, value } = await signInAs(getDb(), act.personId);
   const guitars = await seedGuitars(act, ["Alder", "Birch", "Cedar"]);
-  const browser = await chromium.launch({
-    executablePath: "/usr/bin/chromium",
-    args: [
-      "--disable-gpu",
-      "--disable-quic",
-      "--disable-background-networking",
-      "--disable-component-update",
-    ],
-  });
+  const browser = await launchChromium();
   try {
     const window = await browser.newContext({ baseURL: url, viewport: { width: 1440, height: 900 } });
     await window.addCookies([{ name, value, url }]);

@@ -1,9 +1,9 @@
-import { type BrowserContext, chromium, type Page } from "playwright-core";
+import type { BrowserContext, Page } from "playwright-core";
 import { seedDemo } from "#app/launch/demo-seed.ts";
 import { getDb } from "#app/services/db.server.ts";
 import { hashPassword } from "#app/services/password.server.ts";
 import { signInAs } from "#tests/support/sign-in.ts";
-import { withApp } from "./bench-app.ts";
+import { launchChromium, withApp } from "./bench-app.ts";
 import { type BenchRow, median, milliseconds, table } from "./timing.ts";
 
 /** What the whole ladder may take. */
@@ -129,15 +129,7 @@ export async function ladderBench(url: string): Promise<BenchRow[]> {
     .where({ email: "performer@example.test" })
     .first<{ id: string }>("id");
   const { name, value } = await signInAs(getDb(), person?.id ?? "");
-  const browser = await chromium.launch({
-    executablePath: "/usr/bin/chromium",
-    args: [
-      "--disable-gpu",
-      "--disable-quic",
-      "--disable-background-networking",
-      "--disable-component-update",
-    ],
-  });
+  const browser = await launchChromium();
   try {
     const window = await browser.newContext({ baseURL: url, viewport: { width: 1440, height: 900 } });
     await window.addInitScript(watchPlanner);
